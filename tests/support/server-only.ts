@@ -1,0 +1,2 @@
+// Stands in for the package of this name, which refuses to load outside a server build.
+export {};
