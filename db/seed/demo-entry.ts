@@ -1,0 +1,52 @@
+/**
+ * The shape of the demo's entries. They say what a person would bring (definition, references, notes) and
+ * what shall become of it; no fact, date or trial is typed: those are computed and run.
+ */
+import type { z } from 'zod';
+import type { Definition } from '@/lib/entries/definition';
+import type { CALL_LETTERS, Reference } from '@/lib/entries/entry';
+import type { DemoCode, DemoEmail } from './demo-people';
+
+/** What shall become of a revision. */
+export type DemoPlan =
+  /** Stays on the author's table. */
+  | { become: 'draft' }
+  /** Submitted and tried; signed by those named, which is fewer than it takes. */
+  | { become: 'in-review'; signedBy?: DemoEmail[] }
+  /** Submitted and sent back. */
+  | { become: 'returned'; by: DemoEmail; reason: string }
+  /** Submitted, tried, signed by two (default: two maintainers who are not the author) and vetted when the trial passes. */
+  | { become: 'vetted'; signedBy?: [DemoEmail, DemoEmail]; sentences?: [string, string] }
+  /** The same, and afterwards withdrawn with this reason; `useInstead` is the slug of what stands in its place. */
+  | { become: 'withdrawn'; by: DemoEmail; reason: string; useInstead?: string };
+
+export interface DemoRevision {
+  title: string;
+  /** One or two sentences: what it means for the run. */
+  gist: string;
+  synonyms: string[];
+  definition: z.input<typeof Definition>;
+  references: Reference[];
+  /** Markdown; a derivation where there is no reference. */
+  notes: string;
+  author: DemoEmail;
+  plan: DemoPlan;
+  /** What changed against the revision before. */
+  changeNote?: string;
+}
+
+export interface DemoEntry extends DemoRevision {
+  letters: (typeof CALL_LETTERS)[number];
+  /** 3 in AD 003. */
+  number: number;
+  slug: string;
+  /**
+   * Revisions before this one, oldest first, each with plan 'vetted'. The next is submitted when the one
+   * before is vetted, and supersedes it when it is vetted itself.
+   */
+  earlier?: DemoRevision[];
+  /** Recorded when the revision is vetted; `revision` counts from 1, by default the last. */
+  adoptions?: { code: DemoCode; by: DemoEmail; revision?: number }[];
+  /** Remarks on the last revision. */
+  remarks?: { by: DemoEmail; part: string; text: string }[];
+}
