@@ -6,10 +6,12 @@ const unsetWhenEmpty = (value: unknown) => (value === '' ? undefined : value);
 const optional = <S extends z.ZodType>(schema: S) => z.preprocess(unsetWhenEmpty, schema.optional());
 
 const url = (what: string, protocols: readonly string[], example: string) =>
-  z.string({ error: `is missing; accepted: ${what} such as ${example}` }).refine(
-    (text) => URL.canParse(text) && protocols.includes(new URL(text).protocol),
-    `accepted: ${what} such as ${example}`,
-  );
+  z
+    .string({ error: `is missing; accepted: ${what} such as ${example}` })
+    .refine(
+      (text) => URL.canParse(text) && protocols.includes(new URL(text).protocol),
+      `accepted: ${what} such as ${example}`,
+    );
 
 const Settings = z.object({
   DATABASE_URL: url(
@@ -24,7 +26,9 @@ const Settings = z.object({
     ),
   ),
   NEXTAUTH_SECRET: optional(
-    z.string().min(32, 'accepted: at least 32 characters that nobody can guess, such as from "openssl rand -base64 32"'),
+    z
+      .string()
+      .min(32, 'accepted: at least 32 characters that nobody can guess, such as from "openssl rand -base64 32"'),
   ),
   LEVELBOOK_DEMO: z.preprocess(
     unsetWhenEmpty,

@@ -1,15 +1,11 @@
-import { drizzle } from 'drizzle-orm/node-postgres';
-import { Pool } from 'pg';
 import { afterAll } from 'vitest';
+import { db, pool } from '@/db/client';
 
 /**
- * The database of this test file, migrated and empty; `own-database.ts` has made it before the file was loaded.
- * Use cases reach the same one through `@/db/client`.
+ * The database of this test file, migrated and empty, which the use cases under test reach too:
+ * `own-database.ts` has made it before the file was loaded.
  */
 export function useTestDatabase() {
-  const pool = new Pool({ connectionString: process.env.DATABASE_URL, max: 5 });
-  // The database is dropped under whoever is still connected.
-  pool.on('error', () => {});
   afterAll(() => pool.end());
-  return { db: drizzle(pool, { casing: 'snake_case' }), pool };
+  return { db, pool };
 }
