@@ -1,0 +1,49 @@
+import 'server-only';
+import type { NextAuthOptions } from 'next-auth';
+import CredentialsProvider from 'next-auth/providers/credentials';
+import { db } from '@/db/client';
+import { env } from '@/lib/env';
+import { safeCallbackUrl } from './callback-url';
+import { networkAddress } from './network-address';
+import { signIn } from './sign-in';
+import { signInCode } from './sign-in-answer';
+
+/** A function, since a build loads every module without any setting at hand. */
+export function authOptions(): NextAuthOptions {
+  const { NEXTAUTH_SECRET, LEVELBOOK_DEMO } = env();
+  return {
+    secret: NEXTAUTH_SECRET,
+    session: { strategy: 'jwt', maxAge: 7 * 24 * 3600 },
+    pages: { signIn: '/sign-in', error: '/sign-in' },
+    providers: [
+      CredentialsProvider({
+        credentials: { email: { type: 'email' }, password: { type: 'password' } },
+        async authorize(credentials, request) {
+          const outcome = await signIn(
+            db,
+            {
+              email: String(credentials?.email ?? ''),
+              password: String(credentials?.password ?? ''),
+              address: networkAddress(new Headers(request.headers)),
+            },
+            LEVELBOOK_DEMO,
+          );
+          // next-auth hands the message of an error to the page as ?error=…
+          if (outcome.kind !== 'signed-in') throw new Error(signInCode(outcome));
+          return { id: outcome.claim.personId, sessionVersion: outcome.claim.sessionVersion };
+        },
+      }),
+    ],
+    callbacks: {
+      jwt: ({ token, user }) => (user ? { sub: user.id, sessionVersion: user.sessionVersion } : token),
+      session: ({ session, token }) => ({
+        expires: session.expires,
+        claim: { personId: token.sub ?? '', sessionVersion: token.sessionVersion },
+      }),
+      redirect({ url, baseUrl }) {
+        const path = url.startsWith(`${baseUrl}/`) ? url.slice(baseUrl.length) : url;
+        return baseUrl + safeCallbackUrl(path);
+      },
+    },
+  };
+}

@@ -1,0 +1,16 @@
+import type { SessionClaim } from './actor-of-session';
+
+declare module 'next-auth' {
+  interface User {
+    sessionVersion: number;
+  }
+  interface Session {
+    claim: SessionClaim;
+  }
+}
+
+declare module 'next-auth/jwt' {
+  interface JWT {
+    sessionVersion: number;
+  }
+}
