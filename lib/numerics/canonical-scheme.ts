@@ -26,6 +26,11 @@ export interface ScalarScheme {
   readonly timeOrder: 1 | 2;
   /** Names of the parameters, in the order of the powers of every coefficient. */
   readonly parameters: readonly string[];
+  /**
+   * What each of the equation's own numbers is in terms of `parameters`, where it is not simply one of them: a fixed
+   * number, a common symbol, or what a path makes of it. Read it through `equationNumbers` (equation-terms).
+   */
+  readonly numbers?: Readonly<Record<string, Polynomial>>;
   /** Distinct (level, offset), nonzero coefficients; newest level is 1. */
   readonly terms: readonly CanonicalTerm[];
 }
@@ -36,6 +41,11 @@ export interface SystemScheme {
   readonly dims: 1 | 2 | 3;
   readonly timeOrder: 1 | 2;
   readonly parameters: readonly string[];
+  /**
+   * What each of the equation's own numbers is in terms of `parameters`, where it is not simply one of them: a fixed
+   * number, a common symbol, or what a path makes of it. Read it through `equationNumbers` (equation-terms).
+   */
+  readonly numbers?: Readonly<Record<string, Polynomial>>;
   readonly unknowns: readonly string[];
   /** In update order. */
   readonly equations: readonly { readonly terms: readonly (CanonicalTerm & { readonly unknown: number })[] }[];
