@@ -1,0 +1,49 @@
+/** Amplification factors of a compiled scheme at one wave, and how far they stand outside the unit circle. */
+import { polynomialAt, type NumericScheme } from './numeric-scheme';
+import { complexArray, polynomialRoots, rootTolerance, type ComplexArray } from './roots';
+
+/** All roots at one wave, the stationary ones (z = 1) last; their number is roots per wave. */
+export function amplificationFactors(
+  scheme: NumericScheme,
+  parameters: readonly number[],
+  theta: readonly number[],
+): ComplexArray {
+  const roots = polynomialRoots(polynomialAt(scheme, parameters, theta));
+  if (scheme.stationaryRoots === 0) return roots;
+  const out = complexArray(roots.re.length + scheme.stationaryRoots);
+  out.re.set(roots.re);
+  out.im.set(roots.im);
+  out.re.fill(1, roots.re.length);
+  return out;
+}
+
+/** Largest |z| − 1 − (bound on its rounding error) over the roots; positive only where a root is outside for certain. */
+export function excessOf(polynomial: ComplexArray, roots: ComplexArray = polynomialRoots(polynomial)): number {
+  let worst = -Infinity;
+  for (let k = 0; k < roots.re.length; k++) {
+    const modulus = Math.hypot(roots.re[k]!, roots.im[k]!);
+    if (modulus <= worst + 1) continue;
+    if (!Number.isFinite(modulus)) return Infinity;
+    worst = Math.max(worst, modulus - 1 - (modulus > 0.9 ? rootTolerance(polynomial, roots.re[k]!, roots.im[k]!) : 0));
+  }
+  return worst;
+}
+
+export function largestModulus(roots: ComplexArray): number {
+  let worst = 0;
+  for (let k = 0; k < roots.re.length; k++) worst = Math.max(worst, Math.hypot(roots.re[k]!, roots.im[k]!));
+  return worst;
+}
+
+/** Smallest distance between two roots that both stand within `near` of the unit circle; Infinity where no two do. */
+export function unitRootSeparation(roots: ComplexArray, near = 1e-3): number {
+  let least = Infinity;
+  for (let k = 1; k < roots.re.length; k++)
+    for (let j = 0; j < k; j++) {
+      const close =
+        Math.abs(Math.hypot(roots.re[k]!, roots.im[k]!) - 1) < near &&
+        Math.abs(Math.hypot(roots.re[j]!, roots.im[j]!) - 1) < near;
+      if (close) least = Math.min(least, Math.hypot(roots.re[k]! - roots.re[j]!, roots.im[k]! - roots.im[j]!));
+    }
+  return least;
+}
