@@ -22,9 +22,9 @@ for (const { database, file, ...cluster } of CLUSTERS) {
       ...cluster,
       wishPort: port ?? cluster.wishPort,
       samePort: port !== null,
-      databases: [database],
     });
     port = running.port;
+    running.ensureDatabase(database);
     writePrivately(path.join(DATA, file), `${running.url(database)}\n`);
     return running;
   };

@@ -1,0 +1,59 @@
+/** The parts of a running site: schema, demo, web server, worker. */
+import net from 'node:net';
+import { run, startChild } from './children.mjs';
+import { until } from './processes.mjs';
+
+/** Node with TypeScript. The condition lets files that belong on a server load outside Next. */
+const TYPESCRIPT = ['--conditions=react-server', '--import', 'tsx'];
+
+/** @throws {Error} when the program ends with another status than 0 */
+export async function runProgram(file, env, log) {
+  const status = await run(process.execPath, [...TYPESCRIPT, file], { env, log });
+  if (status !== 0) throw new Error(`${file} failed.`);
+}
+
+/** Newest schema, and the demo where the settings ask for it; both do nothing that is done already. */
+export async function prepareDatabase(env) {
+  await runProgram('db/migrate.ts', env, 'migrate');
+  if (env.LEVELBOOK_DEMO === '1') await runProgram('db/seed/seed.ts', env, 'seed');
+}
+
+async function answers(port, host) {
+  const reachable = host === '0.0.0.0' ? '127.0.0.1' : host;
+  try {
+    await fetch(`http://${reachable}:${port}/api/health`, { signal: AbortSignal.timeout(5_000) });
+    return true;
+  } catch {
+    return false;
+  }
+}
+
+/** Resolves once the server answers, with whatever it says about its health. */
+export async function startWeb({ env, host, port, production }) {
+  const command = production ? 'start' : 'dev';
+  const args = ['node_modules/next/dist/bin/next', command, '-H', host, '-p', String(port)];
+  const part = startChild('web', process.execPath, args, env);
+  let how = null;
+  void part.ended.then((text) => (how = text));
+  await until(() => how !== null || answers(port, host), 120_000, 100);
+  if (how !== null) throw new Error(`the web server ended at once (${how})`);
+  return part;
+}
+
+function databaseListens({ DATABASE_URL: address }) {
+  const { hostname, port } = new URL(address);
+  return new Promise((resolve) => {
+    const socket = net.connect({ host: hostname, port: Number(port || 5432), timeout: 3_000 });
+    const answer = (is) => () => {
+      socket.destroy();
+      resolve(is);
+    };
+    socket.once('connect', answer(true)).once('error', answer(false)).once('timeout', answer(false));
+  });
+}
+
+/** A worker without a database would only end again: it is started once the database listens. */
+export async function startWorker({ env }) {
+  await until(() => databaseListens(env), Infinity, 1_000);
+  return startChild('worker', process.execPath, [...TYPESCRIPT, 'worker.ts'], env);
+}

@@ -1,0 +1,111 @@
+/**
+ * `npm start`: everything from nothing to a running site. `npm run dev`: the same with the development server.
+ * Node's own modules only: this runs before anything is installed.
+ */
+import { ensureBuild } from './build.mjs';
+import { endAllChildren } from './children.mjs';
+import { keepRunning } from './keep-running.mjs';
+import { releaseLock, takeLock, tellOthers } from './lock.mjs';
+import { ensureNodePackages } from './node-packages.mjs';
+import { startCluster } from './postgres.mjs';
+import { livingProcess } from './processes.mjs';
+import { say, seconds, step } from './say.mjs';
+import { chooseAddress, readEnvFile, settingsFor } from './settings.mjs';
+import { prepareDatabase, startWeb, startWorker } from './site.mjs';
+import { ensureSystemPackages } from './system-packages.mjs';
+
+const LOCK = 'start';
+const production = !process.argv.includes('--dev');
+const since = Date.now();
+
+/** What runs, in the order of starting; stopped from the end. */
+const kept = [];
+let stopping = null;
+
+function stop(status) {
+  stopping ??= (async () => {
+    for (const one of kept.reverse()) await one.stop();
+    await endAllChildren();
+    releaseLock(LOCK);
+    process.exit(status);
+  })();
+  return stopping;
+}
+
+for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) {
+  process.on(signal, () => {
+    if (!stopping) say(`\nStopping (${signal}).`);
+    void stop(0);
+  });
+}
+
+/** npm may be killed without a word to us; nobody could then stop the site from its terminal. */
+function stopWithNpm() {
+  if (!process.env.npm_lifecycle_event) return;
+  const npm = process.ppid;
+  setInterval(() => {
+    if (process.ppid !== npm || !livingProcess(npm)) void stop(0);
+  }, 1_000).unref();
+}
+
+async function keep(name, start) {
+  const one = await keepRunning({ name, start });
+  if (stopping) return one.stop();
+  kept.push(one);
+  void one.gaveUp.then((sentence) => {
+    say(sentence);
+    return stop(1);
+  });
+}
+
+/** Our own server, unless DATABASE_URL names another. */
+async function databaseUrl() {
+  if (process.env.DATABASE_URL) return process.env.DATABASE_URL;
+  let cluster = null;
+  await step('database server', () =>
+    keep('database server', async () => {
+      // Web and worker know the address, so that a second start must have the same.
+      cluster = await startCluster({
+        name: 'pg',
+        wishPort: cluster?.port ?? 54329,
+        samePort: cluster !== null,
+      });
+      cluster.ensureDatabase('levelbook');
+      return cluster;
+    }),
+  );
+  return cluster.url('levelbook');
+}
+
+async function main() {
+  const holder = takeLock(LOCK);
+  if (holder) {
+    const where = holder.address ? `at ${holder.address}` : 'and is still getting ready';
+    say(`Levelbook already runs in this folder ${where}. To stop it: Ctrl-C in its window, or kill ${holder.pid}`);
+    process.exit(1);
+  }
+  stopWithNpm();
+  say(production ? 'Levelbook is getting ready.' : 'Levelbook is getting ready for development.');
+  readEnvFile();
+  const ownServer = !process.env.DATABASE_URL;
+  await ensureSystemPackages({ withTests: false, withServer: ownServer });
+  await ensureNodePackages();
+  const { host, port } = await chooseAddress();
+  const env = settingsFor({ databaseUrl: await databaseUrl(), port, demo: ownServer, production });
+  await step('schema and content of the database', () => prepareDatabase(env));
+  if (production) await ensureBuild();
+  await step('web server', () => keep('web server', () => startWeb({ env, host, port, production })));
+  await step('worker', () => keep('worker', () => startWorker({ env })));
+
+  const address = process.env.NEXTAUTH_URL ?? `http://localhost:${port}`;
+  tellOthers(LOCK, { address });
+  say(`\nLevelbook is ready after ${seconds(Date.now() - since)}: ${address}`);
+  if (env.LEVELBOOK_DEMO === '1') say('The accounts of the demo are shown on the sign-in page.');
+  say('Ctrl-C stops it.');
+}
+
+main().catch((error) => {
+  // While stopping, steps fail because their children were ended.
+  if (!stopping) say(`\nLevelbook could not start: ${error.message}`);
+  void stop(1);
+});
