@@ -22,6 +22,7 @@ const REPORTS = path.join(DATA, 'reports');
 
 /** What must be stopped in the end, the latest first. */
 const running = [];
+let finishing = false;
 
 async function keepForNow(part) {
   running.unshift(part);
@@ -30,6 +31,8 @@ async function keepForNow(part) {
 
 /** Stops what the tests started, and reports the count; without any test that passed or failed it is a failure. */
 async function finish({ passed, failed }) {
+  if (finishing) return;
+  finishing = true;
   for (const part of running) await part.stop();
   await endAllChildren();
   releaseLock(LOCK);
