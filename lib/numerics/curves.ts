@@ -1,5 +1,5 @@
 /** Curves of a scheme over the wavenumber, as data: damping, phase and group speed, computational roots apart. */
-import { exactExponent, parameterLookup } from './exact-wave';
+import { equationNumbersAt, exactExponent } from './exact-wave';
 import { coefficientsAt, cosSin, type NumericScheme } from './numeric-scheme';
 import { trackPrincipalRoot, type TrackedRoot } from './principal-root';
 
@@ -61,7 +61,7 @@ function curvePoint(
   direction: readonly number[],
   tracked: TrackedRoot,
 ): CurvePoint {
-  const value = parameterLookup(scheme.parameters, parameters);
+  const value = equationNumbersAt(scheme, parameters);
   const exponentAt = (t: number) =>
     exactExponent(
       scheme.equation,

@@ -1,9 +1,10 @@
 /** The exact solution's exponent sigma over one step for the wave e^(i theta j): u(t + dt) = e^sigma u(t). */
 import type { Equation } from './equation';
 import { CONVENTIONS } from './equation';
+import type { NumericScheme } from './numeric-scheme';
 
 /**
- * @param value  value of a parameter by name; a common symbol (`r`, `lambda`) stands for all directions
+ * @param value  value of one of the equation's own numbers by name
  * @param theta  one angle per dimension, radians
  * @returns [re, im] of sigma; for u_tt equations the wave that travels towards growing x
  */
@@ -38,12 +39,13 @@ export function exactExponent(
   }
 }
 
-/** Looks parameters up by name among values in the scheme's order; a common symbol answers for each direction. */
-export function parameterLookup(names: readonly string[], values: readonly number[]): (name: string) => number {
-  return (name) => {
-    const own = names.indexOf(name);
-    if (own >= 0) return values[own]!;
-    const common = names.indexOf(name.replace(/_[xyz]$/, ''));
-    return common >= 0 ? values[common]! : values[0]!;
-  };
+/** Values of the equation's own numbers by name, at values of the scheme's parameters. */
+export function equationNumbersAt(scheme: NumericScheme, parameters: readonly number[]): (name: string) => number {
+  const values = new Map(
+    Object.entries(scheme.numbers).map(([name, monomials]) => [
+      name,
+      monomials.reduce((sum, m) => sum + m.re * m.powers.reduce((product, e, k) => product * parameters[k]! ** e, 1), 0),
+    ]),
+  );
+  return (name) => values.get(name) ?? 0;
 }

@@ -7,14 +7,22 @@ import type { CanonicalScheme, CanonicalTerm, ScalarScheme } from './canonical-s
 import type { Equation } from './equation';
 import { systemCharacteristic } from './system-characteristic';
 import { complexArray, type ComplexArray } from './roots';
+import { equationNumbers } from './equation-terms';
+import type { Polynomial } from './polynomial';
 import { toNumber } from './rational';
+
+export interface NumericMonomial {
+  readonly powers: readonly number[];
+  readonly re: number;
+  readonly im: number;
+}
 
 export interface NumericTerm {
   /** Power of z, 0 at the oldest level. */
   readonly z: number;
   readonly offset: readonly number[];
   /** Value of the coefficient is Σ (re + i im) Π parameter^power. */
-  readonly monomials: readonly { readonly powers: readonly number[]; readonly re: number; readonly im: number }[];
+  readonly monomials: readonly NumericMonomial[];
 }
 
 export interface NumericScheme {
@@ -23,6 +31,8 @@ export interface NumericScheme {
   readonly dims: 1 | 2 | 3;
   readonly timeOrder: 1 | 2;
   readonly parameters: readonly string[];
+  /** The equation's own numbers as polynomials in `parameters`. */
+  readonly numbers: Readonly<Record<string, readonly NumericMonomial[]>>;
   /** Roots per wave that depend on it: newest level − oldest level. */
   readonly degree: number;
   /** Roots z = 1 of every wave, left out of the polynomial. */
@@ -34,11 +44,14 @@ export interface NumericScheme {
   readonly mirrored: readonly boolean[];
 }
 
+const numericMonomials = (polynomial: Polynomial): NumericMonomial[] =>
+  polynomial.map((m) => ({ powers: m.powers, re: toNumber(m.re), im: toNumber(m.im) }));
+
 function numericTerm(term: CanonicalTerm, oldest: number): NumericTerm {
   return {
     z: Math.round(toNumber(term.level) - oldest),
     offset: term.offset.map(toNumber),
-    monomials: term.coefficient.map((m) => ({ powers: m.powers, re: toNumber(m.re), im: toNumber(m.im) })),
+    monomials: numericMonomials(term.coefficient),
   };
 }
 
@@ -75,6 +88,9 @@ export function compileScheme(scheme: CanonicalScheme): NumericScheme {
     dims: scheme.dims,
     timeOrder: scheme.timeOrder,
     parameters: scheme.parameters,
+    numbers: Object.fromEntries(
+      [...equationNumbers(scheme)].map(([name, polynomial]) => [name, numericMonomials(polynomial)]),
+    ),
     degree: Math.round(Math.max(...levels) - oldest),
     stationaryRoots,
     terms,

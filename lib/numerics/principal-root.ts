@@ -3,7 +3,7 @@
  * waves. Continuation predicts linearly and halves its step until the prediction tells the roots apart, since
  * the nearest value alone follows the wrong root where two of them cross (leapfrog at theta = pi/2).
  */
-import { exactExponent, parameterLookup } from './exact-wave';
+import { equationNumbersAt, exactExponent } from './exact-wave';
 import { coefficientsAt, polynomialFrom, type NumericScheme } from './numeric-scheme';
 import { polynomialRoots, type ComplexArray } from './roots';
 import { CONVENTIONS } from './equation';
@@ -63,7 +63,7 @@ function follow(
         direction.map((d) => d * t),
       ),
     );
-  const value = parameterLookup(scheme.parameters, parameters);
+  const value = equationNumbersAt(scheme, parameters);
   const reach = Math.max(...direction.map(Math.abs)) || 1;
   // Small enough that sigma is below 1e-3, so that e^sigma singles out the root even near a computational one.
   let t = 1e-3 / reach;
@@ -157,6 +157,8 @@ export function trackPrincipalRoot(
       ),
     );
     const { index } = nearestTwo(roots, point.re, point.im);
-    return { ...point, roots, index, re: roots.re[index]!, im: roots.im[index]! };
+    const [re, im] = [roots.re[index]!, roots.im[index]!];
+    const turned = Math.atan2(im * point.re - re * point.im, re * point.re + im * point.im);
+    return { ...point, roots, index, re, im, argument: point.argument + turned };
   });
 }
