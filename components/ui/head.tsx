@@ -1,0 +1,33 @@
+import Link from 'next/link';
+import { BrandMark } from '@/components/marks/brand-mark';
+import type { Actor } from '@/lib/people/actor';
+import { AccountMenu } from './account-menu';
+import { NarrowMenu } from './narrow-menu';
+import { ThemeButton } from './theme-button';
+import { ToolList } from './tool-list';
+
+/** The head of every page: words above a long tube, the bubble under the tool that is open. */
+export function Head({ actor, signOutEverywhere }: { actor: Actor; signOutEverywhere: () => Promise<void> }) {
+  return (
+    <header className="head">
+      <a className="skip" href="#content">
+        Skip to the page
+      </a>
+      <div className="wrap row">
+        <Link className="brand" href="/">
+          <BrandMark />
+          Levelbook
+        </Link>
+        <nav className="tools" aria-label="Tools">
+          <ToolList />
+        </nav>
+        <div className="end">
+          <ThemeButton />
+          <AccountMenu name={actor.name} role={actor.role} signOutEverywhere={signOutEverywhere} />
+        </div>
+        <NarrowMenu name={actor.name} role={actor.role} signOutEverywhere={signOutEverywhere} />
+      </div>
+      <div className="tube" />
+    </header>
+  );
+}
