@@ -57,12 +57,24 @@ function Drawing({ model, measures }: { model: SketchModel; measures: Measures }
   const crowded = column < 40;
 
   return (
-    <svg className="sten" viewBox={`0 0 ${width} ${height}`} style={{ maxWidth: width * 1.1 }} role="img" aria-label={model.sentence}>
+    <svg
+      className="sten"
+      viewBox={`0 0 ${width} ${height}`}
+      style={{ maxWidth: width * 1.1 }}
+      role="img"
+      aria-label={model.sentence}
+    >
       {fan && (
         <>
-          <path d={`M${xOf(0)} ${top}L${xOf(fan.lo)} ${yOf(firstBelow)}L${xOf(fan.hi)} ${yOf(firstBelow)}Z`} className="s-cone" />
+          <path
+            d={`M${xOf(0)} ${top}L${xOf(fan.lo)} ${yOf(firstBelow)}L${xOf(fan.hi)} ${yOf(firstBelow)}Z`}
+            className="s-cone"
+          />
           {gaps > 1 && (
-            <path d={`M${xOf(fan.lo)} ${yOf(firstBelow)}L${xOf(Math.max(fan.lo * depth, -reach))} ${bottom}H${xOf(Math.min(fan.hi * depth, reach))}L${xOf(fan.hi)} ${yOf(firstBelow)}Z`} className="s-cone2" />
+            <path
+              d={`M${xOf(fan.lo)} ${yOf(firstBelow)}L${xOf(Math.max(fan.lo * depth, -reach))} ${bottom}H${xOf(Math.min(fan.hi * depth, reach))}L${xOf(fan.hi)} ${yOf(firstBelow)}Z`}
+              className="s-cone2"
+            />
           )}
         </>
       )}
@@ -95,7 +107,10 @@ function Drawing({ model, measures }: { model: SketchModel; measures: Measures }
         </>
       )}
       {model.path && fan && (
-        <path d={`M${xOf(0)} ${top}L${xOf(-Math.min(model.path.value * depth, reach))} ${top + (Math.min(model.path.value * depth, reach) / model.path.value) * (step * (gaps / depth))}`} className="s-char" />
+        <path
+          d={`M${xOf(0)} ${top}L${xOf(-Math.min(model.path.value * depth, reach))} ${top + (Math.min(model.path.value * depth, reach) / model.path.value) * (step * (gaps / depth))}`}
+          className="s-char"
+        />
       )}
       {model.path && fan && !narrow && (
         <text x={xOf(-model.path.value * 0.5) - 14} y={top + step * 0.5} className="s-note s-notec" textAnchor="end">
@@ -107,7 +122,10 @@ function Drawing({ model, measures }: { model: SketchModel; measures: Measures }
       )}
       {model.partsAt !== null && (
         <>
-          <path d={`M${xOf(0)} ${yOf(model.partsAt) - 14}l5 4.6-10 4.7 10 4.7-10 4.7 10 4.7-5 4.6`} className="s-mode" />
+          <path
+            d={`M${xOf(0)} ${yOf(model.partsAt) - 14}l5 4.6-10 4.7 10 4.7-10 4.7 10 4.7-5 4.6`}
+            className="s-mode"
+          />
           {!narrow && (
             <>
               <path d={`M${xOf(0) + 12} ${yOf(model.partsAt) + 16}l32 20`} className="s-lead" />
@@ -121,9 +139,22 @@ function Drawing({ model, measures }: { model: SketchModel; measures: Measures }
           )}
         </>
       )}
-      {coupled.length > 0 && <path d={`M${xOf(-reach)} ${top - 3.5}H${xOf(reach)}M${xOf(-reach)} ${top + 3.5}H${xOf(reach)}`} className="s-yoke" />}
+      {coupled.length > 0 && (
+        <path
+          d={`M${xOf(-reach)} ${top - 3.5}H${xOf(reach)}M${xOf(-reach)} ${top + 3.5}H${xOf(reach)}`}
+          className="s-yoke"
+        />
+      )}
       {coupled.map((site) => (
-        <rect key={site.offset[0]} x={xOf(site.offset[0] ?? 0) - r * 1.6} y={top - r * 1.13} width={r * 3.2} height={r * 2.26} rx={r * 1.13} className="s-coup" />
+        <rect
+          key={site.offset[0]}
+          x={xOf(site.offset[0] ?? 0) - r * 1.6}
+          y={top - r * 1.13}
+          width={r * 3.2}
+          height={r * 2.26}
+          rx={r * 1.13}
+          className="s-coup"
+        />
       ))}
       <Bubble x={xOf(0)} y={top} r={r} />
       {known.map((site) => {
@@ -133,7 +164,12 @@ function Drawing({ model, measures }: { model: SketchModel; measures: Measures }
           <g key={`${site.level}:${site.offset[0]}`}>
             <circle cx={x} cy={yOf(site.level)} r={r} className="s-known" />
             {site.weight && !(crowded && site.weight.length > 3) && (
-              <text x={towardsPath ? x - weightGap : x + weightGap} y={yOf(site.level) - weightGap - 1} className="s-w" textAnchor={towardsPath ? 'end' : 'start'}>
+              <text
+                x={towardsPath ? x - weightGap : x + weightGap}
+                y={yOf(site.level) - weightGap - 1}
+                className="s-w"
+                textAnchor={towardsPath ? 'end' : 'start'}
+              >
                 {site.weight}
               </text>
             )}
@@ -148,7 +184,15 @@ function Drawing({ model, measures }: { model: SketchModel; measures: Measures }
       <path d={`M${left + (narrow ? 0 : 38)} ${halo}H${right + (narrow ? 8 : -30)}`} className="s-level" />
       {model.halo.map((cells, side) =>
         cells === 0 ? null : (
-          <rect key={side} x={side === 0 ? xOf(-cells) - column * 0.32 : xOf(1) - column * 0.32} y={halo - 6} width={column * (cells - 1 + 0.64)} height="12" className="s-halo" fill="url(#hatchi)" />
+          <rect
+            key={side}
+            x={side === 0 ? xOf(-cells) - column * 0.32 : xOf(1) - column * 0.32}
+            y={halo - 6}
+            width={column * (cells - 1 + 0.64)}
+            height="12"
+            className="s-halo"
+            fill="url(#hatchi)"
+          />
         ),
       )}
       <text x={left - 12} y={halo + 5} className="s-lab" textAnchor="end">

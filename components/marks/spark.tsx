@@ -21,7 +21,14 @@ function runs(values: readonly (number | null)[]): string[] {
 export function Spark({ curves }: { curves: FactsSummary['curves'] }) {
   if (!curves) return <span className="spark" />;
   return (
-    <svg className="spark" width={WIDTH} height="52" viewBox={`0 0 ${WIDTH} 52`} role="img" aria-label="damping and phase speed against phase angle">
+    <svg
+      className="spark"
+      width={WIDTH}
+      height="52"
+      viewBox={`0 0 ${WIDTH} 52`}
+      role="img"
+      aria-label="damping and phase speed against phase angle"
+    >
       <path d={`M0 ${yOf(1).toFixed(1)}H${WIDTH}`} className="p-ref" />
       <path d={`M0 ${FLOOR}H${WIDTH}`} className="p-ax" />
       {runs(curves.phase).map((points) => (

@@ -24,7 +24,12 @@ function ticksOf(span: number, wide: boolean): number[] {
 function Drawing({ reading, width, wide }: { reading: StaffReading; width: number; wide: boolean }) {
   const xOf = (value: number) => Math.max(0, Math.min(width, (value / reading.span) * width));
   const stretches = reading.intervals
-    .map(({ lo, hi }) => ({ from: xOf(Math.max(0, lo ?? 0)), to: hi === null ? width : xOf(hi), open: hi === null || hi > reading.span, starts: lo !== null && lo > 0 }))
+    .map(({ lo, hi }) => ({
+      from: xOf(Math.max(0, lo ?? 0)),
+      to: hi === null ? width : xOf(hi),
+      open: hi === null || hi > reading.span,
+      starts: lo !== null && lo > 0,
+    }))
     .filter(({ from, to }) => to > from);
   const last = stretches.at(-1);
   const words = last && !last.open ? last.to : null;
@@ -47,13 +52,23 @@ function Drawing({ reading, width, wide }: { reading: StaffReading; width: numbe
       {ticksOf(reading.span, wide).map((value) => (
         <g key={value}>
           <path d={`M${xOf(value)} 56v6`} className="g-base" />
-          <text x={xOf(value)} y="76" className="p-t" textAnchor={value === 0 ? 'start' : value === reading.span ? 'end' : 'middle'}>
+          <text
+            x={xOf(value)}
+            y="76"
+            className="p-t"
+            textAnchor={value === 0 ? 'start' : value === reading.span ? 'end' : 'middle'}
+          >
             {decimalText(value, 3)}
           </text>
         </g>
       ))}
       {words === null ? (
-        <text x={stretches.length === 0 ? 0 : width} y="18" textAnchor={stretches.length === 0 ? 'start' : 'end'} className={stretches.length === 0 ? 'p-l p-fault' : 'p-l'}>
+        <text
+          x={stretches.length === 0 ? 0 : width}
+          y="18"
+          textAnchor={stretches.length === 0 ? 'start' : 'end'}
+          className={stretches.length === 0 ? 'p-l p-fault' : 'p-l'}
+        >
           {stretches.length === 0 ? reading.beyond : reading.below}
         </text>
       ) : (
@@ -63,7 +78,12 @@ function Drawing({ reading, width, wide }: { reading: StaffReading; width: numbe
               {reading.below}
             </text>
           )}
-          <text x={words + 10 > width - 60 ? words - 10 : words + 10} y="18" textAnchor={words + 10 > width - 60 ? 'end' : 'start'} className="p-l p-fault">
+          <text
+            x={words + 10 > width - 60 ? words - 10 : words + 10}
+            y="18"
+            textAnchor={words + 10 > width - 60 ? 'end' : 'start'}
+            className="p-l p-fault"
+          >
             {wide && words + 10 <= width - reading.beyond.length * 6.4 ? reading.beyond : 'grows'}
           </text>
         </>

@@ -20,7 +20,11 @@ export function StaffGauge({ summary, span = 2 }: { summary: FactsSummary; span?
       {from > 0.5 && <rect x="0" y="2" width={from} height="12" fill="url(#hatch)" opacity=".8" />}
       {reached > 0 && <StaffBlocks x={from} y={2} tenth={perUnit / 10} half={6} end={reached} />}
       <path d={`M0 14.5H${LENGTH}`} className="g-base" />
-      {beyond ? <path d={`M${LENGTH} 14.5h6M${LENGTH + 3} 11.5l3 3-3 3`} className="g-base" /> : reached > 0 && <path d={`M${reached} 0V17`} className="g-lim" />}
+      {beyond ? (
+        <path d={`M${LENGTH} 14.5h6M${LENGTH + 3} 11.5l3 3-3 3`} className="g-base" />
+      ) : (
+        reached > 0 && <path d={`M${reached} 0V17`} className="g-lim" />
+      )}
     </svg>
   );
 }

@@ -15,4 +15,6 @@ const LOOKS = {
 } as const satisfies Record<FindingOutcome, string>;
 
 /** Verdict of a finding: a small bubble "holds", a small hatched box "fails", a plain word otherwise. */
-export const Verdict = ({ outcome }: { outcome: FindingOutcome }) => <span className={LOOKS[outcome]}>{WORDS[outcome]}</span>;
+export const Verdict = ({ outcome }: { outcome: FindingOutcome }) => (
+  <span className={LOOKS[outcome]}>{WORDS[outcome]}</span>
+);

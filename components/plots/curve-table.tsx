@@ -1,7 +1,25 @@
 import type { ThetaPlotData } from './theta-plot';
 
 const STEPS = 16;
-const PARTS = ['0', 'π/16', 'π/8', '3π/16', 'π/4', '5π/16', '3π/8', '7π/16', 'π/2', '9π/16', '5π/8', '11π/16', '3π/4', '13π/16', '7π/8', '15π/16', 'π'];
+const PARTS = [
+  '0',
+  'π/16',
+  'π/8',
+  '3π/16',
+  'π/4',
+  '5π/16',
+  '3π/8',
+  '7π/16',
+  'π/2',
+  '9π/16',
+  '5π/8',
+  '11π/16',
+  '3π/4',
+  '13π/16',
+  '7π/8',
+  '15π/16',
+  'π',
+];
 
 /** The numbers of a plot as a table, at every sixteenth of π. */
 export function CurveTable({ data }: { data: ThetaPlotData }) {

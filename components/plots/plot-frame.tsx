@@ -13,18 +13,25 @@ export const WIDE_PLOT: PlotSize = { width: 560, height: 316, left: 36, right: 5
 export const NARROW_PLOT: PlotSize = { width: 358, height: 270, left: 30, right: 346, top: 50, bottom: 228 };
 
 export const thetaX = (size: PlotSize, theta: number) => size.left + (theta / Math.PI) * (size.right - size.left);
-export const valueY = (size: PlotSize, value: number, [low, high]: readonly [number, number]) => size.bottom - ((value - low) / (high - low)) * (size.bottom - size.top);
+export const valueY = (size: PlotSize, value: number, [low, high]: readonly [number, number]) =>
+  size.bottom - ((value - low) / (high - low)) * (size.bottom - size.top);
 
 const THETA_TICKS = ['0', 'π/4', 'π/2', '3π/4', 'π'];
 const POINTS_A_WAVE = [16, 8, 4, 2];
 
 /** Points of a polyline, cut where the curve leaves the plot by far or has no value; coordinates to 0.1. */
-export function polyline(size: PlotSize, theta: ArrayLike<number>, values: ArrayLike<number | null>, range: readonly [number, number]): string[] {
+export function polyline(
+  size: PlotSize,
+  theta: ArrayLike<number>,
+  values: ArrayLike<number | null>,
+  range: readonly [number, number],
+): string[] {
   const lines: string[][] = [[]];
   const reach = range[1] - range[0];
   for (let k = 0; k < theta.length; k++) {
     const value = values[k] ?? null;
-    if (value === null || !Number.isFinite(value) || value > range[1] + reach || value < range[0] - reach) lines.push([]);
+    if (value === null || !Number.isFinite(value) || value > range[1] + reach || value < range[0] - reach)
+      lines.push([]);
     else lines.at(-1)!.push(`${thetaX(size, theta[k]!).toFixed(1)},${valueY(size, value, range).toFixed(1)}`);
   }
   return lines.filter((line) => line.length > 1).map((line) => line.join(' '));
@@ -49,8 +56,23 @@ interface Props {
 export function ThetaFrame({ size, title, label, range, ticks, growthAbove, reference, clip, children, over }: Props) {
   const { left, right, top, bottom, width, height } = size;
   return (
-    <svg className="plot" viewBox={`0 0 ${width} ${height}`} style={{ maxWidth: width * 1.1 }} role="img" aria-label={label}>
-      {growthAbove !== undefined && <rect x={left} y={top} width={right - left} height={valueY(size, growthAbove, range) - top} fill="url(#hatch)" className="p-hatch" />}
+    <svg
+      className="plot"
+      viewBox={`0 0 ${width} ${height}`}
+      style={{ maxWidth: width * 1.1 }}
+      role="img"
+      aria-label={label}
+    >
+      {growthAbove !== undefined && (
+        <rect
+          x={left}
+          y={top}
+          width={right - left}
+          height={valueY(size, growthAbove, range) - top}
+          fill="url(#hatch)"
+          className="p-hatch"
+        />
+      )}
       {ticks.map(({ at, text }) => (
         <g key={at}>
           <path d={`M${left} ${valueY(size, at, range)}H${right}`} className="p-grid" />

@@ -22,20 +22,29 @@ const powerOfTen = (exponent: number) =>
 
 /** Largest error against points, both logarithmic, with the measured slope. */
 export function RefinementPlot({ series }: { series: RefinementSeries }) {
-  const drawable = series.grids.map((points, k) => ({ points, error: series.errors[k] ?? 0 })).filter(({ error }) => error > 0);
+  const drawable = series.grids
+    .map((points, k) => ({ points, error: series.errors[k] ?? 0 }))
+    .filter(({ error }) => error > 0);
   if (drawable.length < 2) return null;
   const logs = drawable.map(({ error }) => Math.log10(error));
   const low = Math.floor(Math.min(...logs) - 0.05);
   const high = Math.ceil(Math.max(...logs) + 0.05);
   const step = Math.max(1, Math.ceil((high - low) / 6));
   const [first, last] = [Math.log2(drawable[0]!.points), Math.log2(drawable.at(-1)!.points)];
-  const xOf = (points: number) => SIZE.left + 20 + ((Math.log2(points) - first) / (last - first)) * (SIZE.right - SIZE.left - 40);
+  const xOf = (points: number) =>
+    SIZE.left + 20 + ((Math.log2(points) - first) / (last - first)) * (SIZE.right - SIZE.left - 40);
   const yOf = (log: number) => SIZE.bottom - ((log - low) / (high - low)) * (SIZE.bottom - SIZE.top);
   const middle = drawable[Math.floor(drawable.length / 2)]!;
   const spoken = drawable.map(({ points, error }) => `${points} points ${error.toExponential(1)}`).join(', ');
 
   return (
-    <svg className="plot" viewBox={`0 0 ${SIZE.width} ${SIZE.height}`} style={{ maxWidth: SIZE.width * 1.1 }} role="img" aria-label={`Largest error against points: ${spoken}; slope ${series.slope.toFixed(2)}`}>
+    <svg
+      className="plot"
+      viewBox={`0 0 ${SIZE.width} ${SIZE.height}`}
+      style={{ maxWidth: SIZE.width * 1.1 }}
+      role="img"
+      aria-label={`Largest error against points: ${spoken}; slope ${series.slope.toFixed(2)}`}
+    >
       {Array.from({ length: Math.floor((high - low) / step) + 1 }, (_, k) => low + k * step).map((exponent) => (
         <g key={exponent}>
           <path d={`M${SIZE.left} ${yOf(exponent)}H${SIZE.right}`} className="p-grid" />
@@ -53,7 +62,10 @@ export function RefinementPlot({ series }: { series: RefinementSeries }) {
         </g>
       ))}
       <path d={`M${SIZE.left} ${SIZE.top}V${SIZE.bottom}H${SIZE.right}`} className="p-ax" />
-      <polyline points={drawable.map(({ points }, k) => `${xOf(points).toFixed(1)},${yOf(logs[k]!).toFixed(1)}`).join(' ')} className="p-line c1" />
+      <polyline
+        points={drawable.map(({ points }, k) => `${xOf(points).toFixed(1)},${yOf(logs[k]!).toFixed(1)}`).join(' ')}
+        className="p-line c1"
+      />
       {drawable.map(({ points }, k) => (
         <circle key={points} cx={xOf(points)} cy={yOf(logs[k]!)} r="3.5" className="p-dot c1" />
       ))}

@@ -12,11 +12,32 @@ function save(name: string, type: string, text: string) {
 }
 
 const csv = ({ theta, curves }: ThetaPlotData) =>
-  [['theta', ...curves.map((curve) => curve.name)], ...theta.map((angle, k) => [angle, ...curves.map((curve) => curve.values[k] ?? '')])]
-    .map((row) => row.map((cell) => (typeof cell === 'string' && /[",\n]/.test(cell) ? `"${cell.replace(/"/g, '""')}"` : String(cell))).join(','))
+  [
+    ['theta', ...curves.map((curve) => curve.name)],
+    ...theta.map((angle, k) => [angle, ...curves.map((curve) => curve.values[k] ?? '')]),
+  ]
+    .map((row) =>
+      row
+        .map((cell) =>
+          typeof cell === 'string' && /[",\n]/.test(cell) ? `"${cell.replace(/"/g, '""')}"` : String(cell),
+        )
+        .join(','),
+    )
     .join('\r\n') + '\r\n';
 
-const DRAWN = ['fill', 'stroke', 'stroke-width', 'stroke-dasharray', 'stroke-linejoin', 'font-family', 'font-size', 'font-style', 'font-weight', 'paint-order', 'opacity'] as const;
+const DRAWN = [
+  'fill',
+  'stroke',
+  'stroke-width',
+  'stroke-dasharray',
+  'stroke-linejoin',
+  'font-family',
+  'font-size',
+  'font-style',
+  'font-weight',
+  'paint-order',
+  'opacity',
+] as const;
 
 /** The drawing with its looks written into it, so that it stands alone outside the page. */
 function standalone(drawing: SVGSVGElement): string {
@@ -31,7 +52,13 @@ function standalone(drawing: SVGSVGElement): string {
   const hatch = document.getElementById('hatch')?.cloneNode(true);
   if (hatch instanceof SVGElement) {
     const original = document.querySelector('#hatch path');
-    if (original) hatch.querySelector('path')?.setAttribute('style', `stroke:${getComputedStyle(original).stroke};stroke-width:${getComputedStyle(original).strokeWidth}`);
+    if (original)
+      hatch
+        .querySelector('path')
+        ?.setAttribute(
+          'style',
+          `stroke:${getComputedStyle(original).stroke};stroke-width:${getComputedStyle(original).strokeWidth}`,
+        );
     const defs = document.createElementNS('http://www.w3.org/2000/svg', 'defs');
     defs.append(hatch);
     copy.prepend(defs);

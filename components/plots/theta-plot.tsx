@@ -38,7 +38,8 @@ interface Place {
 /** Where the name of each curve stands: where it keeps farthest from the other curves, names never over one another. */
 function namePlaces(size: PlotSize, data: ThetaPlotData): (Place | null)[] {
   const taken: Place[] = [];
-  const inside = (value: number | null | undefined): value is number => value !== null && value !== undefined && value >= data.range[0] && value <= data.range[1];
+  const inside = (value: number | null | undefined): value is number =>
+    value !== null && value !== undefined && value >= data.range[0] && value <= data.range[1];
   return data.curves.map((curve, index) => {
     let best: Place | null = null;
     let bestRoom = -Infinity;
@@ -57,7 +58,9 @@ function namePlaces(size: PlotSize, data: ThetaPlotData): (Place | null)[] {
           const there = other.values[k];
           return j === index || !inside(there) ? [] : [Math.abs(valueY(size, there, data.range) - at + 4)];
         });
-        const names = taken.map((place) => Math.max(Math.abs(place.y - at) / 16, Math.abs(place.x - x) / (reach + 20)) * 30);
+        const names = taken.map(
+          (place) => Math.max(Math.abs(place.y - at) / 16, Math.abs(place.x - x) / (reach + 20)) * 30,
+        );
         const room = Math.min(60, ...others, ...names) - (dy > 0 ? 0.5 : 0);
         if (room > bestRoom) {
           bestRoom = room;
@@ -93,9 +96,13 @@ function Drawing({ data, size, id }: { data: ThetaPlotData; size: PlotSize; id: 
         );
       })}
     >
-      {data.curves.toReversed().map((curve) =>
-        polyline(size, data.theta, curve.values, data.range).map((points, k) => <polyline key={`${curve.name}:${k}`} points={points} className={`p-line ${curve.look}`} />),
-      )}
+      {data.curves
+        .toReversed()
+        .map((curve) =>
+          polyline(size, data.theta, curve.values, data.range).map((points, k) => (
+            <polyline key={`${curve.name}:${k}`} points={points} className={`p-line ${curve.look}`} />
+          )),
+        )}
     </ThetaFrame>
   );
 }

@@ -7,7 +7,15 @@ export interface MathRun {
   readonly italic: boolean;
 }
 
-const SYMBOLS: Readonly<Record<string, string>> = { lambda: 'λ', sigma: 'σ', mu: 'μ', theta: 'θ', kappa: 'κ', nu: 'ν', gamma: 'γ' };
+const SYMBOLS: Readonly<Record<string, string>> = {
+  lambda: 'λ',
+  sigma: 'σ',
+  mu: 'μ',
+  theta: 'θ',
+  kappa: 'κ',
+  nu: 'ν',
+  gamma: 'γ',
+};
 const SUBSCRIPTS: Readonly<Record<string, string>> = { x: 'ₓ', y: 'ᵧ', z: '𝓏' };
 
 /** "lambda" → "λ", "lambda_x" → "λₓ", "r" → "r". */
@@ -26,12 +34,24 @@ export function decimalText(value: number, figures = 4): string {
   const size = Math.abs(value);
   if (size >= 1e5 || size < 1e-4) {
     const [mantissa = '', exponent = '0'] = value.toExponential(Math.max(0, figures - 2)).split('e');
-    return `${signed(mantissa)} × 10${superscript(String(Number(exponent)))}`;
+    return `${signed(String(Number(mantissa)))} × 10${superscript(String(Number(exponent)))}`;
   }
   return signed(String(Number(value.toPrecision(figures))));
 }
 
-const RAISED: Readonly<Record<string, string>> = { '-': '⁻', '0': '⁰', '1': '¹', '2': '²', '3': '³', '4': '⁴', '5': '⁵', '6': '⁶', '7': '⁷', '8': '⁸', '9': '⁹' };
+const RAISED: Readonly<Record<string, string>> = {
+  '-': '⁻',
+  '0': '⁰',
+  '1': '¹',
+  '2': '²',
+  '3': '³',
+  '4': '⁴',
+  '5': '⁵',
+  '6': '⁶',
+  '7': '⁷',
+  '8': '⁸',
+  '9': '⁹',
+};
 const superscript = (digits: string) => [...digits].map((digit) => RAISED[digit] ?? digit).join('');
 
 /** A closed form where it is short ("1", "1/2", "√3/2"), else the decimal. */
@@ -70,7 +90,9 @@ export function boundRuns(summary: Pick<FactsSummary, 'bounds' | 'parameter' | '
   if (verdict === 'unconditionally stable') return [upright('no limit')];
   if (verdict.includes('unstable')) return [upright('no '), italic(symbol), upright(' ≠ 0')];
   if (bounds.length === 0) return [upright(verdict === 'two-parameter region' ? 'a region' : 'not decided')];
-  return bounds.flatMap((bound, k) => (k === 0 ? intervalRuns(bound, symbol) : [upright(' or '), ...intervalRuns(bound, symbol)]));
+  return bounds.flatMap((bound, k) =>
+    k === 0 ? intervalRuns(bound, symbol) : [upright(' or '), ...intervalRuns(bound, symbol)],
+  );
 }
 
 /** The same as plain text, for labels and exports. */

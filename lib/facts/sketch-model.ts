@@ -42,8 +42,13 @@ export function levelLabel(level: number): string {
 
 const short = (text: string) => (text.length <= WEIGHT_LENGTH ? text : null);
 
-function weightText(coefficient: Polynomial, newest: Polynomial | undefined, symbols: readonly string[]): string | null {
-  const isOne = newest?.length === 1 && newest[0]!.powers.every((power) => power === 0) && newest[0]!.re.num === newest[0]!.re.den;
+function weightText(
+  coefficient: Polynomial,
+  newest: Polynomial | undefined,
+  symbols: readonly string[],
+): string | null {
+  const isOne =
+    newest?.length === 1 && newest[0]!.powers.every((power) => power === 0) && newest[0]!.re.num === newest[0]!.re.den;
   return isOne ? short(coefficientText(negate(coefficient), symbols)) : null;
 }
 
@@ -61,12 +66,20 @@ function spokenOffset(offset: number): string {
   return `i ${offset > 0 ? 'plus' : 'minus'} ${Math.abs(offset)}`;
 }
 
-function sentenceOf(sites: readonly SketchSite[], levels: readonly { level: number; label: string }[], reused: boolean): string {
+function sentenceOf(
+  sites: readonly SketchSite[],
+  levels: readonly { level: number; label: string }[],
+  reused: boolean,
+): string {
   const read = levels
     .filter(({ level }) => level !== 1)
     .map(({ level, label }) => {
-      const at = sites.filter((site) => site.role === 'known' && site.level === level).map((site) => (site.offset.length === 1 ? spokenOffset(site.offset[0]!) : `(${site.offset.join(', ')})`));
-      return at.length === 0 ? null : `from ${at.join(', ')} at level ${label.replace('−', 'minus').replace('+', 'plus')}`;
+      const at = sites
+        .filter((site) => site.role === 'known' && site.level === level)
+        .map((site) => (site.offset.length === 1 ? spokenOffset(site.offset[0]!) : `(${site.offset.join(', ')})`));
+      return at.length === 0
+        ? null
+        : `from ${at.join(', ')} at level ${label.replace('−', 'minus').replace('+', 'plus')}`;
     })
     .filter((part) => part !== null);
   const together = sites.some((site) => site.role === 'coupled') ? ', solved together with its neighbours' : '';
@@ -82,16 +95,34 @@ export function schemeSketch(scheme: ScalarScheme, facts: SchemeFacts, at: numbe
     const level = toNumber(term.level);
     const offset = term.offset.map(toNumber);
     const role = level !== 1 ? 'known' : offset.every((o) => o === 0) ? 'computed' : 'coupled';
-    return { level, offset, role, weight: role === 'known' && stages <= 1 ? weightText(term.coefficient, newestTerm?.coefficient ?? one, symbols) : null };
+    return {
+      level,
+      offset,
+      role,
+      weight:
+        role === 'known' && stages <= 1 ? weightText(term.coefficient, newestTerm?.coefficient ?? one, symbols) : null,
+    };
   });
   const numbers = [...new Set(sites.map((site) => site.level))];
   const span = Array.from({ length: 2 - Math.min(...numbers, 0) }, (_, k) => 1 - k);
   const levelNumbers = numbers.every(Number.isInteger) ? span : numbers.sort((a, b) => b - a);
-  const reused = facts.storage.explicit && facts.storage.arraysOnePerLevel !== null && facts.storage.arraysInPlace < facts.storage.arraysOnePerLevel;
+  const reused =
+    facts.storage.explicit &&
+    facts.storage.arraysOnePerLevel !== null &&
+    facts.storage.arraysInPlace < facts.storage.arraysOnePerLevel;
   const arrays = arraysOf(levelNumbers, reused);
   const levels = levelNumbers.map((level, k) => ({ level, label: levelLabel(level), array: arrays[k] ?? null }));
-  const middle = levelNumbers.find((level) => level < 1 && level > Math.min(...levelNumbers) && !sites.some((site) => site.level === level && site.offset.every((o) => o === 0)));
-  const transports = scheme.dims === 1 && facts.storage.explicit && at !== null && (scheme.equation === 'advection' || scheme.equation === 'wave');
+  const middle = levelNumbers.find(
+    (level) =>
+      level < 1 &&
+      level > Math.min(...levelNumbers) &&
+      !sites.some((site) => site.level === level && site.offset.every((o) => o === 0)),
+  );
+  const transports =
+    scheme.dims === 1 &&
+    facts.storage.explicit &&
+    at !== null &&
+    (scheme.equation === 'advection' || scheme.equation === 'wave');
   return {
     dims: scheme.dims,
     levels,
@@ -106,7 +137,11 @@ export function schemeSketch(scheme: ScalarScheme, facts: SchemeFacts, at: numbe
 }
 
 /** A stencil on its one level: the bubble is the point of evaluation. */
-export function stencilSketch(dims: 1 | 2 | 3, offsets: readonly (readonly number[])[], facts: StencilFacts): SketchModel {
+export function stencilSketch(
+  dims: 1 | 2 | 3,
+  offsets: readonly (readonly number[])[],
+  facts: StencilFacts,
+): SketchModel {
   const known = offsets.flatMap((offset, k): SketchSite[] => {
     const weight = facts.weights[k] ?? '0';
     return weight === '0' ? [] : [{ level: 0, offset, role: 'known', weight: short(signed(weight)) }];

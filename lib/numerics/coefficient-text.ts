@@ -21,7 +21,9 @@ export function coefficientText(coefficient: Polynomial, symbols: readonly strin
   const parts = [...coefficient]
     .sort((a, b) => degree(b.powers) - degree(a.powers))
     .flatMap(({ powers, re, im }) => {
-      const letters = powers.map((power, k) => (power === 0 ? '' : `${symbols[k]}${power === 1 ? '' : superscript(power)}`)).join('');
+      const letters = powers
+        .map((power, k) => (power === 0 ? '' : `${symbols[k]}${power === 1 ? '' : superscript(power)}`))
+        .join('');
       return [
         { value: re, letters },
         { value: im, letters: `i${letters}` },
