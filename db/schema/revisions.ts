@@ -12,6 +12,7 @@ import {
   uniqueIndex,
   uuid,
 } from 'drizzle-orm/pg-core';
+import type { KernelLanguage } from '@/lib/codegen/kernel-request';
 import type { Definition } from '@/lib/entries/definition';
 import type { Reference } from '@/lib/entries/entry';
 import { REVISION_STATES } from '@/lib/entries/revision-state';
@@ -64,6 +65,12 @@ export const revisions = pgTable(
     summary: jsonb().$type<FactsSummary>(),
     problems: jsonb().$type<Problem[]>().notNull().default([]),
     engineVersion: text().notNull(),
+    /** Languages of which the generator can print a kernel; not content, a later generator may know more. */
+    kernelLanguages: text()
+      .array()
+      .$type<KernelLanguage[]>()
+      .notNull()
+      .default(sql`'{}'`),
     submittedAt: moment(),
     vettedAt: moment(),
     /** What stands in the place of a superseded or withdrawn revision. */

@@ -5,7 +5,7 @@
 import type { z } from 'zod';
 import type { Definition } from '@/lib/entries/definition';
 import type { CALL_LETTERS, Reference } from '@/lib/entries/entry';
-import type { DemoCode, DemoEmail } from './demo-people';
+import type { DemoCode, DemoEmail } from '@/lib/people/demo-people';
 
 /** What shall become of a revision. */
 export type DemoPlan =

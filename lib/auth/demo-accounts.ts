@@ -1,7 +1,7 @@
 import 'server-only';
 import { db } from '@/db/client';
 import { listDemoPeople } from '@/db/queries/people';
-import { DEMO_PASSWORD, DEMO_PEOPLE } from '@/db/seed/demo-people';
+import { DEMO_PASSWORD, DEMO_PEOPLE } from '@/lib/people/demo-people';
 import { env } from '@/lib/env';
 import type { Role } from '@/lib/people/role';
 

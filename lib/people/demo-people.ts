@@ -1,5 +1,5 @@
 /** The invented people of Brackwater Modelling Office. Their accounts work in demo mode only. */
-import type { Role } from '@/lib/people/role';
+import type { Role } from './role';
 
 export interface DemoPerson {
   email: string;

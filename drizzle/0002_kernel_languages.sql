@@ -1,0 +1,1 @@
+ALTER TABLE "revisions" ADD COLUMN "kernel_languages" text[] DEFAULT '{}' NOT NULL;
