@@ -54,12 +54,13 @@ function eachLine(stream, write) {
 
 /**
  * Starts a part of the site that runs until it is stopped; its output appears with its name before each line.
+ * @param silence lines that tell nobody anything
  * @returns {{pid: number, ended: Promise<string>, stop: () => Promise<void>}}
  */
-export function startChild(name, command, args, env) {
+export function startChild(name, command, args, env, silence = /^\s*$/) {
   const { child, ended } = spawnBound(command, args, { env, stdio: ['ignore', 'pipe', 'pipe'] });
   for (const stream of [child.stdout, child.stderr])
-    eachLine(stream, (line) => line.trim() && say(`[${name}] ${line}`));
+    eachLine(stream, (line) => silence.test(line) || say(`[${name}] ${line}`));
   let over = false;
   const how = ended.then((end) => {
     over = true;

@@ -4,7 +4,7 @@ import fs from 'node:fs';
 export const sleep = (ms) => new Promise((resolve) => setTimeout(resolve, ms));
 
 /**
- * Name, state and start time of a living process, or null.
+ * Name, parent and start time of a living process, or null.
  * A zombie counts as dead: it still answers `kill(pid, 0)`, but holds nothing any more.
  * The start time (clock ticks since boot) tells a process from a later one with the same number.
  */
@@ -13,7 +13,8 @@ export function livingProcess(pid) {
     const stat = fs.readFileSync(`/proc/${pid}/stat`, 'utf8');
     const afterName = stat.slice(stat.lastIndexOf(')') + 2).split(' ');
     if (afterName[0] === 'Z' || afterName[0] === 'X') return null;
-    return { name: stat.slice(stat.indexOf('(') + 1, stat.lastIndexOf(')')), startTime: Number(afterName[19]) };
+    const name = stat.slice(stat.indexOf('(') + 1, stat.lastIndexOf(')'));
+    return { name, parent: Number(afterName[1]), startTime: Number(afterName[19]) };
   } catch {
     return null;
   }

@@ -18,6 +18,9 @@ export async function prepareDatabase(env) {
   if (env.LEVELBOOK_DEMO === '1') await runProgram('db/seed/seed.ts', env, 'seed');
 }
 
+/** The server's greeting: its address is not the one to open, and we tell when it is ready. */
+const GREETING = /^\s*$|^\s*(▲ Next\.js|- Local:|- Network:|✓ (Ready|Starting|Running))/;
+
 async function answers(port, host) {
   const reachable = host === '0.0.0.0' ? '127.0.0.1' : host;
   try {
@@ -32,7 +35,7 @@ async function answers(port, host) {
 export async function startWeb({ env, host, port, production }) {
   const command = production ? 'start' : 'dev';
   const args = ['node_modules/next/dist/bin/next', command, '-H', host, '-p', String(port)];
-  const part = startChild('web', process.execPath, args, env);
+  const part = startChild('web', process.execPath, args, env, GREETING);
   let how = null;
   void part.ended.then((text) => (how = text));
   await until(() => how !== null || answers(port, host), 120_000, 100);

@@ -42,9 +42,15 @@ for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) {
 /** npm may be killed without a word to us; nobody could then stop the site from its terminal. */
 function stopWithNpm() {
   if (!process.env.npm_lifecycle_event) return;
-  const npm = process.ppid;
+  const parent = process.ppid;
+  // npm starts us through a shell, which stays between us or gives its place to us.
+  const throughShell = ['sh', 'dash', 'bash'].includes(livingProcess(parent)?.name);
+  const npm = throughShell ? livingProcess(parent).parent : parent;
+  const isThere = () => process.ppid === parent && (!throughShell || livingProcess(parent)?.parent === npm);
   setInterval(() => {
-    if (process.ppid !== npm || !livingProcess(npm)) void stop(0);
+    if (stopping || isThere()) return;
+    say('\nStopping (npm has ended).');
+    void stop(0);
   }, 1_000).unref();
 }
 
