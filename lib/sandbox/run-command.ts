@@ -1,5 +1,5 @@
 import 'server-only';
-import { spawn } from 'node:child_process';
+import { spawn, type ChildProcess } from 'node:child_process';
 import type { Writable } from 'node:stream';
 import { Refusal } from '@/lib/refusal';
 import { boxArguments, DEFAULT_LIMITS, FIRST_FILE_DESCRIPTOR, type BoxLimits, type SandboxMode } from './box';
@@ -51,14 +51,20 @@ async function runInMode(mode: Exclude<SandboxMode, 'unavailable'>, command: Com
     fileNames,
     script: command.script,
   });
+  const stdio: ('pipe' | 'ignore')[] = [
+    dialogue ? 'pipe' : 'ignore',
+    'pipe',
+    'pipe',
+    ...fileNames.map(() => 'pipe' as const),
+  ];
   const startedMs = Date.now();
   return new Promise((resolve, reject) => {
-    const child = spawn(program!, args, {
+    const child: ChildProcess = spawn(program!, args, {
       // The first process inside shows the environment it was started with: it must hold nothing of ours.
-      env: { PATH: '/usr/bin:/bin' },
+      env: { ...({} as NodeJS.ProcessEnv), PATH: '/usr/bin:/bin' },
       cwd: '/',
       detached: true,
-      stdio: [dialogue ? 'pipe' : 'ignore', 'pipe', 'pipe', ...fileNames.map(() => 'pipe' as const)],
+      stdio,
     });
     const stop = () => {
       if (child.pid === undefined || child.exitCode !== null || child.signalCode !== null) return;
