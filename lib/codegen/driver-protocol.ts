@@ -9,7 +9,9 @@
  *     march <id> <n> <steps> <parameter values as bits, one word each>
  *     <levels × n lines: the kept levels, oldest first, n interior points each>
  *       answers   state <id> <status>            status 0, or the kernel's error code
- *                 <kept levels × n lines, oldest first, after `steps` steps; none where status is not 0>
+ *                 <kept levels × n lines, oldest first, after `steps` steps; none where status is not 0 or 3>
+ *                 status 3, outside the stable range, is told and the steps are taken all the same, by the step
+ *                 routine that checks nothing: a trial marches just outside the bound to see that it grows there
  *
  *     start <id> <n> <parameter values>          the start-up routine (multi-level schemes only)
  *     <n lines: the initial level>               (second order in time: 2 n lines, u then dt·u_t)
