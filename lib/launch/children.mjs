@@ -89,16 +89,21 @@ export async function run(command, args, { env = process.env, log } = {}) {
   const { ended } = spawnBound(command, args, { env, stdio: ['ignore', output, output] });
   const { status, how } = await ended;
   fs.closeSync(output);
-  if (status !== 0) {
+  if (status !== 0 && !closed) {
     const tail = fs.readFileSync(file, 'utf8').trimEnd().split('\n').slice(-60).join('\n');
     say(`${tail}\n  ${path.basename(command)} ended with ${how}; all of its output is in ${file}`);
   }
   return status;
 }
 
-/** Ends every child at once, and lets no other start; for a stop in the middle of the set-up. */
-export async function endAllChildren() {
+/** From here on no child starts, and one that ends is no news: we are stopping. */
+export function letNoneStart() {
   closed = true;
+}
+
+/** Ends every child at once; for a stop in the middle of the set-up. */
+export async function endAllChildren() {
+  letNoneStart();
   for (const child of running) signalGroup(child, 'SIGTERM');
   if (await until(() => running.size === 0, 3_000)) return;
   for (const child of running) signalGroup(child, 'SIGKILL');

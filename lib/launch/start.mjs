@@ -3,7 +3,7 @@
  * Node's own modules only: this runs before anything is installed.
  */
 import { ensureBuild } from './build.mjs';
-import { endAllChildren } from './children.mjs';
+import { endAllChildren, letNoneStart } from './children.mjs';
 import { keepRunning } from './keep-running.mjs';
 import { releaseLock, takeLock, tellOthers } from './lock.mjs';
 import { ensureNodePackages } from './node-packages.mjs';
@@ -24,6 +24,7 @@ let stopping = null;
 
 function stop(status) {
   stopping ??= (async () => {
+    letNoneStart();
     for (const one of kept.reverse()) await one.stop();
     await endAllChildren();
     releaseLock(LOCK);
