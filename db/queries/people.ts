@@ -26,6 +26,13 @@ export async function findPersonByEmail(db: Database, email: string) {
   return row ?? null;
 }
 
+/** @returns the new person's id; breaks `one_account_per_email` where the address is taken */
+export async function insertPerson(tx: Database, row: typeof people.$inferInsert): Promise<string> {
+  const [inserted] = await tx.insert(people).values(row).returning({ id: people.id });
+  if (!inserted) throw new Error('insertPerson: no row came back');
+  return inserted.id;
+}
+
 /** Ends every session of a person, this one too. */
 export async function raiseSessionVersion(db: Database, id: string) {
   await db

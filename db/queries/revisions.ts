@@ -181,3 +181,15 @@ export async function listMaintainerIds(db: Database, exceptId: string) {
     );
   return rows.map(({ id }) => id);
 }
+
+/** The revision of an entry that a reader would be sent to: the one in force, or else the newest. */
+export async function findRevisionToUse(db: Database, slug: string) {
+  const [row] = await db
+    .select({ id: revisions.id, entryId: revisions.entryId, number: revisions.number })
+    .from(revisions)
+    .innerJoin(entries, eq(entries.id, revisions.entryId))
+    .where(eq(entries.slug, slug))
+    .orderBy(desc(sql`${revisions.state} = 'vetted'`), desc(revisions.number))
+    .limit(1);
+  return row ?? null;
+}

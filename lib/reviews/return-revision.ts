@@ -1,0 +1,26 @@
+import 'server-only';
+import { db } from '@/db/client';
+import { insertEvent, insertLetters } from '@/db/queries/house';
+import { findReview, moveRevision } from '@/db/queries/revisions';
+import type { Actor } from '@/lib/people/actor';
+import { Refusal } from '@/lib/refusal';
+import { decisionSentence } from './decision-sentence';
+import { changedMeanwhile } from './refuse-broken-rule';
+import { returnObstacle } from './review-rules';
+
+/** Sends a revision back to its author with what must change. */
+export async function returnRevision(actor: Actor, revisionId: string, text: string): Promise<void> {
+  const review = await findReview(db, revisionId);
+  if (!review) throw new Refusal('not-found', 'There is no such revision.');
+  const obstacle = returnObstacle(actor, review);
+  if (obstacle) throw new Refusal('not-allowed', obstacle);
+  const reason = decisionSentence(text);
+  const { slug, number, title } = review;
+
+  await db.transaction(async (tx) => {
+    const moved = await moveRevision(tx, revisionId, { from: 'in-review', to: 'returned', reason });
+    if (!moved) throw changedMeanwhile();
+    await insertEvent(tx, { kind: 'revision.returned', actorId: actor.id, subjectId: revisionId, reason });
+    await insertLetters(tx, 'returned', [review.authorId], { revisionId, slug, number, title, sentence: reason });
+  });
+}
