@@ -43,6 +43,7 @@ const EXCEPTIONS = {
   'lib/codegen/load-template.ts': 'use case',
   // Started from a shell.
   'lib/facts/analyse-files.ts': 'program',
+  'lib/people/add-administrator-from-shell.ts': 'program',
   'db/migrate.ts': 'program',
 };
 

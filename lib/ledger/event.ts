@@ -13,6 +13,7 @@ export const EVENT_KINDS = [
   'trial.finished',
   'adoption.recorded',
   'remark.written',
+  'person.added',
   'person.signed-out-everywhere',
   'person.role-changed',
   'person.disabled',
