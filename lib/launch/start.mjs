@@ -1,13 +1,16 @@
 /**
  * `npm start`: everything from nothing to a running site. `npm run dev`: the same with the development server.
+ * `npm start -- --web` and `npm start -- --worker` start only that part, for a site on several machines.
  * Node's own modules only: this runs before anything is installed.
  */
+import path from 'node:path';
 import { ensureBuild } from './build.mjs';
 import { endAllChildren, letNoneStart } from './children.mjs';
 import { keepRunning } from './keep-running.mjs';
 import { releaseLock, takeLock, tellOthers } from './lock.mjs';
 import { ensureNodePackages } from './node-packages.mjs';
 import { startCluster } from './postgres.mjs';
+import { DATA, writePrivately } from './places.mjs';
 import { livingProcess } from './processes.mjs';
 import { say, seconds, step } from './say.mjs';
 import { chooseAddress, readEnvFile, settingsFor } from './settings.mjs';
@@ -15,7 +18,11 @@ import { prepareDatabase, startWeb, startWorker } from './site.mjs';
 import { ensureSystemPackages } from './system-packages.mjs';
 
 const LOCK = 'start';
-const production = !process.argv.includes('--dev');
+const FLAGS = ['--dev', '--web', '--worker'];
+const flags = process.argv.slice(2);
+const production = !flags.includes('--dev');
+const withWeb = flags.includes('--web') || !flags.includes('--worker');
+const withWorker = flags.includes('--worker') || !flags.includes('--web');
 const since = Date.now();
 
 /** What runs, in the order of starting; stopped from the end. */
@@ -78,18 +85,28 @@ async function databaseUrl() {
         samePort: cluster !== null,
       });
       cluster.ensureDatabase('levelbook');
+      writePrivately(path.join(DATA, 'database-url'), `${cluster.url('levelbook')}\n`);
       return cluster;
     }),
   );
   return cluster.url('levelbook');
 }
 
+function refuseToStart(sentence) {
+  say(sentence);
+  process.exit(1);
+}
+
 async function main() {
-  const holder = takeLock(LOCK);
+  const unknown = flags.filter((flag) => !FLAGS.includes(flag));
+  if (unknown.length > 0) refuseToStart(`Unknown: ${unknown.join(' ')}. Accepted: ${FLAGS.join(', ')}.`);
+  // Workers may stand side by side; two web servers would build in one folder.
+  const holder = withWeb ? takeLock(LOCK) : null;
   if (holder) {
     const where = holder.address ? `at ${holder.address}` : 'and is still getting ready';
-    say(`Levelbook already runs in this folder ${where}. To stop it: Ctrl-C in its window, or kill ${holder.pid}`);
-    process.exit(1);
+    refuseToStart(
+      `Levelbook already runs in this folder ${where}. To stop it: Ctrl-C in its window, or kill ${holder.pid}`,
+    );
   }
   stopWithNpm();
   say(production ? 'Levelbook is getting ready.' : 'Levelbook is getting ready for development.');
@@ -97,17 +114,19 @@ async function main() {
   const ownServer = !process.env.DATABASE_URL;
   await ensureSystemPackages({ withTests: false, withServer: ownServer });
   await ensureNodePackages();
-  const { host, port } = await chooseAddress();
+  const { host, port } = withWeb ? await chooseAddress() : { port: process.env.PORT ?? 3000 };
   const env = settingsFor({ databaseUrl: await databaseUrl(), port, demo: ownServer, production });
   await step('schema and content of the database', () => prepareDatabase(env));
-  if (production) await ensureBuild();
-  await step('web server', () => keep('web server', () => startWeb({ env, host, port, production })));
-  await step('worker', () => keep('worker', () => startWorker({ env })));
+  if (withWeb) {
+    if (production) await ensureBuild();
+    await step('web server', () => keep('web server', () => startWeb({ env, host, port, production })));
+  }
+  if (withWorker) await step('worker', () => keep('worker', () => startWorker({ env })));
 
   const address = process.env.NEXTAUTH_URL ?? `http://localhost:${port}`;
-  tellOthers(LOCK, { address });
-  say(`\nLevelbook is ready after ${seconds(Date.now() - since)}: ${address}`);
-  if (env.LEVELBOOK_DEMO === '1') say('The accounts of the demo are shown on the sign-in page.');
+  if (withWeb) tellOthers(LOCK, { address });
+  say(`\nLevelbook is ready after ${seconds(Date.now() - since)}${withWeb ? `: ${address}` : ' (a worker only).'}`);
+  if (withWeb && env.LEVELBOOK_DEMO === '1') say('The accounts of the demo are shown on the sign-in page.');
   say('Ctrl-C stops it.');
 }
 
