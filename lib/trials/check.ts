@@ -27,12 +27,23 @@ export const notApplicable = (name: FindingName, reason: string): Check => ({
 /** Thrown inside a judgement where the kernel gave no usable answer; the finding then fails with this sentence. */
 export class NoAnswer extends Error {}
 
-/** @throws {NoAnswer} where the kernel did not answer, or refused with a status */
-export function stateOf(answers: Answers, id: string): Float64Array[] {
+/** Status by which a kernel tells that a parameter lies outside its stable range; the steps are taken all the same. */
+export const OUTSIDE_BOUND = 3;
+
+/**
+ * @param due the status that the kernel must give
+ * @throws {NoAnswer} where the kernel did not answer, or gave another status
+ */
+export function stateOf(answers: Answers, id: string, due = 0): Float64Array[] {
   const answer = answers.get(id);
   if (!answer || answer.kind !== 'state') throw new NoAnswer('the kernel gave no answer');
-  if (answer.status !== 0) throw new NoAnswer(`the kernel refused with status ${answer.status}`);
-  return answer.levels;
+  const { status, levels } = answer;
+  if (status === due && levels.length > 0) return levels;
+  if (due === OUTSIDE_BOUND && status === 0)
+    throw new NoAnswer('the kernel takes a value outside the bound for one inside');
+  if (status === OUTSIDE_BOUND && due === 0)
+    throw new NoAnswer('the kernel takes a value inside the bound for one outside');
+  throw new NoAnswer(`the kernel refused with status ${status}`);
 }
 
 /** Judges, and turns a missing answer into a failed finding. */

@@ -1,7 +1,7 @@
 /** Bounded just below the bound, growing just above it; or growing at any value where the facts say so. */
 import type { MarchTask } from '@/lib/codegen/driver-protocol';
 import { gridGrowth, sampleScheme } from './characteristic';
-import { notApplicable, outcomeOf, short, stateOf, type Answers, type Check } from './check';
+import { notApplicable, outcomeOf, OUTSIDE_BOUND, short, stateOf, type Answers, type Check } from './check';
 import { randomField } from './smooth-field';
 import type { BoundEnd, MarchSubject } from './subject';
 
@@ -80,8 +80,9 @@ function calmRatio(answers: Answers, id: string): number {
 const growthTasks = (subject: MarchSubject, id: string, { parameters, n, steps }: Growing) =>
   [steps / 2, steps].map((count, k) => march(subject, `${id}:${k}`, parameters, n, count));
 
-function measuredRate(answers: Answers, id: string, steps: number): number {
-  const [half, full] = [0, 1].map((k) => norm(stateOf(answers, `${id}:${k}`)));
+/** @param told the status that the kernel must give there */
+function measuredRate(answers: Answers, id: string, steps: number, told = 0): number {
+  const [half, full] = [0, 1].map((k) => norm(stateOf(answers, `${id}:${k}`, told)));
   return (full! / half!) ** (2 / steps);
 }
 
@@ -118,7 +119,7 @@ function boundedCheck(subject: MarchSubject): Check {
     judge: (answers) => {
       const rows = plans.map(({ end, outside }, k) => {
         const calm = calmRatio(answers, `margin:${k}:in`);
-        const rate = measuredRate(answers, `margin:${k}:out`, outside.steps);
+        const rate = measuredRate(answers, `margin:${k}:out`, outside.steps, subject.checksBound ? OUTSIDE_BOUND : 0);
         return {
           parameter: end.parameter,
           bound: end.bound,

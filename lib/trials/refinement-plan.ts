@@ -109,10 +109,12 @@ export function planRefinement(subject: MarchSubject, order: number): Refinement
   // A multiple of 2^(s/timeOrder), so that 1.5 times finer takes whole steps, and even on every grid, so that a
   // computational mode of alternating sign has the same sign on all of them.
   const unit = subject.refine === 'time' ? 4 : 2 ** (Math.ceil(spaceOrder / timeOrder) + 1);
+  // The levels of the start-up carry none of the scheme's error: with many steps they are few among all.
+  const multiples = subject.keptLevels === 1 ? [1, 2, 4] : subject.keptLevels === 2 ? [4, 2] : [8, 16, 4];
   let best: RefinementPlan | null = null;
   for (const base of subject.refine === 'time' ? [POINTS_IN_TIME] : BASES)
     for (const parameters of candidates(subject))
-      for (const firstSteps of subject.refine === 'time' ? [unit, 2 * unit, 4 * unit, 8 * unit] : [unit, 2 * unit]) {
+      for (const firstSteps of multiples.map((multiple) => multiple * unit)) {
         const runs = runsFor(subject, parameters, base, firstSteps);
         if (firstSteps < subject.keptLevels || runs.at(-1)!.n * runs.at(-1)!.steps > WORK_MAX) continue;
         const errors = runs.slice(-3).map((run) => predictedError(subject, run));

@@ -39,6 +39,8 @@ export interface MarchSubject {
   readonly ends: readonly BoundEnd[];
   /** A large stable value where the stable set has no end. */
   readonly farInside: readonly number[] | null;
+  /** Whether the kernel itself compares the parameter with the bound and tells by its status. */
+  readonly checksBound: boolean;
   /** "unstable for all nonzero values" and the like, for the sentences. */
   readonly verdict: string;
   readonly operations: number;
