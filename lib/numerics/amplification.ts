@@ -17,14 +17,25 @@ export function amplificationFactors(
   return out;
 }
 
+/** Sum of the moduli of all term coefficients: what the rounding of the polynomial is measured by. */
+export function sizeOf(coefficients: ComplexArray): number {
+  let sum = 0;
+  for (let j = 0; j < coefficients.re.length; j++) sum += Math.hypot(coefficients.re[j]!, coefficients.im[j]!);
+  return sum;
+}
+
 /** Largest |z| − 1 − (bound on its rounding error) over the roots; positive only where a root is outside for certain. */
-export function excessOf(polynomial: ComplexArray, roots: ComplexArray = polynomialRoots(polynomial)): number {
+export function excessOf(
+  polynomial: ComplexArray,
+  roots: ComplexArray = polynomialRoots(polynomial),
+  size = 0,
+): number {
   let worst = -Infinity;
   for (let k = 0; k < roots.re.length; k++) {
     const modulus = Math.hypot(roots.re[k]!, roots.im[k]!);
     if (modulus <= worst + 1) continue;
     if (!Number.isFinite(modulus)) return Infinity;
-    worst = Math.max(worst, modulus - 1 - (modulus > 0.9 ? rootTolerance(polynomial, roots.re[k]!, roots.im[k]!) : 0));
+    worst = Math.max(worst, modulus - 1 - (modulus > 0.9 ? rootTolerance(polynomial, roots.re[k]!, roots.im[k]!, size) : 0));
   }
   return worst;
 }

@@ -141,8 +141,11 @@ export function polynomialRoots(c: ComplexArray, warm?: ComplexArray): ComplexAr
   return out;
 }
 
-/** Bound on the error of a computed root: backward error of Horner's rule over |P'|, capped where roots coincide. */
-export function rootTolerance(c: ComplexArray, re: number, im: number): number {
+/**
+ * Bound on the error of a computed root: backward error of the coefficients over |P'|, capped where roots coincide.
+ * @param size sum of the moduli of the terms that made the coefficients, where cancellation among them was possible
+ */
+export function rootTolerance(c: ComplexArray, re: number, im: number, size = 0): number {
   let sum = 0;
   let dr = 0;
   let di = 0;
@@ -163,7 +166,7 @@ export function rootTolerance(c: ComplexArray, re: number, im: number): number {
     pr = u;
   }
   const slope = Math.hypot(dr, di);
-  const backward = 8 * EPSILON * sum;
+  const backward = 8 * EPSILON * Math.max(sum, size);
   const scale = sum / Math.max(modulus, 1e-300);
   // At an m-fold root the error is of size (backward)^(1/m); the square root covers the double roots that occur.
   return Math.min(backward / Math.max(slope, 1e-300), 4 * Math.sqrt(backward / Math.max(scale, 1e-300)));
