@@ -6,19 +6,7 @@ import type { z } from 'zod';
 import type { Definition } from '@/lib/entries/definition';
 import type { CALL_LETTERS, Reference } from '@/lib/entries/entry';
 import type { DemoCode, DemoEmail } from '@/lib/people/demo-people';
-
-/** What shall become of a revision. */
-export type DemoPlan =
-  /** Stays on the author's table. */
-  | { become: 'draft' }
-  /** Submitted and tried; signed by those named, which is fewer than it takes. */
-  | { become: 'in-review'; signedBy?: DemoEmail[] }
-  /** Submitted and sent back. */
-  | { become: 'returned'; by: DemoEmail; reason: string }
-  /** Submitted, tried, signed by two (default: two maintainers who are not the author) and vetted when the trial passes. */
-  | { become: 'vetted'; signedBy?: [DemoEmail, DemoEmail]; sentences?: [string, string] }
-  /** The same, and afterwards withdrawn with this reason; `useInstead` is the slug of what stands in its place. */
-  | { become: 'withdrawn'; by: DemoEmail; reason: string; useInstead?: string };
+import type { DemoPlan } from '@/lib/reviews/demo-plan';
 
 export interface DemoRevision {
   title: string;
