@@ -9,9 +9,16 @@
  *     march <id> <n> <steps> <parameter values as bits, one word each>
  *     <levels × n lines: the kept levels, oldest first, n interior points each>
  *       answers   state <id> <status>            status 0, or the kernel's error code
- *                 <kept levels × n lines, oldest first, after `steps` steps; none where status is not 0 or 3>
- *                 status 3, outside the stable range, is told and the steps are taken all the same, by the step
- *                 routine that checks nothing: a trial marches just outside the bound to see that it grows there
+ *                 <kept levels × n lines, oldest first, after `steps` steps; none where status is not 0>
+ *                 step by step, also outside the stable range: a trial marches there to see that it grows
+ *
+ *     run <id> …                                 as march, by the kernel's own loop, which checks the stable range
+ *       answers   as march; status 3 outside the stable range
+ *
+ *                 march goes step by step through the kernel's step routine, so that it can also go beyond the stable
+ *                 bound: only a bad size or a parameter that is not finite is answered with the kernel's code
+ *
+ *     run <id> <n> <steps> <parameter values>    as march, through the kernel's run routine with all its checks
  *
  *     start <id> <n> <parameter values>          the start-up routine (multi-level schemes only)
  *     <n lines: the initial level>               (second order in time: 2 n lines, u then dt·u_t)
@@ -21,13 +28,39 @@
  *     <n lines: u>
  *       answers   state <id> <status> and n lines of the approximation
  *
- *     pace <id> <n> <repeats> <parameter values> best time of `repeats` runs, kernel and an own triad in one process
+ *     pace <id> <n> <repeats> <parameter values> best time of `repeats` runs, kernel and an own triad in one process;
+ *                                                the triad counts 32 bytes a point: its store twice, as in the facts
  *       answers   pace <id> <seconds per point and step> <triad bytes per second>     decimal
  *
  *     end
+ *
+ * Stencils on half-integer offsets: the approximation at i stands half a spacing to the right of u at i, so that
+ * offset x reads u at i + x + 1/2 (offset 1/2 is the right neighbour). Periodic continuation everywhere.
+ *
+ * Time methods march n unknowns of a periodic test problem with dt = 1: one parameter lambda,
+ * u' = -lambda (u_(i+1) - u_(i-1)) / 2; two parameters lambda and r add r (u_(i+1) - 2 u_i + u_(i-1)).
+ * Their kept levels are the k levels of a k-step method, one for Runge-Kutta.
+ *
+ * Malformed tasks end the driver with exit status 1 or 2 and a sentence on standard error.
  */
 export interface MarchTask {
   kind: 'march';
+  id: string;
+  n: number;
+  steps: number;
+  parameters: number[];
+  levels: Float64Array[];
+}
+export interface RunTask {
+  kind: 'run';
+  id: string;
+  n: number;
+  steps: number;
+  parameters: number[];
+  levels: Float64Array[];
+}
+export interface RunTask {
+  kind: 'run';
   id: string;
   n: number;
   steps: number;
@@ -55,7 +88,7 @@ export interface PaceTask {
   repeats: number;
   parameters: number[];
 }
-export type DriverTask = MarchTask | StartTask | ApplyTask | PaceTask;
+export type DriverTask = MarchTask | RunTask | StartTask | ApplyTask | PaceTask;
 
 export type DriverAnswer =
   | { kind: 'state'; id: string; status: number; levels: Float64Array[] }
