@@ -12,13 +12,8 @@
  *                 <kept levels × n lines, oldest first, after `steps` steps; none where status is not 0>
  *                 step by step, also outside the stable range: a trial marches there to see that it grows
  *
- *     run <id> …                                 as march, by the kernel's own loop, which checks the stable range
- *       answers   as march; status 3 outside the stable range
- *
- *                 march goes step by step through the kernel's step routine, so that it can also go beyond the stable
- *                 bound: only a bad size or a parameter that is not finite is answered with the kernel's code
- *
- *     run <id> <n> <steps> <parameter values>    as march, through the kernel's run routine with all its checks
+ *     run <id> <n> <steps> <parameter values>    as march, but through the kernel's run routine with all its checks:
+ *                                                no levels where status is not 0
  *
  *     start <id> <n> <parameter values>          the start-up routine (multi-level schemes only)
  *     <n lines: the initial level>               (second order in time: 2 n lines, u then dt·u_t)
@@ -45,14 +40,6 @@
  */
 export interface MarchTask {
   kind: 'march';
-  id: string;
-  n: number;
-  steps: number;
-  parameters: number[];
-  levels: Float64Array[];
-}
-export interface RunTask {
-  kind: 'run';
   id: string;
   n: number;
   steps: number;
