@@ -43,6 +43,13 @@ BEGIN
   NEW.version := OLD.version + content_changed::integer;
   IF content_changed THEN NEW.updated_at := now(); END IF;
 
+  IF NEW.state <> OLD.state AND (OLD.state, NEW.state) NOT IN (
+    ('draft', 'in-review'), ('returned', 'in-review'), ('in-review', 'draft'), ('in-review', 'returned'),
+    ('in-review', 'vetted'), ('vetted', 'superseded'), ('vetted', 'withdrawn'), ('superseded', 'withdrawn')
+  ) THEN
+    PERFORM refuse('allowed_moves_only', 'A revision does not go from ' || OLD.state || ' to ' || NEW.state || '.');
+  END IF;
+
   IF OLD.vetted_at IS NOT NULL AND NEW.vetted_at IS DISTINCT FROM OLD.vetted_at THEN
     PERFORM refuse('vetted_date_stands', 'The date of a vetting never changes.');
   END IF;
@@ -51,13 +58,6 @@ BEGIN
     RETURN NEW;
   END IF;
   NEW.state_since := now();
-
-  IF (OLD.state, NEW.state) NOT IN (
-    ('draft', 'in-review'), ('returned', 'in-review'), ('in-review', 'draft'), ('in-review', 'returned'),
-    ('in-review', 'vetted'), ('vetted', 'superseded'), ('vetted', 'withdrawn'), ('superseded', 'withdrawn')
-  ) THEN
-    PERFORM refuse('allowed_moves_only', 'A revision does not go from ' || OLD.state || ' to ' || NEW.state || '.');
-  END IF;
 
   IF NEW.state = 'in-review' THEN
     IF NEW.verdict <> 'facts' THEN
