@@ -1,0 +1,300 @@
+/** What the C template of a scheme prints. */
+import { boundCondition } from './bound';
+import { C } from './c';
+import { coefficientSource, type Coefficient } from './coefficient';
+import { infix, type Assignment } from './expression-tree';
+import type { View } from './kernel-source';
+import type { StagesPlan, StartPlan, TablePlan } from './kernel-plan';
+import {
+  arraysOf,
+  arrayWords,
+  boundWords,
+  levelsOf,
+  minPoints,
+  oldestOf,
+  startAbout,
+  runAbout,
+  scalarsOf,
+  sweepArrays,
+  taylorNode,
+  type SchemeContext,
+} from './scheme-words';
+import { wrapStatement } from './wrap-text';
+
+const WIDTH = 96;
+const statement = (text: string) => wrapStatement(text, WIDTH);
+/** An argument list, broken between arguments. */
+const listed = (head: string, items: readonly string[]) => statement(`${head}(${items.join(', ')})`);
+
+function coefficientLines(coefficients: readonly Coefficient[], symbols: readonly string[]): string {
+  return coefficients
+    .map(({ name, value }) => statement(`const double ${name} = ${coefficientSource(value, symbols, C.literal)};`))
+    .join('\n');
+}
+
+function assignmentLine(assignment: Assignment): string {
+  const target = assignment.kind === 'value' ? `const double ${assignment.name}` : C.element(assignment.array, 0);
+  return statement(`${target} = ${infix(assignment.node, C)};`);
+}
+
+const pointer = ({ name, written }: { name: string; written: boolean }) =>
+  `${written ? '' : 'const '}double *restrict ${name}`;
+
+export class CSchemeView {
+  private readonly symbols: string[];
+  private readonly parameters: string[];
+
+  constructor(private readonly context: SchemeContext) {
+    this.symbols = context.plan.parameters.map((p) => p.name);
+    this.parameters = this.symbols.map((name) => `double ${name}`);
+  }
+
+  private get periodic() {
+    return this.context.options.boundary === 'periodic';
+  }
+  private get fillParameters() {
+    return this.periodic ? [] : [`${this.context.prefix}_fill *fill`, 'void *context'];
+  }
+  private get fillArguments() {
+    return this.periodic ? [] : ['fill', 'context'];
+  }
+  private fill(array: string) {
+    return this.periodic ? `${this.context.prefix}_fill_halo(n, ${array});` : `fill(n, ${array}, context);`;
+  }
+
+  private fillLines(): string {
+    const [left, right] = this.context.plan.halo;
+    const at = (k: number) => (k === 0 ? '' : ` + ${k}`);
+    const lines = [
+      ...Array.from({ length: left }, (_, k) => `u[${k}] = u[n${at(k)}];`),
+      ...Array.from({ length: right }, (_, k) => `u[n${at(left + k)}] = u[${left + k}];`),
+    ];
+    return lines.length > 0 ? lines.join('\n') : '(void)n;\n(void)u;  /* no ghost cells */';
+  }
+
+  private tableRows(plan: TablePlan): View[] {
+    const { prefix } = this.context;
+    const arrays = arrayWords(plan);
+    const signature = listed(`void ${prefix}_step`, ['ptrdiff_t n', ...this.parameters, ...arrays.map(pointer)]);
+    return [
+      {
+        notes: [{ note: `One step. ${arrays.map((a) => `${a.name}: ${a.words}`).join('; ')}.` }],
+        signature,
+        coefficients: coefficientLines(plan.coefficients, this.symbols),
+        open: '',
+        body: plan.sweep.assignments.map(assignmentLine).join('\n'),
+        braces: [],
+      },
+    ];
+  }
+
+  private stageRows(plan: StagesPlan): View[] {
+    return plan.sweeps.map(({ assignments }, k) => ({
+      notes: k === 0 ? [{ note: 'k is dt times the slope; each stage adds it to the sums that need it.' }] : [],
+      signature: listed(`static void stage${k + 1}`, [
+        'ptrdiff_t n',
+        ...scalarsOf(assignments).map((name) => `double ${name}`),
+        ...sweepArrays(assignments).map(pointer),
+      ]),
+      coefficients: '',
+      open: assignments.length > 1 ? ' {' : '',
+      body: assignments.map(assignmentLine).join('\n'),
+      braces: assignments.length > 1 ? [{}] : [],
+    }));
+  }
+
+  private stagedStep(plan: StagesPlan): View[] {
+    const calls = plan.sweeps.flatMap(({ source, assignments }, k) => [
+      this.fill(source),
+      `stage${k + 1}(${['n', ...scalarsOf(assignments), ...sweepArrays(assignments).map((a) => a.name)].join(', ')});`,
+    ]);
+    return [
+      {
+        signature: listed(`void ${this.context.prefix}_step`, this.stagedParameters(plan)),
+        coefficients: coefficientLines(plan.coefficients, this.symbols),
+        calls: calls.join('\n'),
+      },
+    ];
+  }
+
+  private stagedParameters(plan: StagesPlan) {
+    const arrays = ['u', ...plan.work].map((name) => `double *${name}`);
+    return ['ptrdiff_t n', ...this.parameters, ...arrays, ...this.fillParameters];
+  }
+
+  private taylor(start: StartPlan): { signature: string; body: string; coefficients: string; words: string } {
+    const { plan, prefix } = this.context;
+    const second = plan.timeOrder === 2;
+    return {
+      signature: listed(`static void ${prefix}_taylor`, [
+        'ptrdiff_t n',
+        ...this.parameters,
+        ...(second ? ['double b'] : []),
+        'double c',
+        'const double *restrict u',
+        ...(second ? ['const double *restrict v'] : []),
+        'const double *restrict y',
+        'double *restrict w',
+      ]),
+      coefficients: coefficientLines(start.coefficients, this.symbols),
+      body: statement(`w[i] = ${infix(taylorNode(start, plan.timeOrder), C)};`),
+      words: second ? 'u + b v + c dt^2 L y' : 'u + c dt L y',
+    };
+  }
+
+  private startParameters(plan: TablePlan) {
+    return [
+      'ptrdiff_t n',
+      ...this.parameters,
+      `double *const level[${plan.arrays}]`,
+      ...(plan.timeOrder === 2 ? ['const double *v'] : []),
+      'double *work',
+      ...this.fillParameters,
+    ];
+  }
+
+  private start(plan: TablePlan): View[] {
+    const { start } = plan;
+    if (!start) return [];
+    const { signature, body, coefficients, words } = this.taylor(start);
+    const loop = {
+      terms: String(start.terms),
+      leading: ['n', ...this.symbols].join(', '),
+      fill_u: this.fill('u'),
+      fill_w: this.fill('w'),
+    };
+    const oldest = oldestOf(plan);
+    return [
+      {
+        signature,
+        body,
+        coefficients,
+        seriesWords: words,
+        about: startAbout(this.context).map((line) => ({ line })),
+        parameters: this.startParameters(plan).join(', '),
+        alsoNull: plan.timeOrder === 2 ? ' || !v' : '',
+        firstOrder: plan.timeOrder === 1 ? [{ ...loop, second: String(oldest + 1) }] : [],
+        secondOrder: plan.timeOrder === 2 ? [{ ...loop, oldest: String(oldest) }] : [],
+      },
+    ];
+  }
+
+  private runParameters() {
+    const level = `double *${this.context.plan.shape === 'table' ? '' : 'const '}level[${arraysOf(this.context.plan)}]`;
+    return ['ptrdiff_t nsteps', 'ptrdiff_t n', ...this.parameters, level, ...this.fillParameters];
+  }
+
+  /** Statements of one step on level[], shared by run and by the driver. */
+  advance(): string {
+    const { plan, prefix } = this.context;
+    if (plan.shape === 'stages') {
+      const arrays = ['u', ...plan.work].map((_, k) => `level[${k === 0 ? plan.work.length : k - 1}]`);
+      return `${prefix}_step(${['n', ...this.symbols, ...arrays, ...this.fillArguments].join(', ')});`;
+    }
+    const last = plan.arrays - 1;
+    const read = arrayWords(plan)
+      .filter((a) => !a.written)
+      .map((_, age) => `level[${last - age}]`);
+    return [
+      this.fill(`level[${last}]`),
+      `${prefix}_step(${['n', ...this.symbols, ...read, 'level[0]'].join(', ')});`,
+      'double *const newest = level[0];',
+      ...Array.from({ length: last }, (_, k) => `level[${k}] = level[${k + 1}];`),
+      `level[${last}] = newest;`,
+    ].join('\n');
+  }
+
+  /** Ghost cells of the older levels, which later steps find filled. */
+  before(): string {
+    const { plan } = this.context;
+    if (plan.shape !== 'table') return '';
+    const older = plan.known.map((name, age) => ({ name, age })).filter(({ name, age }) => age > 0 && name !== 'w');
+    return older.map(({ age }) => this.fill(`level[${plan.arrays - 1 - age}]`)).join('\n');
+  }
+
+  declarations(): string {
+    const { plan, prefix } = this.context;
+    const table = plan.shape === 'table' ? plan : null;
+    const step = table
+      ? ['ptrdiff_t n', ...this.parameters, ...arrayWords(table).map(pointer)]
+      : this.stagedParameters(plan as StagesPlan);
+    return [
+      listed(`ptrdiff_t ${prefix}_length`, ['ptrdiff_t n']),
+      listed(`int ${prefix}_check`, ['ptrdiff_t n', ...this.parameters]),
+      listed(`int ${prefix}_check_state`, ['ptrdiff_t n', 'const double *u']),
+      ...(this.periodic ? [listed(`void ${prefix}_fill_halo`, ['ptrdiff_t n', 'double *u'])] : []),
+      listed(`void ${prefix}_step`, step),
+      ...(table?.start ? [listed(`int ${prefix}_start`, this.startParameters(table))] : []),
+      listed(`int ${prefix}_run`, this.runParameters()),
+    ]
+      .map((line) => `${line};`)
+      .join('\n');
+  }
+
+  view(): View {
+    const { plan, prefix, bound } = this.context;
+    const condition = boundCondition(bound, { and: '&&', or: '||', literal: (d) => (d.startsWith('-') ? `${d}` : d) });
+    const refused = [
+      ...this.symbols.map((name) => `!isfinite(${name})`),
+      ...(plan.divisor ? [`!(fabs(${coefficientSource(plan.divisor, this.symbols, C.literal)}) > 0.0)`] : []),
+    ];
+    const start = plan.shape === 'table' ? this.start(plan) : [];
+    return {
+      prefix,
+      PREFIX: prefix.toUpperCase(),
+      haloLeft: String(plan.halo[0]),
+      haloRight: String(plan.halo[1]),
+      minPoints: String(minPoints(plan)),
+      levels: String(levelsOf(plan)),
+      arrays: String(arraysOf(plan)),
+      parameterWords: this.symbols.length > 0 ? this.symbols.join(' or ') : 'no parameter:',
+      divisorWords: plan.divisor ? ', or the coefficient of the new level is 0' : '',
+      boundWords: boundWords(bound),
+      caller: this.periodic ? [] : [{}],
+      periodic: this.periodic ? [{ fillLines: this.fillLines() }] : [],
+      declarations: this.declarations(),
+      checkParameters: ['ptrdiff_t n', ...this.parameters].join(', '),
+      checkArguments: ['n', ...this.symbols].join(', '),
+      refused: refused.length > 0 ? [{ condition: refused.join(' || ') }] : [],
+      bounded: condition ? [{ outside: `!(${condition})` }] : [],
+      rows: plan.shape === 'table' ? this.tableRows(plan) : this.stageRows(plan),
+      staged: plan.shape === 'stages' ? this.stagedStep(plan) : [],
+      start,
+      runAbout: runAbout(this.context).map((line) => ({ line })),
+      runParameters: this.runParameters().join(', '),
+      runBefore: this.before(),
+      runBody: this.advance(),
+    };
+  }
+
+  /** What the driver's template prints. */
+  driver(): View {
+    const { plan, prefix } = this.context;
+    const started = plan.shape === 'table' && plan.start !== null;
+    const second = plan.timeOrder === 2;
+    return {
+      prefix,
+      caller: this.periodic ? [] : [{ fillLines: this.fillLines() }],
+      declarations: this.declarations(),
+      arrays: String(arraysOf(plan)),
+      levels: String(levelsOf(plan)),
+      haloLeft: String(plan.halo[0]),
+      parameters: this.symbols.map((name) => ({ name })),
+      checkArguments: ['n', ...this.symbols].join(', '),
+      fillArguments: this.fillArguments.map((name) => `, ${name}`).join(''),
+      before: this.before(),
+      advance: this.advance(),
+      start: started
+        ? [
+            {
+              second: second ? [{}] : [],
+              arguments: ['n', ...this.symbols, 'level', ...(second ? ['v'] : []), 'work', ...this.fillArguments].join(
+                ', ',
+              ),
+            },
+          ]
+        : [],
+      startless: started ? [] : [{}],
+    };
+  }
+}

@@ -1,0 +1,156 @@
+/** Words about a planned scheme that all languages print alike. */
+import type { SchemeFacts } from '@/lib/facts/facts';
+import { boundText, type Bound } from './bound';
+import type { KernelInput, KernelLanguage, KernelOptions } from './kernel-request';
+import { wrapProse } from './wrap-text';
+import { difference, named, product, read, readsOf, sum, type Assignment, type Node } from './expression-tree';
+import type { SchemePlan, StartPlan, TablePlan } from './kernel-plan';
+
+/** "AD 003" → "lb_ad003" */
+export const kernelPrefix = (callNumber: string) => `lb_${callNumber.toLowerCase().replace(/[^a-z0-9]/g, '')}`;
+
+export interface SchemeContext {
+  readonly input: KernelInput;
+  readonly facts: SchemeFacts;
+  readonly options: KernelOptions;
+  readonly plan: SchemePlan;
+  readonly bound: Bound;
+  readonly prefix: string;
+}
+
+/** Arrays that the caller provides: work arrays of the stages come first, u last. */
+export const arraysOf = (plan: SchemePlan) => (plan.shape === 'table' ? plan.arrays : plan.work.length + 1);
+export const levelsOf = (plan: SchemePlan) => (plan.shape === 'table' ? plan.keptLevels : 1);
+export const minPoints = (plan: SchemePlan) => Math.max(1, ...plan.halo);
+
+/** Index of the oldest kept level among the arrays. */
+export const oldestOf = (plan: TablePlan) => plan.arrays - plan.keptLevels;
+
+export const boundWords = (bound: Bound) =>
+  bound.kind === 'pieces' ? `not within ${boundText(bound)}` : 'never returned: no bound is checked';
+
+export const levelWords = (age: number) => (age === 0 ? 'level n' : `level n-${age}`);
+
+/** What each array of the step holds. */
+export function arrayWords(
+  plan: TablePlan,
+): { readonly name: string; readonly words: string; readonly written: boolean }[] {
+  const read = plan.known
+    .map((name, age) => ({ name, words: levelWords(age), written: false }))
+    .filter((array) => array.name !== 'w');
+  const w = plan.inPlace ? `${levelWords(plan.keptLevels - 1)} in, level n+1 out` : 'level n+1 out';
+  return [...read, { name: 'w', words: w, written: true }];
+}
+
+/** Coefficients and parameters that a sweep reads, in order of first use. */
+export function scalarsOf(assignments: readonly Assignment[]): string[] {
+  const values = new Set(assignments.flatMap((a) => (a.kind === 'value' ? [a.name] : [])));
+  const names: string[] = [];
+  const visit = (node: Node) => {
+    if (node.kind === 'name' && !values.has(node.name) && !names.includes(node.name)) names.push(node.name);
+    if (node.kind === 'negation') visit(node.operand);
+    if (node.kind === 'sum' || node.kind === 'difference' || node.kind === 'product') {
+      visit(node.left);
+      visit(node.right);
+    }
+  };
+  assignments.forEach((a) => visit(a.node));
+  return names;
+}
+
+/** Arrays of a sweep, those only read first. */
+export function sweepArrays(assignments: readonly Assignment[]): { name: string; written: boolean }[] {
+  const written = new Set(assignments.flatMap((a) => (a.kind === 'store' ? [a.array] : [])));
+  const names = new Set(assignments.flatMap((a) => readsOf(a.node).map((r) => r.array)));
+  const read = [...names].filter((name) => !written.has(name));
+  return [...read.map((name) => ({ name, written: false })), ...[...written].map((name) => ({ name, written: true }))];
+}
+
+/** u + c·(dt L y), or u + b·v + c·(dt² L y): one term of the Taylor series at a point. */
+export function taylorNode({ operator }: StartPlan, timeOrder: 1 | 2): Node {
+  const base = timeOrder === 1 ? read('u', 0) : sum(read('u', 0), product(named('b'), read('v', 0)));
+  return operator.kind === 'negation'
+    ? difference(base, product(named('c'), operator.operand))
+    : sum(base, product(named('c'), operator));
+}
+
+export function startAbout({ plan }: SchemeContext): string[] {
+  if (plan.shape !== 'table' || !plan.start) return [];
+  const { start, timeOrder, keptLevels } = plan;
+  const series =
+    timeOrder === 1
+      ? `by the Taylor series in time with ${start.terms} terms (a Runge-Kutta step of ${start.terms} stages)`
+      : `by the Taylor series in time through dt^${2 * start.terms}`;
+  return [
+    ...wrapProse(
+      `Start-up: makes ${keptLevels - 1 === 1 ? 'the second level' : `${keptLevels - 1} further levels`} ${series}, with differences of order ${start.spaceOrder} in space.`,
+      88,
+    ),
+    timeOrder === 1
+      ? 'In: the initial level in the oldest kept array. Out: all kept levels, the oldest first.'
+      : 'In: u in the oldest kept array, v = dt u_t. Out: all kept levels, the oldest first.',
+    'work: one more array of the same length.',
+  ];
+}
+
+export function runAbout({ plan }: SchemeContext): string[] {
+  if (plan.shape === 'stages')
+    return ['nsteps steps. The last array is u, advanced in place; the others are work space.'];
+  const spare =
+    oldestOf(plan) > 0 ? 'The first array is spare; then come the kept levels' : 'The arrays are the kept levels';
+  return [`nsteps steps. ${spare}, the oldest first.`, 'They are rotated: on return the last is the newest.'];
+}
+
+/** How the routines are called, a few lines for the header. */
+export function schemeCalling({ plan, prefix, options }: SchemeContext, language: KernelLanguage): string[] {
+  const symbols = plan.parameters.map((p) => p.name);
+  const arrays = arraysOf(plan);
+  const starts = plan.shape === 'table' && plan.start !== null;
+  const initial = plan.timeOrder === 2 ? ['v'] : [];
+  const fill = options.boundary === 'periodic' ? [] : language === 'c' ? ['fill', 'context'] : ['fill'];
+  const call = (name: string, items: readonly string[]) => `${name}(${items.join(', ')})`;
+  if (language === 'c')
+    return [
+      `double *level[${arrays}];   each of ${prefix}_length(n) doubles`,
+      ...(starts
+        ? [`status = ${call(`${prefix}_start`, ['n', ...symbols, 'level', ...initial, 'work', ...fill])};`]
+        : []),
+      `status = ${call(`${prefix}_run`, ['nsteps', 'n', ...symbols, 'level', ...fill])};   result in level[${arrays - 1}]`,
+      'status 0: done; other values: see the second enum. step itself checks nothing: call check once.',
+    ];
+  if (language === 'fortran') {
+    const shape = `u(${1 - plan.halo[0]}:n+${plan.halo[1]}, ${arrays})`;
+    return [
+      `real(real64) :: ${shape}   allocated by the caller`,
+      ...(starts
+        ? [`call ${call(`${prefix}_start`, ['n', ...symbols, 'u', ...initial, 'work', ...fill, 'status'])}`]
+        : []),
+      `newest = ${arrays}`,
+      `call ${call(`${prefix}_run`, ['nsteps', 'n', ...symbols, 'u', 'newest', ...fill, 'status'])}   result in u(1:n, newest)`,
+      'status 0: done; other values: see the parameters below. step itself checks nothing: call check once.',
+    ];
+  }
+  return [
+    `levels = [numpy.zeros(length(n)) for _ in range(${arrays})]`,
+    ...(starts ? [call('start', ['levels', ...symbols, ...initial, ...fill])] : []),
+    `levels = ${call('run', ['nsteps', 'levels', ...symbols, ...fill])}   result in levels[-1][${plan.halo[0]}:${plan.halo[0]} + n]`,
+    'Bad arguments raise ValueError. Step checks shapes when it is made, not at every call.',
+  ];
+}
+
+/** Margin notes for the page. */
+export function schemeNotes({ plan }: SchemeContext, language: KernelLanguage): { anchor: string; text: string }[] {
+  const update = { c: 'w[i] = ', fortran: 'w(i) = ', python: 'np.' }[language];
+  const storage =
+    plan.shape === 'table'
+      ? plan.inPlace
+        ? 'In place: a further array is never needed.'
+        : 'The new level has an array of its own; rotate after each step.'
+      : 'Each slope joins its sums at once: no slope is stored.';
+  const alias = {
+    c: { anchor: 'restrict', text: 'No alias between the arrays: the loop vectorises.' },
+    fortran: { anchor: 'intent(in', text: 'Dummy arguments cannot alias: the loop vectorises.' },
+    python: { anchor: 'out=', text: 'Results go to prepared arrays: nothing is allocated in a step.' },
+  }[language];
+  return [{ anchor: 'halo', text: 'The bound travels in the first line.' }, alias, { anchor: update, text: storage }];
+}

@@ -1,0 +1,5 @@
+/*
+{{#each lines}}
+ * {{line}}
+{{/each}}
+ */
