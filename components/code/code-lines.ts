@@ -18,18 +18,27 @@ const THEME: ThemeRegistration = {
   colors: { 'editor.foreground': '#000000', 'editor.background': '#ffffff' },
   settings: [
     { settings: { foreground: '#000000' } },
-    { scope: ['keyword', 'storage.modifier', 'storage.type.function', 'storage.type.class'], settings: { foreground: '#000001' } },
+    {
+      scope: ['keyword', 'storage.modifier', 'storage.type.function', 'storage.type.class'],
+      settings: { foreground: '#000001' },
+    },
     { scope: ['keyword.operator', 'keyword.other.attribute'], settings: { foreground: '#000000' } },
     { scope: ['keyword.operator.logical.python', 'keyword.operator.new'], settings: { foreground: '#000001' } },
     { scope: ['storage.type', 'support.type', 'entity.name.type'], settings: { foreground: '#000002' } },
     { scope: ['storage.type.function.python', 'storage.type.class.python'], settings: { foreground: '#000001' } },
     { scope: ['constant.numeric', 'constant.language'], settings: { foreground: '#000003' } },
     { scope: ['string', 'punctuation.definition.string'], settings: { foreground: '#000004' } },
-    { scope: ['comment', 'punctuation.definition.comment', 'string.quoted.docstring'], settings: { foreground: '#000005' } },
+    {
+      scope: ['comment', 'punctuation.definition.comment', 'string.quoted.docstring'],
+      settings: { foreground: '#000005' },
+    },
   ],
 };
 
-const GRAMMARS = { c: 'c', fortran: 'fortran-free-form', python: 'python' } as const satisfies Record<KernelLanguage, string>;
+const GRAMMARS = { c: 'c', fortran: 'fortran-free-form', python: 'python' } as const satisfies Record<
+  KernelLanguage,
+  string
+>;
 
 // Kept on the process: the development server loads this module anew at each change, the grammars it need not.
 const kept = globalThis as typeof globalThis & { levelbookHighlighter?: Promise<HighlighterCore> };

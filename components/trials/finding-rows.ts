@@ -7,7 +7,10 @@ import {
   type TrialLanguage,
 } from '@/lib/trials/trial';
 
-export const LANGUAGE_NAMES = { c: 'C', fortran: 'Fortran', python: 'Python' } as const satisfies Record<TrialLanguage, string>;
+export const LANGUAGE_NAMES = { c: 'C', fortran: 'Fortran', python: 'Python' } as const satisfies Record<
+  TrialLanguage,
+  string
+>;
 
 export const FINDING_TITLES = {
   'clean-build': 'Clean build',

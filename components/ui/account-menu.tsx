@@ -3,13 +3,13 @@
 import { useRef } from 'react';
 import type { Role } from '@/lib/people/role';
 import { KeyListButton } from './keys';
-import { SignOutButtons } from './sign-out-buttons';
+import { type SignOutEverywhere, SignOutButtons } from './sign-out-buttons';
 import { useDismissal } from './use-dismissal';
 
 interface AccountMenuProps {
   name: string;
   role: Role;
-  signOutEverywhere: () => Promise<void>;
+  signOutEverywhere: SignOutEverywhere;
 }
 
 /** Who is signed in, and the ways out. */

@@ -19,5 +19,7 @@ function sentenceOf(text: string): string {
   } catch {
     // Not JSON: told below.
   }
-  return text.length > 0 && text.length < 200 && !text.startsWith('<') ? text : 'The server did not answer as it should.';
+  return text.length > 0 && text.length < 200 && !text.startsWith('<')
+    ? text
+    : 'The server did not answer as it should.';
 }

@@ -3,11 +3,12 @@ import { BrandMark } from '@/components/marks/brand-mark';
 import type { Actor } from '@/lib/people/actor';
 import { AccountMenu } from './account-menu';
 import { NarrowMenu } from './narrow-menu';
+import type { SignOutEverywhere } from './sign-out-buttons';
 import { ThemeButton } from './theme-button';
 import { ToolList } from './tool-list';
 
 /** The head of every page: words above a long tube, the bubble under the tool that is open. */
-export function Head({ actor, signOutEverywhere }: { actor: Actor; signOutEverywhere: () => Promise<void> }) {
+export function Head({ actor, signOutEverywhere }: { actor: Actor; signOutEverywhere: SignOutEverywhere }) {
   return (
     <header className="head">
       <a className="skip" href="#content">

@@ -4,7 +4,7 @@ import { usePathname } from 'next/navigation';
 import { useRef } from 'react';
 import type { Role } from '@/lib/people/role';
 import { KeyListButton } from './keys';
-import { SignOutButtons } from './sign-out-buttons';
+import { type SignOutEverywhere, SignOutButtons } from './sign-out-buttons';
 import { ThemeButton } from './theme-button';
 import { ToolList } from './tool-list';
 import { currentTool } from './tools';
@@ -13,7 +13,7 @@ import { useDismissal } from './use-dismissal';
 interface NarrowMenuProps {
   name: string;
   role: Role;
-  signOutEverywhere: () => Promise<void>;
+  signOutEverywhere: SignOutEverywhere;
 }
 
 /** Below 700 px the tools fold into one button that carries the name of the open one. */

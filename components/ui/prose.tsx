@@ -16,7 +16,10 @@ function Inline({ text }: { text: string }) {
  * Anything else is shown as it was typed; no HTML is read.
  */
 export function Prose({ text }: { text: string }) {
-  const blocks = text.trim().split(/\n\s*\n/).filter(Boolean);
+  const blocks = text
+    .trim()
+    .split(/\n\s*\n/)
+    .filter(Boolean);
   return (
     <div className="prose">
       {blocks.map((block, k) => {

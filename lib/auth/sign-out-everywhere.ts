@@ -1,13 +1,9 @@
 import 'server-only';
 import { db } from '@/db/client';
-import { insertEvent } from '@/db/queries/house';
 import { raiseSessionVersion } from '@/db/queries/people';
 import type { Actor } from '@/lib/people/actor';
 
-/** Ends every session of the actor, on every machine, this one too. */
+/** Ends every session of the actor, this one too, from the next request on. */
 export async function signOutEverywhere(actor: Actor): Promise<void> {
-  await db.transaction(async (tx) => {
-    await raiseSessionVersion(tx, actor.id);
-    await insertEvent(tx, { kind: 'person.signed-out-everywhere', actorId: actor.id, subjectId: actor.id });
-  });
+  await raiseSessionVersion(db, actor.id);
 }

@@ -1,16 +1,33 @@
 /** A reference as a BibTeX entry. */
 import type { Reference } from './entry';
 
-const SPECIAL: Readonly<Record<string, string>> = { '&': '\\&', '%': '\\%', $: '\\$', '#': '\\#', _: '\\_', '–': '--', '—': '---' };
+const SPECIAL: Readonly<Record<string, string>> = {
+  '&': '\\&',
+  '%': '\\%',
+  $: '\\$',
+  '#': '\\#',
+  _: '\\_',
+  '–': '--',
+  '—': '---',
+};
 const safe = (text: string) => text.replace(/[&%$#_–—]/g, (sign) => SPECIAL[sign] ?? sign);
 
 /** Authors in the book are "H. O. Kreiss, J. Oliger"; BibTeX joins them by "and". */
-const authorsOf = (authors: string) => authors.split(/\s*(?:,|;|\band\b)\s*/).filter(Boolean).join(' and ');
+const authorsOf = (authors: string) =>
+  authors
+    .split(/\s*(?:,|;|\band\b)\s*/)
+    .filter(Boolean)
+    .join(' and ');
 
 const surname = (authors: string) => {
   const first = authors.split(/[,;]/)[0]?.trim() ?? '';
   const last = first.split(/\s+/).at(-1) ?? '';
-  return last.normalize('NFD').replace(/[^A-Za-z]/g, '').toLowerCase() || 'anon';
+  return (
+    last
+      .normalize('NFD')
+      .replace(/[^A-Za-z]/g, '')
+      .toLowerCase() || 'anon'
+  );
 };
 
 /** "Tellus 24, 199–215" is a journal with volume and pages; anything else is taken as a publisher. */

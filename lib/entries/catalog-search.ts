@@ -13,12 +13,7 @@ interface Searched {
 
 /** One spelling for "Leap-frog", "leap frog" and "leapfrog", "Padé" and "pade". */
 const plain = (text: string) =>
-  text
-    .normalize('NFD')
-    .replace(/\p{M}/gu, '')
-    .toLowerCase()
-    .replace(/[–—-]/g, ' ')
-    .trim();
+  text.normalize('NFD').replace(/\p{M}/gu, '').toLowerCase().replace(/[–—-]/g, ' ').trim();
 const joined = (text: string) => plain(text).replace(/\s+/g, '');
 
 const searchedOf = (line: CatalogLine): Searched => ({

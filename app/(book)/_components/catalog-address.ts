@@ -32,7 +32,10 @@ export function useCatalogAddress(): CatalogAddress {
     ask: useCallback((text) => change((next) => put(next, 'look', text)), [change]),
     setCondition: useCallback((key, value) => change((next) => put(next, key, value)), [change]),
     clearConditions: useCallback(() => change((next) => CONDITION_KEYS.forEach((key) => next.delete(key))), [change]),
-    sortBy: useCallback((sorting) => change((next) => put(next, 'sort', sorting === 'number' ? null : sorting)), [change]),
+    sortBy: useCallback(
+      (sorting) => change((next) => put(next, 'sort', sorting === 'number' ? null : sorting)),
+      [change],
+    ),
   };
 }
 

@@ -20,7 +20,13 @@ const OptionMark = ({ condition, option }: { condition: ConditionKey; option: Co
   );
 };
 
-function Options({ condition, onCondition }: { condition: CountedCondition; onCondition: ConditionsProps['onCondition'] }) {
+function Options({
+  condition,
+  onCondition,
+}: {
+  condition: CountedCondition;
+  onCondition: ConditionsProps['onCondition'];
+}) {
   return (
     <ul>
       {condition.options.map((option) => (
@@ -49,7 +55,12 @@ export function ConditionBand({ conditions, onCondition }: ConditionsProps) {
   const first = conditions.filter(({ key }) => !FURTHER.includes(key));
   const further = conditions.filter(({ key }) => FURTHER.includes(key));
   const column = (condition: CountedCondition) => (
-    <div key={condition.key} className={isWide(condition) ? 'six' : undefined} role="group" aria-label={condition.title}>
+    <div
+      key={condition.key}
+      className={isWide(condition) ? 'six' : undefined}
+      role="group"
+      aria-label={condition.title}
+    >
       <h3>{condition.title}</h3>
       <Options condition={condition} onCondition={onCondition} />
     </div>

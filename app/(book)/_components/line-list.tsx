@@ -13,7 +13,17 @@ interface LineListProps {
   onChoose: (slug: string) => void;
 }
 
-function SortHead({ by, current, onSort, children }: { by: Sorting; current: Sorting; onSort: (by: Sorting) => void; children: ReactNode }) {
+function SortHead({
+  by,
+  current,
+  onSort,
+  children,
+}: {
+  by: Sorting;
+  current: Sorting;
+  onSort: (by: Sorting) => void;
+  children: ReactNode;
+}) {
   return (
     <span>
       <button type="button" aria-pressed={by === current} onClick={() => onSort(by)}>

@@ -36,13 +36,17 @@ export function NothingFound({ asked, inForce, letGo, onCondition, onText, witho
         </>
       ) : asked ? (
         <>
-          <p className="small q">Names, usual wordings, authors and call numbers are looked through. Without the text, {lines(withoutText)}.</p>
+          <p className="small q">
+            Names, usual wordings, authors and call numbers are looked through. Without the text, {lines(withoutText)}.
+          </p>
           <button type="button" className="btn" onClick={() => onText('')}>
             Clear the text
           </button>
         </>
       ) : (
-        <p className="small q">The book has no line yet, or no single condition stands in the way alone: clear them all.</p>
+        <p className="small q">
+          The book has no line yet, or no single condition stands in the way alone: clear them all.
+        </p>
       )}
     </div>
   );

@@ -18,7 +18,14 @@ function StaffBlock({ figure }: { figure: number }) {
       {[0, 1, 2, 3, 4].map((tenth) => {
         const width = tenth % 2 === 0 ? 24 : 8;
         return (
-          <rect key={tenth} x={isInk ? 0 : 40 - width} y={`${tenth * 10}%`} width={width} height="10.4%" className={look} />
+          <rect
+            key={tenth}
+            x={isInk ? 0 : 40 - width}
+            y={`${tenth * 10}%`}
+            width={width}
+            height="10.4%"
+            className={look}
+          />
         );
       })}
       <text x="20" y="86%" textAnchor="middle" className={look}>
@@ -37,7 +44,9 @@ export function Rod({ parts }: { parts: readonly SheetPart[] }) {
   useEffect(() => {
     const onScroll = () => {
       const line = window.innerHeight * 0.35;
-      const passed = parts.findLastIndex(({ id }) => (document.getElementById(id)?.getBoundingClientRect().top ?? Infinity) <= line);
+      const passed = parts.findLastIndex(
+        ({ id }) => (document.getElementById(id)?.getBoundingClientRect().top ?? Infinity) <= line,
+      );
       const atEnd = window.innerHeight + window.scrollY >= document.documentElement.scrollHeight - 4;
       setCurrent(atEnd && window.scrollY > 0 ? parts.length - 1 : Math.max(0, passed));
     };

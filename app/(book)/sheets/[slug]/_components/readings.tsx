@@ -1,0 +1,63 @@
+import { Formula } from '@/components/math/formula';
+import { MathText } from '@/components/math/math-text';
+import { Letters } from '@/components/math/letters';
+import type { SheetView } from '@/lib/entries/entry';
+import { EQUATION_LATEX } from '@/lib/entries/equation-latex';
+import type { Reading } from '@/lib/facts/readings';
+
+/** The rule, its equation and its dimensionless numbers. */
+function RuleLines({ rule, sheet }: { rule: readonly string[]; sheet: SheetView }) {
+  const equation = sheet.equation ? EQUATION_LATEX[sheet.equation] : null;
+  if (rule.length === 0 && !equation) return null;
+  return (
+    <div className="eqn">
+      {rule.map((latex) => (
+        <div key={latex}>
+          <Formula latex={latex} />
+        </div>
+      ))}
+      {equation && (
+        <div className="def">
+          {equation.parameters.map((latex) => (
+            <span key={latex}>
+              <Formula latex={latex} />
+            </span>
+          ))}
+          <span>
+            for <Formula latex={equation.short} />
+          </span>
+        </div>
+      )}
+    </div>
+  );
+}
+
+/** The left leaf: figures, each with what it means. */
+export const Readings = ({
+  rule,
+  sheet,
+  readings,
+}: {
+  rule: readonly string[];
+  sheet: SheetView;
+  readings: readonly Reading[];
+}) => (
+  <div className="left">
+    <div className="leafhd">
+      <span>Readings</span>
+      <span>computed by engine {sheet.engineVersion}</span>
+    </div>
+    <RuleLines rule={rule} sheet={sheet} />
+    <dl>
+      {readings.map(({ term, value, how }) => (
+        <div key={term} className="read">
+          <dt>{term}</dt>
+          <dd>{typeof value === 'string' ? <Letters text={value} /> : <MathText runs={value} />}</dd>
+          <dd>
+            <Letters text={how} />
+          </dd>
+        </div>
+      ))}
+    </dl>
+  </div>
+);
