@@ -21,6 +21,9 @@ const PARTS = [
   'π',
 ];
 
+/** Four decimals; a last bit that differs between machines must not turn 0 into −0. */
+const fixedText = (value: number) => value.toFixed(4).replace(/^-(?=0\.0000$)/, '').replace('-', '−');
+
 /** The numbers of a plot as a table, at every sixteenth of π. */
 export function CurveTable({ data }: { data: ThetaPlotData }) {
   const indexOf = (step: number) => Math.round((step / STEPS) * (data.theta.length - 1));
@@ -49,7 +52,7 @@ export function CurveTable({ data }: { data: ThetaPlotData }) {
                   const value = curve.values[indexOf(step)] ?? null;
                   return (
                     <td key={curve.name} className="r">
-                      {value === null ? '–' : value.toFixed(4).replace('-', '−')}
+                      {value === null ? '–' : fixedText(value)}
                     </td>
                   );
                 })}
