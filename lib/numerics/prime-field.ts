@@ -204,31 +204,31 @@ export function modularDeterminant(field: PrimeField, rows: number[][]): number 
   return result;
 }
 
-/** Integers known modulo a growing product of primes, lifted into the symmetric range. */
+/** Integers known modulo a growing product of primes, in the symmetric range. */
 export class ChineseRemainder {
   private modulus = 1n;
-  private values: bigint[];
+  private readonly values: bigint[];
 
   constructor(size: number) {
     this.values = new Array<bigint>(size).fill(0n);
   }
 
-  get bits(): number {
-    return this.modulus.toString(16).length * 4 - 4;
-  }
-
-  include(field: PrimeField, images: ArrayLike<number>): void {
+  /** @returns whether any value changed; balanced digits, so that small negative numbers come to rest too */
+  include(field: PrimeField, images: ArrayLike<number>): boolean {
     const inverse = field.inverse(field.reduce(this.modulus));
+    let changed = false;
     for (let k = 0; k < this.values.length; k++) {
       const value = this.values[k]!;
       const step = field.mul(field.sub(images[k] ?? 0, field.reduce(value)), inverse);
-      if (step !== 0) this.values[k] = value + this.modulus * BigInt(step);
+      if (step === 0) continue;
+      changed = true;
+      this.values[k] = value + this.modulus * BigInt(2 * step > field.prime ? step - field.prime : step);
     }
     this.modulus *= field.bigPrime;
+    return changed;
   }
 
   lifted(): bigint[] {
-    const half = this.modulus / 2n;
-    return this.values.map((value) => (value > half ? value - this.modulus : value));
+    return [...this.values];
   }
 }

@@ -1,0 +1,145 @@
+/**
+ * Closed forms of algebraic numbers: a rational, a root of one, (a + b√n)/c or the square root of it, else the
+ * minimal polynomial. A factor is looked for by lattice reduction on many digits and then proved to vanish at the
+ * number by exact division; the printed form must reproduce 15 digits of a decimal refined independently.
+ */
+import { AlgebraicNumber } from '../algebraic-number';
+import { degree, gcd, type IntegerPolynomial, polynomialText, primitivePart, trimmed } from '../integer-polynomial';
+import { reducedLattice } from '../lattice-reduction';
+import { formatRational, gcd as gcdOfIntegers, type Rational, rational, toNumber } from '../rational';
+
+export interface ClosedForm {
+  /** In the language of expressions, with sqrt; null where none is recognised. */
+  readonly text: string | null;
+  /** Null for rational numbers, and where the polynomial is too long to be read. */
+  readonly minimalPolynomial: string | null;
+}
+
+/** Longest polynomial shown to a reader. */
+const POLYNOMIAL_TEXT_MAX = 1200;
+const SEARCH_DEGREE_MAX = 6;
+const SEARCH_BITS = 240;
+
+/** An integer polynomial of degree ≤ n in x^step that vanishes at the number, proved; null where none is found. */
+function smallRelation(value: AlgebraicNumber, n: number, step: number, check: () => void): IntegerPolynomial | null {
+  const bits = SEARCH_BITS + 60 * n;
+  value.refine(bits + 20);
+  const scale = 1n << BigInt(bits);
+  const { lo } = value;
+  const rows: bigint[][] = [];
+  for (let k = 0; k <= n; k++) {
+    const row = new Array<bigint>(n + 2).fill(0n);
+    row[k] = 1n;
+    row[n + 1] = (scale * lo.num ** BigInt(k * step)) / lo.den ** BigInt(k * step);
+    rows.push(row);
+  }
+  const shortest = reducedLattice(rows, check)[0]!;
+  const relation = new Array<bigint>(n * step + 1).fill(0n);
+  for (let k = 0; k <= n; k++) relation[k * step] = shortest[k]!;
+  const candidate = primitivePart(trimmed(relation));
+  return candidate.length > 1 && value.isRootOf(candidate) ? candidate : null;
+}
+
+/** The polynomial as one in x^step with the largest step. */
+function inPowers(a: IntegerPolynomial): { step: number; core: IntegerPolynomial } {
+  let step = 0;
+  a.forEach((c, k) => {
+    if (c !== 0n) step = Number(gcdOfIntegers(BigInt(step), BigInt(k)));
+  });
+  return { step: Math.max(1, step), core: a.filter((_, k) => k % Math.max(1, step) === 0) };
+}
+
+function minimalCandidate(value: AlgebraicNumber, check: () => void): IntegerPolynomial {
+  const { polynomial } = value;
+  const { core } = inPowers(polynomial);
+  if (degree(polynomial) <= 1) return polynomial;
+  for (let n = 1; n <= SEARCH_DEGREE_MAX; n++)
+    for (const step of n === 1 ? [1, 2, 3, 4] : n <= 3 ? [1, 2] : [1]) {
+      if (n * step > Math.max(SEARCH_DEGREE_MAX, 4) || n * step > degree(polynomial)) continue;
+      if (degree(core) === n && n * step === degree(polynomial)) {
+        if (n <= 2) return polynomial;
+        continue;
+      }
+      const found = smallRelation(value, n, step, check);
+      if (found) return gcd(found, polynomial);
+    }
+  return polynomial;
+}
+
+/** √(a/b) as "2*sqrt(3)/9", for a/b > 0. */
+function squareRootText(square: Rational): string {
+  let [outside, inside] = [1n, square.num * square.den];
+  for (let p = 2n; p * p <= inside && p < 2000n; p++)
+    while (inside % (p * p) === 0n) {
+      inside /= p * p;
+      outside *= p;
+    }
+  const factor = rational(outside, square.den);
+  if (inside === 1n) return formatRational(factor);
+  const head = factor.num === 1n ? '' : `${factor.num}*`;
+  return `${head}sqrt(${inside})${factor.den === 1n ? '' : `/${factor.den}`}`;
+}
+
+/** The root (−b ± √(b² − 4ac)) / 2a of a quadratic nearest to a value, as text and number. */
+function quadraticText(core: IntegerPolynomial, near: number): { text: string; value: number } | null {
+  const [c, b, a] = [core[0]!, core[1]!, core[2]!];
+  let [inside, outside] = [b * b - 4n * a * c, 1n];
+  for (let p = 2n; p * p <= inside && p < 2000n; p++)
+    while (inside % (p * p) === 0n) {
+      inside /= p * p;
+      outside *= p;
+    }
+  const common = gcdOfIntegers(gcdOfIntegers(b, outside), 2n * a);
+  const [constant, factor, den] = [-b / common, outside / common, (2n * a) / common];
+  for (const side of [1n, -1n]) {
+    const value = (Number(constant) + Number(side * factor) * Math.sqrt(Number(inside))) / Number(den);
+    if (Math.abs(value - near) > 1e-9 * Math.max(1, Math.abs(near))) continue;
+    const root = `${factor === 1n ? '' : `${factor}*`}sqrt(${inside})`;
+    const sum =
+      constant === 0n
+        ? `${side < 0n ? '-' : ''}${root}`
+        : side > 0n && constant < 0n
+          ? `${root} - ${-constant}`
+          : `${constant} ${side > 0n ? '+' : '-'} ${root}`;
+    if (den === 1n) return { text: sum, value };
+    return { text: constant === 0n ? `${sum}/${den}` : `(${sum})/${den}`, value };
+  }
+  return null;
+}
+
+function radicalText(minimal: IntegerPolynomial, value: AlgebraicNumber): { text: string; value: number } | null {
+  const number = value.toNumber();
+  const { step, core } = inPowers(minimal);
+  const sign = number < 0 ? '-' : '';
+  const size = Math.abs(number);
+  const signed = (text: string, result: number) => ({
+    text: sign === '' ? text : /^[\w*/^().]+$/.test(text) ? `-${text}` : `-(${text})`,
+    value: sign === '' ? result : -result,
+  });
+  if (degree(core) === 1) {
+    const power = rational(-core[0]!, core[1]!);
+    if (step === 1) return { text: formatRational(power), value: toNumber(power) };
+    const root = number < 0 && step % 2 === 1 ? rational(-power.num, power.den) : power;
+    const computed = toNumber(root) ** (1 / step);
+    if (step === 2) return signed(squareRootText(root), computed);
+    const base = root.den === 1n ? String(root.num) : `(${formatRational(root)})`;
+    return signed(`${base}^(1/${step})`, computed);
+  }
+  if (degree(core) !== 2 || step > 2) return null;
+  const inner = quadraticText(core, step === 1 ? number : size * size);
+  if (!inner || step === 1) return inner;
+  return signed(`sqrt(${inner.text})`, Math.sqrt(inner.value));
+}
+
+/** @param symbol name of the parameter, for the minimal polynomial */
+export function closedForm(value: AlgebraicNumber, symbol: string, check: () => void = () => undefined): ClosedForm {
+  const known = value.exact;
+  if (known) return { text: formatRational(known), minimalPolynomial: null };
+  const minimal = minimalCandidate(value, check);
+  const radical = radicalText(minimal, value);
+  const decimal = Number(value.toDecimal(20));
+  const text = radical && Math.abs(radical.value - decimal) <= 1e-14 * Math.abs(decimal) ? radical.text : null;
+  if (text !== null && degree(minimal) === 1) return { text, minimalPolynomial: null };
+  const polynomial = polynomialText(minimal, symbol);
+  return { text, minimalPolynomial: polynomial.length <= POLYNOMIAL_TEXT_MAX ? polynomial : null };
+}

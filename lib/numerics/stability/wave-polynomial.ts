@@ -1,0 +1,176 @@
+/**
+ * A one-dimensional, one-parameter scalar scheme applied to the wave w = e^(iθ): the polynomial
+ *
+ *     P(z; w, p) = Σ_k a_k(w, p) z^k,   a_k = Σ coefficient · w^wave · p^power
+ *
+ * over the Gaussian integers, oldest level first. Roots |z| ≤ 1 for all |w| = 1 mean stability.
+ */
+import type { ScalarScheme } from '../canonical-scheme';
+import { gcd } from '../rational';
+
+export interface GaussianInteger {
+  readonly re: bigint;
+  readonly im: bigint;
+}
+
+export interface WaveTerm extends GaussianInteger {
+  /** Exponent of w. */
+  readonly wave: number;
+  /** Exponent of the parameter. */
+  readonly power: number;
+}
+
+export interface WavePolynomial {
+  /** a_0 … a_m; the newest and the oldest are not identically zero. */
+  readonly levels: readonly (readonly WaveTerm[])[];
+  /** Largest exponent of w over all terms; the smallest is 0. */
+  readonly span: number;
+  readonly parameterDegree: number;
+  /** All coefficients are real: waves θ and −θ behave alike. */
+  readonly real: boolean;
+  readonly timeOrder: 1 | 2;
+}
+
+export const rootCount = (wave: WavePolynomial) => wave.levels.length - 1;
+
+/** The polynomial of a scheme, or a sentence saying why this scheme has none of this kind. */
+export function wavePolynomial(scheme: ScalarScheme): WavePolynomial | string {
+  if (scheme.dims !== 1) return 'Exact bounds are computed in one dimension.';
+  if (scheme.parameters.length !== 1) return 'Exact bounds are computed for one parameter.';
+  const terms = scheme.terms.filter((term) => term.coefficient.length > 0);
+  const first = terms[0];
+  if (!first) return 'The scheme has no terms.';
+
+  let common = 1n;
+  for (const { coefficient } of terms)
+    for (const { re, im } of coefficient)
+      for (const den of [re.den, im.den]) common = (common / gcd(common, den)) * den;
+
+  const origin = first.offset[0]!;
+  const oldest = terms.reduce((low, { level }) => (level.num < low ? level.num : low), first.level.num);
+  const levels: WaveTerm[][] = [];
+  for (const { level, offset, coefficient } of terms) {
+    const shift = offset[0]!.num * origin.den - origin.num * offset[0]!.den;
+    const den = offset[0]!.den * origin.den;
+    if (level.den !== 1n || shift % den !== 0n)
+      return 'Exact bounds are computed for whole levels and for offsets that differ by whole grid spacings.';
+    const at = Number(level.num - oldest);
+    while (levels.length <= at) levels.push([]);
+    for (const { powers, re, im } of coefficient)
+      levels[at]!.push({
+        wave: Number(shift / den),
+        power: powers[0]!,
+        re: re.num * (common / re.den),
+        im: im.num * (common / im.den),
+      });
+  }
+  return normalized(levels, scheme.timeOrder);
+}
+
+/** Common powers of w and of the parameter, and common integer factors, taken out. */
+export function normalized(levels: readonly (readonly WaveTerm[])[], timeOrder: 1 | 2): WavePolynomial {
+  const all = levels.flat();
+  const lowest = Math.min(...all.map((term) => term.wave));
+  const span = Math.max(...all.map((term) => term.wave)) - lowest;
+  const power = Math.min(...all.map((term) => term.power));
+  let common = 0n;
+  for (const { re, im } of all) common = gcd(gcd(common, re), im);
+  return {
+    levels: levels.map((terms) =>
+      terms.map((term) => ({
+        wave: term.wave - lowest,
+        power: term.power - power,
+        re: term.re / common,
+        im: term.im / common,
+      })),
+    ),
+    span,
+    parameterDegree: Math.max(...all.map((term) => term.power)) - power,
+    real: all.every((term) => term.im === 0n),
+    timeOrder,
+  };
+}
+
+/** The polynomial at one rational value num/den of the parameter: no parameter is left in it. */
+export function atParameter(wave: WavePolynomial, num: bigint, den: bigint): WavePolynomial | null {
+  const levels = wave.levels.map((terms) => {
+    const byWave = new Map<number, { re: bigint; im: bigint }>();
+    for (const term of terms) {
+      const factor = num ** BigInt(term.power) * den ** BigInt(wave.parameterDegree - term.power);
+      const sum = byWave.get(term.wave) ?? { re: 0n, im: 0n };
+      byWave.set(term.wave, { re: sum.re + term.re * factor, im: sum.im + term.im * factor });
+    }
+    return [...byWave]
+      .filter(([, { re, im }]) => re !== 0n || im !== 0n)
+      .map(([exponent, value]) => ({ wave: exponent, power: 0, ...value }));
+  });
+  if (levels.every((terms) => terms.length === 0)) return null;
+  return normalized(levels, wave.timeOrder);
+}
+
+/**
+ * a_0 … a_m at p = num/den and w = (a + ib)/(a − ib), that is θ = 2 atan(b/a): Gaussian integers up to one
+ * common positive factor and one common factor of modulus 1.
+ */
+export function atWave(
+  wave: WavePolynomial,
+  parameter: { readonly num: bigint; readonly den: bigint },
+  a: bigint,
+  b: bigint,
+): GaussianInteger[] {
+  // w^k ∝ (a + ib)^k (a − ib)^(span − k)
+  const up = gaussianPowers(a, b, wave.span);
+  const down = gaussianPowers(a, -b, wave.span);
+  const waves = up.map((u, k) => product(u, down[wave.span - k]!));
+  const powers: bigint[] = [];
+  for (let k = 0; k <= wave.parameterDegree; k++)
+    powers.push(parameter.num ** BigInt(k) * parameter.den ** BigInt(wave.parameterDegree - k));
+  return wave.levels.map((terms) => {
+    let [re, im] = [0n, 0n];
+    for (const term of terms) {
+      const w = waves[term.wave]!;
+      const factor = powers[term.power]!;
+      re += factor * (term.re * w.re - term.im * w.im);
+      im += factor * (term.re * w.im + term.im * w.re);
+    }
+    return { re, im };
+  });
+}
+
+export const product = (a: GaussianInteger, b: GaussianInteger): GaussianInteger => ({
+  re: a.re * b.re - a.im * b.im,
+  im: a.re * b.im + a.im * b.re,
+});
+
+function gaussianPowers(a: bigint, b: bigint, count: number): GaussianInteger[] {
+  const powers: GaussianInteger[] = [{ re: 1n, im: 0n }];
+  for (let k = 0; k < count; k++) powers.push(product(powers[k]!, { re: a, im: b }));
+  return powers;
+}
+
+/** The same in double precision, as [re, im] of each level; coefficients beyond the range of a double are scaled down together. */
+export function sampled(wave: WavePolynomial): (parameter: number, theta: number) => [number, number][] {
+  const largest = wave.levels.flat().reduce((bits, { re, im }) => Math.max(bits, bitLength(re), bitLength(im)), 0);
+  const shift = BigInt(Math.max(0, largest - 900));
+  const levels = wave.levels.map((terms) =>
+    terms.map(({ wave: exponent, power, re, im }) => ({
+      exponent,
+      power,
+      re: Number(re >> shift),
+      im: Number(im >> shift),
+    })),
+  );
+  return (parameter, theta) =>
+    levels.map((terms) => {
+      let [re, im] = [0, 0];
+      for (const term of terms) {
+        const factor = parameter ** term.power;
+        const [c, s] = [Math.cos(term.exponent * theta), Math.sin(term.exponent * theta)];
+        re += factor * (term.re * c - term.im * s);
+        im += factor * (term.re * s + term.im * c);
+      }
+      return [re, im];
+    });
+}
+
+const bitLength = (a: bigint) => (a < 0n ? -a : a).toString(2).length;
