@@ -22,9 +22,11 @@ export function openPool(url: string | undefined, connectionsMax = 10): pg.Pool 
     idle_in_transaction_session_timeout: 60_000,
     keepAlive: true,
   });
-  // An idle connection that breaks (PostgreSQL stopped) reports here. Without a listener the process would
-  // end; the pool itself has already dropped the connection, and the next query says what matters.
+  // A connection that breaks while no query is under way reports here, or on itself where a transaction holds
+  // it. Without listeners the process would end; the pool has dropped the connection, or drops it when it is
+  // given back, and the next query says what matters.
   pool.on('error', () => undefined);
+  pool.on('connect', (client) => client.on('error', () => undefined));
   return pool;
 }
 

@@ -24,7 +24,7 @@ export function brokenRule(error: unknown): string | null {
 // Class 08 connection exceptions; 57P01-57P03 shutdown and start-up; 53300 too many connections.
 const AWAY_CODE = /^(08\d\d\d|57P0[123]|53300|ECONNREFUSED|ECONNRESET|EPIPE|ENOTFOUND|ETIMEDOUT|EHOSTUNREACH)$/;
 const AWAY_MESSAGE =
-  /^Connection terminated|^timeout exceeded when trying to connect|^Client has encountered a connection error/;
+  /^Connection terminated|^timeout exceeded when trying to connect|^Client has encountered a connection error|is not currently accepting connections$/;
 
 /** Whether PostgreSQL is stopped, starting, unreachable or out of connections: a state that passes by itself. */
 export function isDatabaseAway(error: unknown): boolean {
