@@ -9,8 +9,9 @@
  *     march <id> <n> <steps> <parameter values as bits, one word each>
  *     <levels × n lines: the kept levels, oldest first, n interior points each>
  *       answers   state <id> <status>            status 0, or the kernel's error code
- *                 <kept levels × n lines, oldest first, after `steps` steps; none where status is not 0>
- *                 step by step, also outside the stable range: a trial marches there to see that it grows
+ *                 <kept levels × n lines, oldest first, after `steps` steps; none where status is not 0 or 3>
+ *                 status 3, outside the stable range, is told and the steps are taken all the same: a trial
+ *                 marches just outside the bound to see that it grows there
  *
  *     run <id> <n> <steps> <parameter values>    as march, but through the kernel's run routine with all its checks:
  *                                                no levels where status is not 0

@@ -27,39 +27,51 @@ export const notApplicable = (name: FindingName, reason: string): Check => ({
 /** Thrown inside a judgement where the kernel gave no usable answer; the finding then fails with this sentence. */
 export class NoAnswer extends Error {}
 
-/** Status by which a kernel tells that a parameter lies outside its stable range; the steps are taken all the same. */
+/** @throws {NoAnswer} where the kernel did not answer */
+export function statusOf(answers: Answers, id: string): number {
+  const answer = answers.get(id);
+  if (!answer || answer.kind !== 'state') throw new NoAnswer('the kernel gave no answer');
+  return answer.status;
+}
+
+/** Status by which a kernel tells that a parameter lies outside its stable range. */
 export const OUTSIDE_BOUND = 3;
 
 /**
- * @param due the status that the kernel must give
- * @throws {NoAnswer} where the kernel did not answer, or gave another status
+ * @param outside whether the state may come from outside the stable range
+ * @throws {NoAnswer} where the kernel did not answer, or refused with a status
  */
-export function stateOf(answers: Answers, id: string, due = 0): Float64Array[] {
+export function stateOf(answers: Answers, id: string, outside = false): Float64Array[] {
+  const status = statusOf(answers, id);
   const answer = answers.get(id);
-  if (!answer || answer.kind !== 'state') throw new NoAnswer('the kernel gave no answer');
-  const { status, levels } = answer;
-  if (status === due && levels.length > 0) return levels;
-  if (due === OUTSIDE_BOUND && status === 0)
-    throw new NoAnswer('the kernel takes a value outside the bound for one inside');
-  if (status === OUTSIDE_BOUND && due === 0)
-    throw new NoAnswer('the kernel takes a value inside the bound for one outside');
-  throw new NoAnswer(`the kernel refused with status ${status}`);
+  const accepted = status === 0 || (outside && status === OUTSIDE_BOUND);
+  if (!accepted || answer?.kind !== 'state' || answer.levels.length === 0)
+    throw new NoAnswer(`the kernel refused with status ${status}`);
+  return answer.levels;
 }
 
-/** Judges, and turns a missing answer into a failed finding. */
-export function judgeCheck(check: Check, answers: Answers, language: TrialLanguage): FindingView {
+/**
+ * Judges, and turns a missing answer into a failed finding.
+ * @param fault why the kernel's run did not end well, where it did not
+ */
+export function judgeCheck(
+  check: Check,
+  answers: Answers,
+  language: TrialLanguage,
+  fault: string | null = null,
+): FindingView {
   try {
     return { name: check.name, language, ...check.judge(answers, language) };
-  } catch (fault) {
-    if (!(fault instanceof NoAnswer)) throw fault;
-    const how = `A task of this finding was not carried out: ${fault.message}.`;
+  } catch (error) {
+    if (!(error instanceof NoAnswer)) throw error;
+    const measured = fault ?? error.message;
     return {
       name: check.name,
       language,
       outcome: 'failed',
-      measured: fault.message,
+      measured,
       target: 'an answer',
-      how,
+      how: `A task of this finding was not carried out: ${error.message}${fault ? `, since ${fault}` : ''}.`,
       data: null,
     };
   }

@@ -1,7 +1,7 @@
 /** Bounded just below the bound, growing just above it; or growing at any value where the facts say so. */
-import type { MarchTask } from '@/lib/codegen/driver-protocol';
+import type { MarchTask, RunTask } from '@/lib/codegen/driver-protocol';
 import { gridGrowth, sampleScheme } from './characteristic';
-import { notApplicable, outcomeOf, OUTSIDE_BOUND, short, stateOf, type Answers, type Check } from './check';
+import { notApplicable, OUTSIDE_BOUND, outcomeOf, short, stateOf, statusOf, type Answers, type Check } from './check';
 import { randomField } from './smooth-field';
 import type { BoundEnd, MarchSubject } from './subject';
 
@@ -80,10 +80,22 @@ function calmRatio(answers: Answers, id: string): number {
 const growthTasks = (subject: MarchSubject, id: string, { parameters, n, steps }: Growing) =>
   [steps / 2, steps].map((count, k) => march(subject, `${id}:${k}`, parameters, n, count));
 
-/** @param told the status that the kernel must give there */
-function measuredRate(answers: Answers, id: string, steps: number, told = 0): number {
-  const [half, full] = [0, 1].map((k) => norm(stateOf(answers, `${id}:${k}`, told)));
+function measuredRate(answers: Answers, id: string, steps: number): number {
+  const [half, full] = [0, 1].map((k) => norm(stateOf(answers, `${id}:${k}`, true)));
   return (full! / half!) ** (2 / steps);
+}
+
+/** One step of the kernel's own loop, which compares the parameter with the bound. */
+const probe = (subject: MarchSubject, id: string, parameters: readonly number[]): RunTask => ({
+  ...march(subject, id, parameters, CALM_POINTS, 1),
+  kind: 'run',
+});
+
+/** Why the kernel's own check of the bound is wrong; null where it is right or there is none. */
+function wrongCheck(subject: MarchSubject, answers: Answers, id: string): string | null {
+  if (!subject.checksBound) return null;
+  if (statusOf(answers, `${id}:in`) !== 0) return 'the kernel refuses a value inside the bound';
+  return statusOf(answers, `${id}:out`) === OUTSIDE_BOUND ? null : 'the kernel takes a value outside the bound';
 }
 
 const agrees = (measured: number, computed: number | null) =>
@@ -115,11 +127,18 @@ function boundedCheck(subject: MarchSubject): Check {
     tasks: plans.flatMap(({ end, outside }, k) => [
       ...calmTasks(subject, `margin:${k}:in`, end.vector(end.inside)),
       ...growthTasks(subject, `margin:${k}:out`, outside),
+      ...(subject.checksBound
+        ? [
+            probe(subject, `margin:${k}:probe:in`, end.vector(end.inside)),
+            probe(subject, `margin:${k}:probe:out`, outside.parameters),
+          ]
+        : []),
     ]),
     judge: (answers) => {
       const rows = plans.map(({ end, outside }, k) => {
         const calm = calmRatio(answers, `margin:${k}:in`);
-        const rate = measuredRate(answers, `margin:${k}:out`, outside.steps, subject.checksBound ? OUTSIDE_BOUND : 0);
+        const rate = measuredRate(answers, `margin:${k}:out`, outside.steps);
+        const wrong = wrongCheck(subject, answers, `margin:${k}:probe`);
         return {
           parameter: end.parameter,
           bound: end.bound,
@@ -133,7 +152,8 @@ function boundedCheck(subject: MarchSubject): Check {
             measuredRate: Number.isFinite(rate) ? rate : null,
             theta: outside.theta,
           },
-          passed: calm <= CALM_LIMIT && agrees(rate, outside.rate),
+          wrong,
+          passed: wrong === null && calm <= CALM_LIMIT && agrees(rate, outside.rate),
         };
       });
       const worst = rows.find(({ passed }) => !passed) ?? rows[0]!;
@@ -142,7 +162,9 @@ function boundedCheck(subject: MarchSubject): Check {
       const rate = worst.outside.measuredRate;
       return {
         outcome: outcomeOf(rows.every(({ passed }) => passed)),
-        measured: `x ${calm === null ? 'overflow' : short(calm)} at ${place(worst.inside.value)}; x ${rate === null ? 'overflow' : rate.toPrecision(6)} a step at ${place(worst.outside.value)}`,
+        measured:
+          worst.wrong ??
+          `x ${calm === null ? 'overflow' : short(calm)} at ${place(worst.inside.value)}; x ${rate === null ? 'overflow' : rate.toPrecision(6)} a step at ${place(worst.outside.value)}`,
         target:
           worst.outside.computedRate === null
             ? `<= x ${CALM_LIMIT} inside; growth outside, where the definition gives none`

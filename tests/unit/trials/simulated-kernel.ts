@@ -86,11 +86,15 @@ export function simulate(subject: Subject, task: DriverTask, flaws: Flaws = {}):
     return { kind: 'state', id: task.id, status: 0, levels: [out] };
   }
   if (subject.kind !== 'march') throw new Error('a stencil is applied, not marched');
-  const outside = subject.checksBound && flaws.bound !== undefined && Math.abs(task.parameters[0]!) > flaws.bound;
+  const outside =
+    task.kind === 'run' &&
+    subject.checksBound &&
+    flaws.bound !== undefined &&
+    Math.abs(task.parameters[0]!) > flaws.bound;
   let levels = task.levels;
   if (task.kind === 'start') levels = start(subject.scheme, task.parameters, levels, subject.keptLevels, flaws);
   else for (let k = 0; k < task.steps; k++) levels = step(subject.scheme, task.parameters, levels, flaws);
-  return { kind: 'state', id: task.id, status: outside ? 3 : 0, levels };
+  return { kind: 'state', id: task.id, status: outside ? 3 : 0, levels: outside ? [] : levels };
 }
 
 /** Answers to all tasks of a plan. */
