@@ -1,10 +1,13 @@
 /** The address of a kernel as a file, and what it asks for: /kernels/leapfrog-central-2/1/lb_ad003.c?precision=double */
-import { KERNEL_LANGUAGES, type KernelLanguage, KernelOptions } from '@/lib/codegen/kernel-request';
+import { type KernelLanguage, KernelOptions } from '@/lib/codegen/kernel-request';
 
-const LANGUAGE_OF_SUFFIX: Readonly<Record<string, KernelLanguage>> = { c: 'c', f90: 'fortran', py: 'python' };
-const SUFFIXES = Object.keys(LANGUAGE_OF_SUFFIX)
-  .map((suffix) => `.${suffix}`)
-  .join(', ');
+// A Map: a plain object would also know the suffix "constructor".
+const LANGUAGE_OF_SUFFIX: ReadonlyMap<string, KernelLanguage> = new Map([
+  ['c', 'c'],
+  ['f90', 'fortran'],
+  ['py', 'python'],
+]);
+const SUFFIXES = [...LANGUAGE_OF_SUFFIX.keys()].map((suffix) => `.${suffix}`).join(', ');
 
 export interface KernelAddress {
   slug: string;
@@ -30,10 +33,10 @@ export function readKernelAddress(
   const revision = /^[1-9]\d{0,5}$/.test(path.revision) ? Number(path.revision) : null;
   if (revision === null)
     return refused(`"${path.revision}" is no revision number.`, 'revision', 'accepted: a number from 1');
-  const language = LANGUAGE_OF_SUFFIX[/\.([a-z0-9]+)$/.exec(path.file)?.[1] ?? ''];
+  const language = LANGUAGE_OF_SUFFIX.get(/\.([a-z0-9]+)$/.exec(path.file)?.[1] ?? '');
   if (!language)
     return refused(
-      `"${path.file}" is no kernel file. Kernels come in ${KERNEL_LANGUAGES.length} languages: ${SUFFIXES}.`,
+      `"${path.file}" is no kernel file. Kernels end in ${SUFFIXES}.`,
       'file',
       `accepted: a name that ends in ${SUFFIXES}`,
     );
