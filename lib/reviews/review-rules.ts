@@ -20,7 +20,7 @@ export interface ReviewFacts {
   signaturesNeeded: number;
 }
 
-const COUNT = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine'];
+const COUNT = ['none', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine'];
 const inWords = (count: number) => COUNT[count] ?? String(count);
 
 /** Why `who` cannot change the text. */

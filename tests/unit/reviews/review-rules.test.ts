@@ -60,7 +60,7 @@ describe('vetting', () => {
   });
 
   it.each([
-    [[], 2, 'It has no of two signatures'],
+    [[], 2, 'It has none of two signatures'],
     [['first'], 2, 'It has one of two signatures'],
     [['first', 'second'], 3, 'It has two of three signatures'],
     // The author's does not count, nor one person twice.
