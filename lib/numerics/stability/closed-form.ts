@@ -3,8 +3,9 @@
  * minimal polynomial. A factor is looked for by lattice reduction on many digits and then proved to vanish at the
  * number by exact division; the printed form must reproduce 15 digits of a decimal refined independently.
  */
-import { AlgebraicNumber } from '../algebraic-number';
+import { type AlgebraicNumber } from '../algebraic-number';
 import { degree, gcd, type IntegerPolynomial, polynomialText, primitivePart, trimmed } from '../integer-polynomial';
+import { possibleFactorDegrees } from '../factor-degrees';
 import { reducedLattice } from '../lattice-reduction';
 import { formatRational, gcd as gcdOfIntegers, type Rational, rational, toNumber } from '../rational';
 
@@ -18,11 +19,12 @@ export interface ClosedForm {
 /** Longest polynomial shown to a reader. */
 const POLYNOMIAL_TEXT_MAX = 1200;
 const SEARCH_DEGREE_MAX = 6;
-const SEARCH_BITS = 240;
+/** Digits of the number, in bits per coefficient of the relation looked for. */
+const SEARCH_BITS = 64;
 
-/** An integer polynomial of degree ≤ n in x^step that vanishes at the number, proved; null where none is found. */
-function smallRelation(value: AlgebraicNumber, n: number, step: number, check: () => void): IntegerPolynomial | null {
-  const bits = SEARCH_BITS + 60 * n;
+/** An integer polynomial of degree ≤ n that vanishes at the number, proved; null where none is found. */
+function smallRelation(value: AlgebraicNumber, n: number, check: () => void): IntegerPolynomial | null {
+  const bits = SEARCH_BITS * (n + 1);
   value.refine(bits + 20);
   const scale = 1n << BigInt(bits);
   const { lo } = value;
@@ -30,13 +32,11 @@ function smallRelation(value: AlgebraicNumber, n: number, step: number, check: (
   for (let k = 0; k <= n; k++) {
     const row = new Array<bigint>(n + 2).fill(0n);
     row[k] = 1n;
-    row[n + 1] = (scale * lo.num ** BigInt(k * step)) / lo.den ** BigInt(k * step);
+    row[n + 1] = (scale * lo.num ** BigInt(k)) / lo.den ** BigInt(k);
     rows.push(row);
   }
   const shortest = reducedLattice(rows, check)[0]!;
-  const relation = new Array<bigint>(n * step + 1).fill(0n);
-  for (let k = 0; k <= n; k++) relation[k * step] = shortest[k]!;
-  const candidate = primitivePart(trimmed(relation));
+  const candidate = primitivePart(trimmed(shortest.slice(0, n + 1)));
   return candidate.length > 1 && value.isRootOf(candidate) ? candidate : null;
 }
 
@@ -49,20 +49,25 @@ function inPowers(a: IntegerPolynomial): { step: number; core: IntegerPolynomial
   return { step: Math.max(1, step), core: a.filter((_, k) => k % Math.max(1, step) === 0) };
 }
 
+/** The irreducible factor that vanishes at the number where one of low degree does, else the known polynomial. */
 function minimalCandidate(value: AlgebraicNumber, check: () => void): IntegerPolynomial {
   const { polynomial } = value;
-  const { core } = inPowers(polynomial);
-  if (degree(polynomial) <= 1) return polynomial;
-  for (let n = 1; n <= SEARCH_DEGREE_MAX; n++)
-    for (const step of n === 1 ? [1, 2, 3, 4] : n <= 3 ? [1, 2] : [1]) {
-      if (n * step > Math.max(SEARCH_DEGREE_MAX, 4) || n * step > degree(polynomial)) continue;
-      if (degree(core) === n && n * step === degree(polynomial)) {
-        if (n <= 2) return polynomial;
-        continue;
-      }
-      const found = smallRelation(value, n, step, check);
-      if (found) return gcd(found, polynomial);
-    }
+  const { step, core } = inPowers(polynomial);
+  // Polynomials in x^step with a core of degree ≤ 2 have closed forms as they are.
+  if (
+    degree(core) <= 2 &&
+    step <= 4 &&
+    possibleFactorDegrees(core)
+      .slice(1, degree(core))
+      .every((each) => !each)
+  )
+    return polynomial;
+  const possible = possibleFactorDegrees(polynomial);
+  for (let n = 1; n <= SEARCH_DEGREE_MAX; n++) {
+    if (n >= degree(polynomial) || !possible[n]) continue;
+    const found = smallRelation(value, n, check);
+    if (found) return gcd(found, polynomial);
+  }
   return polynomial;
 }
 
