@@ -1,12 +1,19 @@
-import { asc, desc, eq, sql } from 'drizzle-orm';
+import { type SQL, and, asc, desc, eq, sql } from 'drizzle-orm';
 import type { TrialView } from '@/lib/trials/trial';
 import type { Database } from '../client';
 import { people } from '../schema/people';
 import { revisions } from '../schema/revisions';
 import { findings, trials } from '../schema/trials';
+import { type Viewer, visibleTo } from './visible-to';
 
 /** The trial that counts for a revision: the last one queued; null where it was never tried. */
-export async function findLatestTrial(db: Database, revisionId: string): Promise<TrialView | null> {
+export const findLatestTrial = (db: Database, revisionId: string) => findTrial(db, eq(trials.revisionId, revisionId));
+
+/** One trial with its findings; null where it does not exist or its revision is not for this viewer. */
+export const findTrialFor = (db: Database, viewer: Viewer, id: string) =>
+  findTrial(db, and(eq(trials.id, id), visibleTo(viewer)));
+
+async function findTrial(db: Database, which: SQL | undefined): Promise<TrialView | null> {
   const [trial] = await db
     .select({
       id: trials.id,
@@ -24,7 +31,7 @@ export async function findLatestTrial(db: Database, revisionId: string): Promise
     .from(trials)
     .innerJoin(revisions, eq(revisions.id, trials.revisionId))
     .innerJoin(people, eq(people.id, trials.queuedById))
-    .where(eq(trials.revisionId, revisionId))
+    .where(which)
     .orderBy(desc(trials.queuedAt), asc(trials.id))
     .limit(1);
   if (!trial) return null;

@@ -63,3 +63,18 @@ export async function listUnheldTrials(db: Database, trialIds: readonly string[]
   );
   return rows.map(({ id }) => id);
 }
+
+/**
+ * Does something that only one process may do at a time.
+ * @returns false, without doing it, where another process is at it
+ */
+export async function soleSweeper(db: Database, work: () => Promise<void>): Promise<boolean> {
+  return db.transaction(async (tx) => {
+    const { rows } = await tx.execute<{ ours: boolean }>(
+      sql`select pg_try_advisory_xact_lock(${LOCK_SPACE}::int, 0) as ours`,
+    );
+    if (!rows[0]?.ours) return false;
+    await work();
+    return true;
+  });
+}
