@@ -6,11 +6,11 @@ export interface Rational {
   readonly den: bigint;
 }
 
-const abs = (a: bigint) => (a < 0n ? -a : a);
+const absOf = (a: bigint) => (a < 0n ? -a : a);
 
 export function gcd(a: bigint, b: bigint): bigint {
-  a = abs(a);
-  b = abs(b);
+  a = absOf(a);
+  b = absOf(b);
   while (b !== 0n) [a, b] = [b, a % b];
   return a;
 }
@@ -38,6 +38,7 @@ export const div = (a: Rational, b: Rational) => rational(a.num * b.den, a.den *
 /** a^k for an integer k, negative only where a ≠ 0. */
 export const power = (a: Rational, k: number): Rational =>
   k < 0 ? rational(a.den ** BigInt(-k), a.num ** BigInt(-k)) : { num: a.num ** BigInt(k), den: a.den ** BigInt(k) };
+export const abs = (a: Rational): Rational => (a.num < 0n ? { num: -a.num, den: a.den } : a);
 export const isZero = (a: Rational) => a.num === 0n;
 export const equals = (a: Rational, b: Rational) => a.num === b.num && a.den === b.den;
 export const sign = (a: Rational): -1 | 0 | 1 => (a.num > 0n ? 1 : a.num < 0n ? -1 : 0);
@@ -66,7 +67,7 @@ export const formatRational = (a: Rational) => (a.den === 1n ? String(a.num) : `
 
 /** The nearest double up to one unit in the last place, also where numerator and denominator exceed the range of a double. */
 export function toNumber(a: Rational): number {
-  const p = abs(a.num);
+  const p = absOf(a.num);
   const size = Math.max(p.toString(2).length, a.den.toString(2).length);
   if (size <= 1000) {
     if (size <= 53) return Number(a.num) / Number(a.den);

@@ -1,0 +1,133 @@
+/** All facts of a scheme, put together from the engine's parts. */
+import type { LinesScheme, SchemeDefinition } from '@/lib/entries/definition';
+import type { Budget } from '@/lib/numerics/budget';
+import type { CanonicalScheme } from '@/lib/numerics/canonical-scheme';
+import type { CostResult } from '@/lib/numerics/cost';
+import { operatorWork, rungeKuttaCost } from '@/lib/numerics/lines-cost';
+import { meaningOf } from '@/lib/numerics/meaning';
+import { formatRational, toNumber, type Rational } from '@/lib/numerics/rational';
+import {
+  rungeKuttaStorage,
+  schemeCost,
+  schemeHalo,
+  startUpSteps,
+  systemStorage,
+  tableStorage,
+  type StorageResult,
+} from '@/lib/numerics/storage';
+import { systemCharacteristic } from '@/lib/numerics/system-characteristic';
+import { analyseTimeMethod, isExplicitTableau, tableauRegisters } from '@/lib/numerics/time-method';
+import { analyseTruncation, type TruncationAnalysis } from '@/lib/numerics/truncation';
+import { canonicalStencil } from './canonical-stencil';
+import { readTimeMethod, type ExactTimeMethod } from './canonical-time-method';
+import type { SchemeFacts } from './facts';
+import { representativeValues, schemeDissipationFacts, schemeStability } from './scheme-stability';
+
+/** Nonzero roots z at each wave. */
+function rootsPerWave(scheme: CanonicalScheme): number {
+  if (scheme.form === 'scalar') {
+    const levels = scheme.terms.map((t) => toNumber(t.level));
+    return Math.round(Math.max(...levels) - Math.min(...levels));
+  }
+  const { scalar, stationaryRoots } = systemCharacteristic(scheme);
+  return rootsPerWave(scalar) + stationaryRoots;
+}
+
+/** Roots that the equation does not have; a first-order system for waves has one physical root for each unknown. */
+function computationalModes(scheme: CanonicalScheme, roots: number): number {
+  const isFirstOrderSystem =
+    scheme.form === 'system' && scheme.timeOrder === 2 && scheme.unknowns.length === scheme.dims + 1;
+  return Math.max(0, roots - (isFirstOrderSystem ? scheme.dims + 1 : scheme.timeOrder));
+}
+
+const timeMethodOf = (definition: SchemeDefinition): ExactTimeMethod | null =>
+  definition.form === 'lines' ? readTimeMethod(definition.time, '/time', []) : null;
+
+function storageOf(scheme: CanonicalScheme, time: ExactTimeMethod | null): StorageResult {
+  if (scheme.form === 'system') return systemStorage(scheme);
+  if (time?.kind !== 'runge-kutta') return tableStorage(scheme);
+  return rungeKuttaStorage(
+    scheme,
+    time.b.length,
+    isExplicitTableau(time.A) && tableStorage(scheme).explicit,
+    tableauRegisters(time.A, time.b),
+  );
+}
+
+function costOf(
+  definition: SchemeDefinition,
+  scheme: CanonicalScheme,
+  time: ExactTimeMethod | null,
+  storage: StorageResult,
+): CostResult {
+  if (definition.form !== 'lines' || time?.kind !== 'runge-kutta' || time.b.length === 1 || !storage.explicit)
+    return schemeCost(scheme, storage);
+  const weights = definition.space.map((s) => canonicalStencil(s).stencil?.weights ?? []);
+  return rungeKuttaCost(time.A, time.b, operatorWork(weights));
+}
+
+/** Runge-Kutta lines exchange their halo before every stage: the reach of one evaluation of the operator. */
+function haloOf(
+  definition: SchemeDefinition,
+  scheme: CanonicalScheme,
+  time: ExactTimeMethod | null,
+): [number, number][] {
+  if (definition.form !== 'lines' || time?.kind !== 'runge-kutta') return schemeHalo(scheme);
+  return stageHalo(definition, scheme.dims);
+}
+
+function stageHalo(definition: LinesScheme, dims: number): [number, number][] {
+  const halo = Array.from({ length: dims }, (): [number, number] => [0, 0]);
+  definition.space.forEach((space, k) => {
+    const { stencil } = canonicalStencil(space);
+    if (!stencil) return;
+    const used = [
+      ...stencil.offsets.filter((_, j) => stencil.weights[j]!.num !== 0n),
+      ...(stencil.lhs?.offsets.filter((_, j) => stencil.lhs!.weights[j]!.num !== 0n) ?? []),
+    ];
+    for (const offset of used)
+      offset.forEach((x: Rational, axis) => {
+        const side = halo[stencil.dims === 1 && dims > 1 ? k : axis];
+        if (!side) return;
+        side[0] = Math.max(side[0], Math.ceil(-toNumber(x)));
+        side[1] = Math.max(side[1], Math.ceil(toNumber(x)));
+      });
+  });
+  return halo;
+}
+
+/** Orders alone: what decides whether there are facts at all. */
+export const schemeOrders = (scheme: CanonicalScheme): TruncationAnalysis => analyseTruncation(scheme);
+
+export function schemeFacts(
+  definition: SchemeDefinition,
+  scheme: CanonicalScheme,
+  { order, added }: TruncationAnalysis,
+  budget: Budget,
+): SchemeFacts {
+  const time = timeMethodOf(definition);
+  const storage = storageOf(scheme, time);
+  const roots = rootsPerWave(scheme);
+  budget.progress(0.2, 'stability');
+  const stability = schemeStability(scheme, budget);
+  budget.progress(0.8, 'dissipation');
+  const values = representativeValues(scheme, stability);
+  const dissipation = order.consistent && !budget.isSpent() ? schemeDissipationFacts(scheme, values) : null;
+  const at = scheme.parameters.map((name, k) => `${name} = ${formatRational(values[k]!)}`).join(', ');
+  const axes = scheme.dims === 1 ? 0 : scheme.dims;
+  budget.progress(1, 'done');
+  return {
+    kind: 'scheme',
+    order: { ...order, meaning: added && meaningOf(added, scheme.equation, values.map(toNumber), axes, at) },
+    levels: storage.levels,
+    rootsPerWave: roots,
+    computationalModes: computationalModes(scheme, roots),
+    startUpSteps: time?.kind === 'runge-kutta' ? 0 : startUpSteps(storage.levels),
+    storage,
+    halo: haloOf(definition, scheme, time),
+    cost: costOf(definition, scheme, time, storage),
+    stability,
+    dissipation,
+    timeMethod: time && analyseTimeMethod(time),
+  };
+}
