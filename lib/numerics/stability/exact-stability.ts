@@ -180,7 +180,7 @@ function resultOf(context: Context): StabilityResult {
 }
 
 /** Whether negative values of the scheme's parameter make its equation ill-posed. */
-const sideOf = (scheme: ScalarScheme): 'both' | 'non-negative' =>
+export const sideOf = (scheme: ScalarScheme): 'both' | 'non-negative' =>
   CONVENTIONS[scheme.equation].nonNegative.includes(scheme.parameters[0] ?? '') ? 'non-negative' : 'both';
 
 /**

@@ -46,7 +46,7 @@ export function unsolvableWaves(curve: CrossingCurve, parameter: Rational | null
   });
 }
 
-function decideGap(
+export function decideGap(
   wave: WavePolynomial,
   curve: CrossingCurve,
   parts: CurveComponents,

@@ -10,7 +10,7 @@ import { derivative, type IntegerPolynomial, squareFreePart } from '../integer-p
 import { complexArray, polynomialRoots } from '../roots';
 import { isolateRealRoots, halved } from '../real-roots';
 import type { CurveComponents } from './critical-values';
-import { rootCount, sampled, type WavePolynomial } from './wave-polynomial';
+import { sampled, type WavePolynomial } from './wave-polynomial';
 
 /** Distance at which computed roots count as one, and as being on the circle. */
 const CLUSTER = 2e-5;
@@ -62,10 +62,10 @@ export function behaviourAt(
   const multiple: number[] = [];
   const unsolvable: number[] = [];
   let modulus = 0;
-  const coefficientsAt = sampled(wave);
   const parameter = at.toNumber();
+  const levelsAt = sampled(wave)(parameter);
   for (const theta of candidateWaves(curve, at, !wave.real, check)) {
-    const levels = coefficientsAt(parameter, theta);
+    const levels = levelsAt(theta);
     const scale = Math.max(...levels.map(([re, im]) => Math.hypot(re, im)));
     const [re, im] = levels.at(-1)!;
     if (Math.hypot(re, im) <= 1e-10 * Math.max(scale, newestScale(wave, parameter))) {
@@ -116,9 +116,8 @@ function multiplicityOnCircle(roots: readonly (readonly [number, number])[]): { 
 
 /** The wave with the largest root at a value, by sampling and golden-section refinement: told to readers, decides nothing. */
 export function worstWave(wave: WavePolynomial, parameter: number): { theta: number; modulus: number } {
-  const coefficientsAt = sampled(wave);
-  const modulusAt = (theta: number) =>
-    Math.max(...rootsOf(coefficientsAt(parameter, theta)).map(([re, im]) => Math.hypot(re, im)));
+  const levelsAt = sampled(wave)(parameter);
+  const modulusAt = (theta: number) => Math.max(...rootsOf(levelsAt(theta)).map(([re, im]) => Math.hypot(re, im)));
   const count = 96 * Math.max(1, Math.ceil(Math.log2(wave.span + 1)));
   const from = wave.real ? 0 : -Math.PI;
   const step = (Math.PI - from) / count;
@@ -140,5 +139,3 @@ export function worstWave(wave: WavePolynomial, parameter: number): { theta: num
   const modulus = modulusAt(theta);
   return modulus > best.modulus ? { theta, modulus } : best;
 }
-
-export const isSingleRoot = (wave: WavePolynomial) => rootCount(wave) === 1;

@@ -6,6 +6,13 @@
  * over the Gaussian integers, oldest level first. Roots |z| ≤ 1 for all |w| = 1 mean stability.
  */
 import type { ScalarScheme } from '../canonical-scheme';
+import {
+  exactQuotient,
+  gcd as commonPolynomial,
+  type IntegerPolynomial,
+  trimmed,
+  withoutRoot,
+} from '../integer-polynomial';
 import { gcd } from '../rational';
 
 export interface GaussianInteger {
@@ -64,7 +71,35 @@ export function wavePolynomial(scheme: ScalarScheme): WavePolynomial | string {
         im: im.num * (common / im.den),
       });
   }
-  return normalized(levels, scheme.timeOrder);
+  return normalized(withoutCommonWaves(levels), scheme.timeOrder);
+}
+
+/**
+ * Without a factor in w that all coefficients share: for its waves the scheme says nothing at all, for the others it
+ * cancels. Looked for in real schemes only.
+ */
+function withoutCommonWaves(levels: readonly (readonly WaveTerm[])[]): readonly (readonly WaveTerm[])[] {
+  const all = levels.flat();
+  if (all.some((term) => term.im !== 0n)) return levels;
+  const lowest = Math.min(...all.map((term) => term.wave));
+  const rows = levels.map((terms) => {
+    const byPower = new Map<number, bigint[]>();
+    for (const { power, wave, re } of terms) {
+      const row = byPower.get(power) ?? byPower.set(power, []).get(power)!;
+      while (row.length <= wave - lowest) row.push(0n);
+      row[wave - lowest]! += re;
+    }
+    return [...byPower].map(([power, row]) => ({ power, row: trimmed(row) }));
+  });
+  let common: IntegerPolynomial = [];
+  for (const { row } of rows.flat()) common = commonPolynomial(common, row);
+  const [factor] = withoutRoot(common, 0n);
+  if (factor.length <= 1) return levels;
+  return rows.map((each) =>
+    each.flatMap(({ power, row }) =>
+      (exactQuotient(row, factor) ?? []).flatMap((re, wave) => (re === 0n ? [] : [{ power, wave, re, im: 0n }])),
+    ),
+  );
 }
 
 /** Common powers of w and of the parameter, and common integer factors, taken out. */
@@ -148,29 +183,35 @@ function gaussianPowers(a: bigint, b: bigint, count: number): GaussianInteger[] 
   return powers;
 }
 
-/** The same in double precision, as [re, im] of each level; coefficients beyond the range of a double are scaled down together. */
-export function sampled(wave: WavePolynomial): (parameter: number, theta: number) => [number, number][] {
+/** Coefficients a_0 … a_m at a wave θ, as [re, im] doubles. */
+export type SampledLevels = (theta: number) => [number, number][];
+
+/** The polynomial in double precision: first the parameter, then the wave. Beyond the range of a double all is scaled down together. */
+export function sampled(wave: WavePolynomial): (parameter: number) => SampledLevels {
   const largest = wave.levels.flat().reduce((bits, { re, im }) => Math.max(bits, bitLength(re), bitLength(im)), 0);
   const shift = BigInt(Math.max(0, largest - 900));
-  const levels = wave.levels.map((terms) =>
-    terms.map(({ wave: exponent, power, re, im }) => ({
-      exponent,
-      power,
-      re: Number(re >> shift),
-      im: Number(im >> shift),
-    })),
+  const terms = wave.levels.flatMap((each, level) =>
+    each.map((term) => ({ ...term, level, re: Number(term.re >> shift), im: Number(term.im >> shift) })),
   );
-  return (parameter, theta) =>
-    levels.map((terms) => {
-      let [re, im] = [0, 0];
-      for (const term of terms) {
-        const factor = parameter ** term.power;
-        const [c, s] = [Math.cos(term.exponent * theta), Math.sin(term.exponent * theta)];
-        re += factor * (term.re * c - term.im * s);
-        im += factor * (term.re * s + term.im * c);
-      }
-      return [re, im];
-    });
+  const size = wave.span + 1;
+  return (parameter) => {
+    const re = new Float64Array(wave.levels.length * size);
+    const im = new Float64Array(wave.levels.length * size);
+    for (const term of terms) {
+      const factor = parameter ** term.power;
+      re[term.level * size + term.wave]! += term.re * factor;
+      im[term.level * size + term.wave]! += term.im * factor;
+    }
+    return (theta) => {
+      const [c, s] = [Math.cos(theta), Math.sin(theta)];
+      return wave.levels.map((_, level): [number, number] => {
+        let [x, y] = [0, 0];
+        for (let k = (level + 1) * size - 1; k >= level * size; k--)
+          [x, y] = [x * c - y * s + re[k]!, x * s + y * c + im[k]!];
+        return [x, y];
+      });
+    };
+  };
 }
 
 const bitLength = (a: bigint) => (a < 0n ? -a : a).toString(2).length;
