@@ -37,9 +37,17 @@ function valueAt(polynomial: Polynomial, values: readonly Rational[]): Gaussian 
   return { re, im };
 }
 
-/** Coefficients of z^0 …, each a series in t with theta = t · direction. */
-function polynomialSeries(scheme: ScalarScheme, values: readonly Rational[], length: number): ExactSeries[] {
-  const direction = DIRECTIONS[scheme.dims].map((d) => rational(d));
+/**
+ * Coefficients of z^0 …, each a series in t with theta = base + t · direction.
+ * @param shifted dimensions in which the base is pi; their offsets must be integers
+ */
+function polynomialSeries(
+  scheme: ScalarScheme,
+  values: readonly Rational[],
+  length: number,
+  direction: readonly Rational[],
+  shifted: readonly boolean[] = [],
+): ExactSeries[] {
   const levels = scheme.terms.map((t) => toNumber(t.level));
   const oldest = Math.min(...levels);
   const out: ExactSeries[] = Array.from({ length: Math.max(...levels) - oldest + 1 }, () =>
@@ -47,7 +55,9 @@ function polynomialSeries(scheme: ScalarScheme, values: readonly Rational[], len
   );
   scheme.terms.forEach((t, j) => {
     const along = t.offset.reduce<Rational>((sum, o, d) => add(sum, mul(o, direction[d]!)), ZERO);
-    const coefficient = valueAt(t.coefficient, values);
+    const value = valueAt(t.coefficient, values);
+    const turns = t.offset.reduce((sum, o, d) => (shifted[d] ? sum + o.num : sum), 0n);
+    const coefficient = turns % 2n === 0n ? value : { re: neg(value.re), im: neg(value.im) };
     const k = levels[j]! - oldest;
     out[k] = addSeries(
       out[k]!,
@@ -81,8 +91,9 @@ function blownUp(coefficients: readonly ExactSeries[]): ExactSeries[] | null {
 }
 
 function principalSeries(scheme: ScalarScheme, values: readonly Rational[], length: number): ExactSeries | null {
-  if (scheme.timeOrder === 1) return rootSeries(polynomialSeries(scheme, values, length), gaussian(ONE));
-  const inner = blownUp(polynomialSeries(scheme, values, length + 2));
+  const direction = DIRECTIONS[scheme.dims].map((d) => rational(d));
+  if (scheme.timeOrder === 1) return rootSeries(polynomialSeries(scheme, values, length, direction), gaussian(ONE));
+  const inner = blownUp(polynomialSeries(scheme, values, length + 2, direction));
   if (!inner) return null;
   const [number] = [...equationNumbers(scheme).values()];
   const speed = valueAt(number!, values).re;
@@ -104,6 +115,38 @@ export function principalDampingOrder(scheme: ScalarScheme, values: readonly Rat
     const modulus = squaredModulus(series);
     const first = modulus.findIndex((c, k) => !isZero(k === 0 ? sub(c, ONE) : c));
     if (first > 0) return -sign(modulus[first]!) * first;
+  }
+  return null;
+}
+
+export interface CornerWave {
+  /** True where the wave expanded about has theta = pi in that dimension, else 0. */
+  readonly shifted: readonly boolean[];
+  readonly direction: readonly Rational[];
+  /** A root there: 1, −1, i or −i. */
+  readonly root: Gaussian;
+}
+
+/**
+ * How ln|z| of a simple unit root leaves 0 along a ray from a corner wave, exactly.
+ * @returns the power of the first nonzero coefficient and its sign; null where there is none up to power 12, where
+ *   `root` is no simple root, or an offset in a shifted dimension is not an integer
+ */
+export function cornerGrowth(
+  scheme: ScalarScheme,
+  values: readonly Rational[],
+  corner: CornerWave,
+): { order: number; sign: -1 | 0 | 1 } | null {
+  if (scheme.terms.some((t) => t.offset.some((o, d) => corner.shifted[d] && o.den !== 1n))) return null;
+  for (const length of [5, 13]) {
+    const series = rootSeries(
+      polynomialSeries(scheme, values, length, corner.direction, corner.shifted),
+      corner.root,
+    );
+    if (!series) return null;
+    const modulus = squaredModulus(series);
+    const order = modulus.findIndex((c, k) => k > 0 && !isZero(c));
+    if (order > 0) return { order, sign: sign(modulus[order]!) };
   }
   return null;
 }
