@@ -4,6 +4,7 @@ import type { CanonicalScheme } from '@/lib/numerics/canonical-scheme';
 import { sampleRoots, type SampleRequest } from '@/lib/numerics/samples';
 import { analyseStencil, inconsistencySentence } from '@/lib/numerics/stencil';
 import { analyseTimeMethod } from '@/lib/numerics/time-method';
+import { analyseTruncation } from '@/lib/numerics/truncation';
 import type { Definition, SchemeDefinition, StencilDefinition, TimeMethodDefinition } from '@/lib/entries/definition';
 import { canonicalScheme } from './canonical-scheme';
 import { canonicalStencil } from './canonical-stencil';
@@ -11,7 +12,8 @@ import { readTimeMethod } from './canonical-time-method';
 import { readDefinition } from './definition-shape';
 import type { Analysis, Problem, SamplePoint } from './facts';
 import { hasErrors, problemAt, warningAt } from './problem';
-import { schemeFacts, schemeOrders } from './scheme-facts';
+import { roundingOf } from './rounding';
+import { schemeFacts } from './scheme-facts';
 
 export interface AnalyseOptions {
   /** Points at which roots and speeds are asked for. */
@@ -64,7 +66,16 @@ function analyseSchemeDefinition(
 ): Analysis {
   const { scheme, problems } = canonicalScheme(definition);
   if (!scheme) return invalid(problems);
-  const orders = schemeOrders(scheme);
+  let orders = analyseTruncation(scheme);
+  const rounding = orders.order.consistent ? 0 : roundingOf(definition);
+  if (rounding > 0) {
+    const nominal = analyseTruncation(scheme, rounding);
+    if (nominal.order.consistent) {
+      const sentence = `as printed, the scheme ${orders.order.reason ?? 'is not consistent'}; within the rounding of its decimals it is consistent`;
+      problems.push(warningAt(placeOf(definition), 'nominally-consistent', sentence));
+      orders = nominal;
+    }
+  }
   if (!orders.order.consistent)
     return {
       verdict: 'inconsistent',

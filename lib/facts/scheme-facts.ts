@@ -17,7 +17,7 @@ import {
 } from '@/lib/numerics/storage';
 import { systemCharacteristic } from '@/lib/numerics/system-characteristic';
 import { analyseTimeMethod, isExplicitTableau, tableauRegisters } from '@/lib/numerics/time-method';
-import { analyseTruncation, type TruncationAnalysis } from '@/lib/numerics/truncation';
+import type { TruncationAnalysis } from '@/lib/numerics/truncation';
 import { canonicalStencil } from './canonical-stencil';
 import { readTimeMethod, type ExactTimeMethod } from './canonical-time-method';
 import type { SchemeFacts } from './facts';
@@ -96,9 +96,6 @@ function stageHalo(definition: LinesScheme, dims: number): [number, number][] {
   return halo;
 }
 
-/** Orders alone: what decides whether there are facts at all. */
-export const schemeOrders = (scheme: CanonicalScheme): TruncationAnalysis => analyseTruncation(scheme);
-
 export function schemeFacts(
   definition: SchemeDefinition,
   scheme: CanonicalScheme,
@@ -111,7 +108,7 @@ export function schemeFacts(
   budget.progress(0.2, 'stability');
   const stability = schemeStability(scheme, budget);
   budget.progress(0.8, 'dissipation');
-  const values = representativeValues(scheme, stability);
+  const values = representativeValues(scheme, stability, order.specialValues);
   const dissipation = order.consistent && !budget.isSpent() ? schemeDissipationFacts(scheme, values) : null;
   const at = scheme.parameters.map((name, k) => `${name} = ${formatRational(values[k]!)}`).join(', ');
   const axes = scheme.dims === 1 ? 0 : scheme.dims;

@@ -7,13 +7,13 @@ import { formatRational, rational, type Rational } from '@/lib/numerics/rational
 import { exactIntervals } from '@/lib/numerics/stability/exact-stability';
 import type { DissipationFacts, StabilityFacts } from './facts';
 
-const NUMERATOR_LIMIT = 40;
+const DENOMINATOR_LIMIT = 40;
 
 /** The fraction nearest to a positive value among those with a denominator up to 40 (continued fractions). */
 function nearbyFraction(value: number): Rational {
   let best = rational(Math.max(1, Math.round(value)));
   let error = Infinity;
-  for (let den = 1; den <= NUMERATOR_LIMIT; den++) {
+  for (let den = 1; den <= DENOMINATOR_LIMIT; den++) {
     const num = Math.max(1, Math.round(value * den));
     const off = Math.abs(value - num / den);
     if (off < error - 1e-12) [best, error] = [rational(num, den), off];
@@ -25,9 +25,13 @@ const numberOf = (text: string | null) => (text === null ? null : Number(text));
 
 /**
  * Half the bound of the interval that reaches furthest from 0, as a simple fraction; ten where there is no bound and
- * one half where nothing is stable. All parameters share one value.
+ * one half where nothing is stable; less where the scheme happens to be better there. All parameters share one value.
  */
-export function representativeValues(scheme: CanonicalScheme, stability: StabilityFacts): Rational[] {
+export function representativeValues(
+  scheme: CanonicalScheme,
+  stability: StabilityFacts,
+  special: readonly { readonly value: string }[],
+): Rational[] {
   const isTransport = CONVENTIONS[scheme.equation].nonNegative.length === 0;
   const share = (value: Rational) => scheme.parameters.map(() => value);
   const [first] = stability.intervals.filter((i) => i.hi === null || Number(i.hi) > 0).concat(stability.intervals);
@@ -36,7 +40,7 @@ export function representativeValues(scheme: CanonicalScheme, stability: Stabili
   if (hi === null && (lo === null || lo <= 0)) return share(rational(isTransport ? 10 : 30));
   if (hi !== null && hi > 0) {
     const middle = lo !== null && lo > 0 ? (lo + hi) / 2 : hi / 2;
-    const isSpecial = first.interiorDefects?.some((d) => Math.abs(Number(d.at) - middle) < 1e-9) ?? false;
+    const isSpecial = special.some(({ value }) => value === formatRational(nearbyFraction(middle)));
     return share(nearbyFraction(isSpecial ? 0.8 * middle : middle));
   }
   if (lo === null) return share(rational(isTransport ? -10 : 30));

@@ -10,7 +10,7 @@ import { CONVENTIONS } from './equation';
 import { equationNumbers, equationTerms } from './equation-terms';
 import { addG, inverseG, isZeroG, mulG, negG, ONE_G, scaleG, ZERO_G, type Gaussian } from './gaussian';
 import type { Polynomial } from './polynomial';
-import { add, isZero, mul, ONE, power, rational, ZERO, type Rational } from './rational';
+import { add, isZero, mul, ONE, power, rational, toNumber, ZERO, type Rational } from './rational';
 
 /** Rays on which waves of several dimensions have a rational length: 3² + 4² = 5², 2² + 3² + 6² = 7². */
 const WAVE_RAYS = {
@@ -33,6 +33,8 @@ export interface GradedResidual {
   readonly multiplicity: number;
   /** Coefficient of dt^i dx^m in the truncation error R/(N dt^multiplicity). */
   coefficient(i: number, m: number): Gaussian;
+  /** Sum of the sizes of what a coefficient is made of: what rounding of the scheme's numbers is measured against. */
+  magnitude(i: number, m: number): number;
   /** Largest power of 1/dx in a coefficient: powers of dx below its negative do not occur. */
   readonly deepest: number;
   /** Fewest derivatives that a term dt^i dx^m can carry. */
@@ -47,6 +49,7 @@ interface Part {
   /** Σ c·(offset·ray)^n/n! by n, computed when first needed. */
   readonly points: { readonly value: Gaussian; readonly along: Rational }[];
   readonly moments: Gaussian[];
+  readonly sizes: { readonly value: number; readonly along: number }[];
 }
 
 /** True where every number of the equation is a homogeneous linear form in parameters of its own weight. */
@@ -101,12 +104,20 @@ function partsOf(scheme: ScalarScheme, ray: readonly number[]): Part[] {
       const a = m.powers.reduce((s, p) => s + p, 0);
       const b = m.powers.reduce((s, p, k) => s + p * weights[k]!, 0);
       const key = `${level.num}/${level.den},${a},${b}`;
-      const part = parts.get(key) ?? { a, b, level, points: [], moments: [] };
-      part.points.push({ value: valueAtSizes([m]), along });
+      const part = parts.get(key) ?? { a, b, level, points: [], moments: [], sizes: [] };
+      const value = valueAtSizes([m]);
+      part.points.push({ value, along });
+      part.sizes.push({ value: Math.hypot(toNumber(value.re), toNumber(value.im)), along: Math.abs(toNumber(along)) });
       parts.set(key, part);
     }
   }
   return [...parts.values()];
+}
+
+function factorialOf(n: number): number {
+  let product = 1;
+  for (let k = 2; k <= n; k++) product *= k;
+  return product;
 }
 
 function momentOf(part: Part, n: number): Gaussian {
@@ -166,11 +177,20 @@ export function gradedResidual(
     cache.set(key, value);
     return value;
   };
+  const size = (a: Gaussian) => Math.hypot(toNumber(a.re), toNumber(a.im));
+  const magnitude = (a: number, m: number): number =>
+    parts.reduce((sum, part) => {
+      if (part.a > a || m + part.b < 0) return sum;
+      const n = m + part.b;
+      const moment = part.sizes.reduce((total, p) => total + (p.value * p.along ** n) / factorialOf(n), 0);
+      return sum + size(exponential(part, a - part.a)) * moment;
+    }, 0) * size(inverse);
   const fewestPerStep = Math.min(...CONVENTIONS[scheme.equation].operators) / scheme.timeOrder;
   return {
     multiplicity: normal.multiplicity,
     deepest: Math.max(0, ...parts.map((p) => p.b)),
     coefficient: (i, m) => quotient(i + normal.multiplicity, m),
+    magnitude: (i, m) => magnitude(i + normal.multiplicity, m),
     fewestDerivatives(i, m) {
       const a = i + normal.multiplicity;
       return Math.min(

@@ -10,6 +10,7 @@ const NAMES: Readonly<Record<number, string>> = {
   8: 'eighth-order diffusion',
 };
 const TRANSPORT: ReadonlySet<Equation> = new Set(['advection', 'advection-diffusion', 'advection-2d']);
+const DECAYING: ReadonlySet<Equation> = new Set(['diffusion', 'hyperdiffusion', 'diffusion-2d', 'diffusion-3d']);
 const WAVES: ReadonlySet<Equation> = new Set(['wave', 'wave-2d', 'wave-3d']);
 
 /** Value of d_j along the diagonal wave X = Y = Z = 1, real and imaginary part. */
@@ -33,6 +34,8 @@ function phrase(term: AddedTerm, equation: Equation, values: readonly number[], 
   }
   const [damping, turning] = j % 4 === 0 ? [re, im] : j % 4 === 1 ? [-im, re] : j % 4 === 2 ? [-re, -im] : [im, -re];
   if (damping !== 0) {
+    if (DECAYING.has(equation))
+      return `${damping < 0 ? 'strengthens' : 'weakens'} the damping of short waves (derivative of order ${j})`;
     const name = NAMES[j] ?? `a real term of order ${j}`;
     return damping < 0
       ? `adds ${name}: short waves are damped`

@@ -136,17 +136,20 @@ function recognisedFactors(a: Polynomial): Factor[] {
   return factors;
 }
 
-/** Exact reproduction: at this value all exponentials e^((offset − level·number) X) cancel. Advection and waves in one dimension. */
+/** Exact reproduction: at this value all exponentials e^((offset − level·number)·X) cancel. Transport, and waves in one dimension. */
 function isExactShift(scheme: ScalarScheme, value: Rational): boolean {
-  const isTransport = scheme.equation === 'advection' || scheme.equation === 'wave';
-  if (!isTransport) return false;
-  const number = equationNumbers(scheme).get('lambda')!;
+  const numbers = equationNumbers(scheme);
   const at = (a: Polynomial) => a.reduce((sum, m) => add(sum, mul(m.re, power(value, m.powers[0]!))), ZERO);
-  const speeds = scheme.equation === 'wave' ? [at(number), neg(at(number))] : [at(number)];
-  return speeds.every((speed) => {
+  const names = { advection: ['lambda'], wave: ['lambda'], 'advection-2d': ['lambda_x', 'lambda_y'] } as const;
+  const isTransport =
+    scheme.equation === 'advection' || scheme.equation === 'wave' || scheme.equation === 'advection-2d';
+  if (!isTransport) return false;
+  const speed = names[scheme.equation as keyof typeof names].map((name) => at(numbers.get(name)!));
+  const directions = scheme.equation === 'wave' ? [speed, speed.map(neg)] : [speed];
+  return directions.every((direction) => {
     const balance = new Map<string, Rational>();
     for (const { level, offset, coefficient } of scheme.terms) {
-      const key = formatRational(sub(offset[0]!, mul(level, speed)));
+      const key = offset.map((o, axis) => formatRational(sub(o, mul(level, direction[axis]!)))).join();
       balance.set(key, add(balance.get(key) ?? ZERO, at(coefficient)));
     }
     return [...balance.values()].every(isZeroQ);

@@ -5,6 +5,7 @@ import { isZeroG } from './gaussian';
 import { gradedResidual, isGraded, normalisation, type GradedResidual } from './graded-residual';
 import { addedTerms, isTimeSymmetric, residualSeries, type AddedTerm, type ResidualSeries } from './modified-equation';
 import { add, scale, type Polynomial } from './polynomial';
+import { toNumber } from './rational';
 import { polynomialText, quotientText } from './polynomial-text';
 import { specialValues, type SpecialValue } from './special-values';
 import { systemCharacteristic } from './system-characteristic';
@@ -36,7 +37,6 @@ export interface TruncationAnalysis {
 const HIGHEST = { time: 14, space: 26, degree: 34 } as const;
 /** Terms with more derivatives than this are not listed among the conditional and mixed ones. */
 const LISTED_DERIVATIVES = { 1: 12, 2: 8, 3: 6 } as const;
-const LISTED_MIXED = 9;
 
 const EQUATION_WORDS: Readonly<Record<Equation, string>> = {
   advection: 'u_t + c u_x = 0',
@@ -77,29 +77,50 @@ function ratios(equation: Equation): number[] {
   return [spaceOrder / timeOrder];
 }
 
-const isPresent = (graded: GradedResidual, dt: number, dx: number) => !isZeroG(graded.coefficient(dt, dx));
+/** Terms that are absent within the rounding of the scheme's decimals count as absent. */
+interface Reading {
+  readonly graded: GradedResidual;
+  /** Relative size of what rounding may leave; 0 reads exactly. */
+  readonly rounding: number;
+}
+function isPresent({ graded, rounding }: Reading, dt: number, dx: number): boolean {
+  const value = graded.coefficient(dt, dx);
+  if (isZeroG(value)) return false;
+  return rounding === 0 || Math.hypot(toNumber(value.re), toNumber(value.im)) > rounding * graded.magnitude(dt, dx);
+}
 
 /** Least W·dt + dx over all terms; null where none is found up to the highest degree. */
-function orderAlong(graded: GradedResidual, ratio: number): number | null {
-  const { deepest, multiplicity } = graded;
+function orderAlong(reading: Reading, ratio: number): number | null {
+  const { deepest, multiplicity } = reading.graded;
   for (let total = -deepest - ratio * multiplicity; total <= HIGHEST.space; total++)
     for (let dt = -multiplicity; ratio * dt <= total + deepest; dt++)
-      if (isPresent(graded, dt, total - ratio * dt)) return total;
+      if (isPresent(reading, dt, total - ratio * dt)) return total;
   return null;
 }
 
-function firstPure(graded: GradedResidual, direction: 'dt' | 'dx', limit: number): number | null {
-  for (let k = 1; k <= limit; k++) if (direction === 'dt' ? isPresent(graded, k, 0) : isPresent(graded, 0, k)) return k;
+function firstPure(reading: Reading, direction: 'dt' | 'dx', limit: number): number | null {
+  for (let k = 1; k <= limit; k++)
+    if (direction === 'dt' ? isPresent(reading, k, 0) : isPresent(reading, 0, k)) return k;
   return null;
 }
 
-function listTerms(graded: GradedResidual, limit: number, wanted: (dt: number, dx: number) => boolean): PowerPair[] {
+function listTerms(reading: Reading, limit: number, wanted: (dt: number, dx: number) => boolean): PowerPair[] {
   const list: PowerPair[] = [];
+  const { graded } = reading;
   for (let dt = -graded.multiplicity; dt <= limit; dt++)
     for (let dx = -graded.deepest; dx <= limit; dx++)
-      if (wanted(dt, dx) && graded.fewestDerivatives(dt, dx) <= limit && isPresent(graded, dt, dx))
+      if (wanted(dt, dx) && graded.fewestDerivatives(dt, dx) <= limit && isPresent(reading, dt, dx))
         list.push({ dt, dx });
   return list;
+}
+
+function reasonBeside(degree: number | null, reading: Reading | null, rounding: number): string | null {
+  if (rounding > 0)
+    return 'consistent within the rounding of its decimals; as printed they leave a small error that refinement does not remove';
+  if (degree === null) return 'no error term was found: the scheme reproduces the solution exactly';
+  return reading
+    ? null
+    : 'dt and dx are tied to each other by fixed numbers, so that orders in time and space cannot be told apart';
 }
 
 /** Least degree of the residual; null where none is found. */
@@ -136,8 +157,11 @@ function reasonOf(scheme: ScalarScheme, series: ResidualSeries, degree: number):
   return `does not approximate ${EQUATION_WORDS[scheme.equation]}: it adds (${text.coefficient}) times the derivative of order ${degree}, which refinement does not remove`;
 }
 
-/** Orders of any scheme; systems are read through their characteristic polynomial. */
-export function analyseTruncation(scheme: CanonicalScheme): TruncationAnalysis {
+/**
+ * Orders of any scheme; systems are read through their characteristic polynomial.
+ * @param rounding relative error of the decimals from which the scheme was made; 0 reads every number as exact
+ */
+export function analyseTruncation(scheme: CanonicalScheme, rounding = 0): TruncationAnalysis {
   const scalar = scalarOf(scheme);
   if (typeof scalar === 'string') return nothing(scalar);
   const { equation, timeOrder, dims } = scalar;
@@ -148,11 +172,11 @@ export function analyseTruncation(scheme: CanonicalScheme): TruncationAnalysis {
   if (!normal || (normal.multiplicity !== timeOrder && !isExtended))
     return nothing(reasonWithoutNormal(normal?.multiplicity ?? null, scalar, normal?.value ?? []));
   const graded = gradedResidual(scalar, normal);
-  const separable = isGraded(scalar);
+  const reading = graded && isGraded(scalar) ? { graded, rounding } : null;
   const series = residualSeries(scalar, normal.value, HIGHEST.degree);
   const isPolynomial = !isExtended && (dims === 1 || timeOrder === 1 || isTimeSymmetric(scalar));
 
-  const along = graded && separable ? ratios(equation).map((ratio) => orderAlong(graded, ratio)) : null;
+  const along = reading ? ratios(equation).map((ratio) => orderAlong(reading, ratio)) : null;
   const isMixed = equation === 'advection-diffusion';
   const degreeFromOrder = along && !isMixed && along[0] !== null ? along[0]! + CONVENTIONS[equation].spaceOrder : null;
   const degree = degreeFromOrder ?? (isPolynomial && (isMixed || !along) ? lowestDegree(series) : null);
@@ -170,17 +194,16 @@ export function analyseTruncation(scheme: CanonicalScheme): TruncationAnalysis {
     return nothing(reason);
   }
   const added = canAdd ? addedTerms(series, degree) : null;
-  const listing = graded && separable ? graded : null;
   const limit = LISTED_DERIVATIVES[dims];
   return {
     order: {
       consistent: true,
       orderAtFixedParameter: orderFixed,
-      pT: listing && firstPure(listing, 'dt', HIGHEST.time),
-      pX: listing && firstPure(listing, 'dx', HIGHEST.space),
-      conditionalTerms: listing ? listTerms(listing, limit, (dt, dx) => dt < 0 || dx < 0) : [],
-      mixedLowest: listing
-        ? listTerms(listing, Math.min(limit, LISTED_MIXED), (dt, dx) => dt > 0 && dx > 0)
+      pT: reading && firstPure(reading, 'dt', HIGHEST.time),
+      pX: reading && firstPure(reading, 'dx', HIGHEST.space),
+      conditionalTerms: reading ? listTerms(reading, limit, (dt, dx) => dt < 0 || dx < 0) : [],
+      mixedLowest: reading
+        ? listTerms(reading, limit, (dt, dx) => dt > 0 && dx > 0)
             .sort((a, b) => a.dt + a.dx - b.dt - b.dx || a.dt - b.dt)
             .slice(0, 2)
         : [],
