@@ -6,6 +6,7 @@ import { findReview } from '@/db/queries/revisions';
 import { adopt } from '@/lib/adoptions/adopt';
 import type { Actor } from '@/lib/people/actor';
 import { DEMO_PEOPLE } from '@/lib/people/demo-people';
+import { Refusal } from '@/lib/refusal';
 import { demoActor } from './demo-actor';
 import type { DemoPlan, StoredDemoPlan } from './demo-plan';
 import { placeDemoRevision } from './place-demo-revision';
@@ -40,6 +41,15 @@ async function signersOf(plan: DemoPlan, authorId: string): Promise<Actor[]> {
  * revision that is not the demo's.
  */
 export async function vetDemoEntry(revisionId: string): Promise<void> {
+  try {
+    await decide(revisionId);
+  } catch (error) {
+    // Another worker decides on the same revision at this moment; it will see it through.
+    if (!(error instanceof Refusal && error.code === 'conflict')) throw error;
+  }
+}
+
+async function decide(revisionId: string): Promise<void> {
   const stored = await findDemoPlan(db, revisionId);
   if (!stored?.placed || stored.done) return;
   const { plan, adoptions } = stored.plan;

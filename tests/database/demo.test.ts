@@ -123,6 +123,18 @@ describe('the demo’s maintainers', () => {
     expect(sheet.usedBy.map(({ code }) => code).sort()).toEqual((entry.adoptions ?? []).map(({ code }) => code).sort());
   });
 
+  it('decide once where two workers ask at the same moment', async () => {
+    const [entry] = DEMO_ENTRIES.filter(({ plan, earlier }) => plan.become === 'vetted' && !earlier).slice(5);
+    if (!entry) throw new Error('the demo has too few entries');
+    const { revisionId } = await revisionOf(entry);
+    await finishTrials(revisionId, 'passed');
+    await Promise.all([vetDemoEntry(revisionId), vetDemoEntry(revisionId), vetDemoEntry(revisionId)]);
+    await vetWaitingDemoEntries();
+    const sheet = await revisionOf(entry);
+    expect(sheet).toMatchObject({ state: 'vetted' });
+    expect(sheet.signatures).toHaveLength(2);
+  });
+
   it('withdraw the scheme that grows for every step, with the reason', async () => {
     const entry = one(({ slug }) => slug === 'forward-euler-central');
     const { revisionId } = await revisionOf(entry);
