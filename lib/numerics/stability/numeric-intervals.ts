@@ -6,7 +6,7 @@
  * closeness of unit roots) is unstable before it, and series settle the bands next to theta = 0 and pi.
  */
 import type { ScalarScheme } from '../canonical-scheme';
-import { coefficientsAt, polynomialFrom, type NumericScheme } from '../numeric-scheme';
+import { coefficientsAt, compileScheme, polynomialFrom, type NumericScheme } from '../numeric-scheme';
 import { complexArray, polynomialRoots, rootTolerance, type ComplexArray } from '../roots';
 import { excessOf, sizeOf, unitRootSeparation } from '../amplification';
 import { climb, gridMaxima, neighbours, waveGrid, type WaveGrid } from '../wave-grid';
@@ -274,4 +274,10 @@ export function numericIntervals(
     if (error instanceof SearchStopped) return { kind: 'stopped' };
     throw error;
   }
+}
+
+/** Whether no wave grows at one value of the scheme's only parameter, by the grid and the series next to corner waves. */
+export function isStableAt(scalar: ScalarScheme, parameter: number): boolean {
+  const numeric = compileScheme(scalar);
+  return new Probe(numeric, scalar, () => false).isStable(parameter);
 }
