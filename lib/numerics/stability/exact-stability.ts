@@ -8,7 +8,7 @@
 import type { AlgebraicNumber } from '../algebraic-number';
 import type { ScalarScheme } from '../canonical-scheme';
 import { CONVENTIONS } from '../equation';
-import { toNumber } from '../rational';
+import { formatRational, toNumber } from '../rational';
 import { closedForm } from './closed-form';
 import { behaviourAt, worstWave } from './limit-behaviour';
 import { isolatedStableValues } from './isolated-values';
@@ -159,7 +159,7 @@ function resultOf(context: Context): StabilityResult {
   const intervals = stableRuns(gaps).map((run) => intervalOf(context, run));
   const isolated = isolatedStableValues(wave, survey, context.check);
   const unsolvable = relevant.every(({ verdict }) => !verdict.stable && verdict.reason === 'unsolvable');
-  const linear = relevant.every(({ verdict }) => !verdict.stable && verdict.reason === 'multiple');
+  const linear = relevant.find(({ verdict }) => !verdict.stable && verdict.reason === 'multiple');
   const everywhere = relevant.every(({ verdict }) => verdict.stable);
   return {
     verdict: everywhere
@@ -174,7 +174,7 @@ function resultOf(context: Context): StabilityResult {
     lostAt: everywhere ? null : lossOf(context),
     method: 'exact',
     note: linear
-      ? 'All roots satisfy |z| <= 1, but a multiple root stands on the unit circle at every value: growth linear in n.'
+      ? `Around ${formatRational(linear.sample)} all roots satisfy |z| <= 1, but a multiple root stands on the unit circle: growth linear in n.`
       : null,
   };
 }

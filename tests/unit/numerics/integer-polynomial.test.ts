@@ -44,7 +44,7 @@ describe('polynomials over the integers', () => {
   });
 
   it('takes a product apart by multiplicity', () => {
-    const [f, g, h]: IntegerPolynomial[] = [
+    const [f, g, h]: readonly [IntegerPolynomial, IntegerPolynomial, IntegerPolynomial] = [
       [-1n, 1n],
       [1n, 0n, 1n],
       [-3n, 2n],
