@@ -96,15 +96,30 @@ function stageHalo(definition: LinesScheme, dims: number): [number, number][] {
   return halo;
 }
 
+/** What follows from the shape of the scheme alone: levels, arrays, roots, halo, work, the time method. */
+export function schemeStructure(definition: SchemeDefinition, scheme: CanonicalScheme) {
+  const time = timeMethodOf(definition);
+  const storage = storageOf(scheme, time);
+  const roots = rootsPerWave(scheme);
+  return {
+    levels: storage.levels,
+    rootsPerWave: roots,
+    computationalModes: computationalModes(scheme, roots),
+    startUpSteps: time?.kind === 'runge-kutta' ? 0 : startUpSteps(storage.levels),
+    storage,
+    halo: haloOf(definition, scheme, time),
+    cost: costOf(definition, scheme, time, storage),
+    timeMethod: time && analyseTimeMethod(time),
+  };
+}
+
 export function schemeFacts(
   definition: SchemeDefinition,
   scheme: CanonicalScheme,
   { order, added }: TruncationAnalysis,
   budget: Budget,
 ): SchemeFacts {
-  const time = timeMethodOf(definition);
-  const storage = storageOf(scheme, time);
-  const roots = rootsPerWave(scheme);
+  const structure = schemeStructure(definition, scheme);
   budget.progress(0.2, 'stability');
   const stability = schemeStability(scheme, budget);
   budget.progress(0.8, 'dissipation');
@@ -116,15 +131,8 @@ export function schemeFacts(
   return {
     kind: 'scheme',
     order: { ...order, meaning: added && meaningOf(added, scheme.equation, values.map(toNumber), axes, at) },
-    levels: storage.levels,
-    rootsPerWave: roots,
-    computationalModes: computationalModes(scheme, roots),
-    startUpSteps: time?.kind === 'runge-kutta' ? 0 : startUpSteps(storage.levels),
-    storage,
-    halo: haloOf(definition, scheme, time),
-    cost: costOf(definition, scheme, time, storage),
+    ...structure,
     stability,
     dissipation,
-    timeMethod: time && analyseTimeMethod(time),
   };
 }
