@@ -14,7 +14,7 @@ export async function proxy(request: NextRequest) {
   const { pathname, search } = request.nextUrl;
   if (!OPEN.test(pathname) && !(await getToken({ req: request, secret: process.env.NEXTAUTH_SECRET }))) {
     const target = new URL('/sign-in', request.url);
-    if (pathname !== '/') target.searchParams.set('callbackUrl', pathname + search);
+    if (pathname + search !== '/') target.searchParams.set('callbackUrl', pathname + search);
     return NextResponse.redirect(target);
   }
 
@@ -30,6 +30,6 @@ export async function proxy(request: NextRequest) {
 }
 
 export const config = {
-  // Files of the build and of public/ need no policy. Bodies over 10 MB would be cut on paths that match.
-  matcher: ['/((?!_next/static|_next/image|api/v1/.*attachments|favicon.ico|icon.svg|robots.txt).*)'],
+  // Files of the build and of public/ need no policy.
+  matcher: ['/((?!_next/static|_next/image|favicon.ico|icon.svg|robots.txt).*)'],
 };

@@ -19,6 +19,14 @@ export async function findDemoPlan(db: Database, revisionId: string) {
   return row ?? null;
 }
 
+/** True for one transaction at a time; the others do not wait. */
+export async function tryToLockDemoPlan(tx: Database, revisionId: string): Promise<boolean> {
+  const { rows } = await tx.execute<{ locked: boolean }>(
+    sql`select pg_try_advisory_xact_lock(hashtextextended(${'demo plan ' + revisionId}, 0)) as locked`,
+  );
+  return rows[0]?.locked === true;
+}
+
 export async function markDemoPlan(db: Database, revisionId: string, marks: { placed?: true; done?: true }) {
   await db.update(demoPlans).set(marks).where(eq(demoPlans.revisionId, revisionId));
 }

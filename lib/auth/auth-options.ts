@@ -11,6 +11,9 @@ import { signInCode } from './sign-in-answer';
 /** A function, since a build loads every module without any setting at hand. */
 export function authOptions(): NextAuthOptions {
   const { NEXTAUTH_SECRET, LEVELBOOK_DEMO } = env();
+  // Workers and the seed do without; whoever signs sessions does not.
+  if (!NEXTAUTH_SECRET)
+    throw new Error('NEXTAUTH_SECRET is missing: nobody can sign in. `.env.example` says what it is.');
   return {
     secret: NEXTAUTH_SECRET,
     session: { strategy: 'jwt', maxAge: 7 * 24 * 3600 },

@@ -1,12 +1,17 @@
 import 'server-only';
 import { db } from '@/db/client';
 import { isAdopted } from '@/db/queries/adoptions';
-import { findDemoPlan, findNextDemoRevision, listDemoRevisionsToDecide, markDemoPlan } from '@/db/queries/demo-plans';
+import {
+  findDemoPlan,
+  findNextDemoRevision,
+  listDemoRevisionsToDecide,
+  markDemoPlan,
+  tryToLockDemoPlan,
+} from '@/db/queries/demo-plans';
 import { findReview } from '@/db/queries/revisions';
 import { adopt } from '@/lib/adoptions/adopt';
 import type { Actor } from '@/lib/people/actor';
 import { DEMO_PEOPLE } from '@/lib/people/demo-people';
-import { Refusal } from '@/lib/refusal';
 import { demoActor } from './demo-actor';
 import type { DemoPlan, StoredDemoPlan } from './demo-plan';
 import { placeDemoRevision } from './place-demo-revision';
@@ -41,12 +46,10 @@ async function signersOf(plan: DemoPlan, authorId: string): Promise<Actor[]> {
  * revision that is not the demo's.
  */
 export async function vetDemoEntry(revisionId: string): Promise<void> {
-  try {
-    await decide(revisionId);
-  } catch (error) {
-    // Another worker decides on the same revision at this moment; it will see it through.
-    if (!(error instanceof Refusal && error.code === 'conflict')) throw error;
-  }
+  await db.transaction(async (tx) => {
+    // Where another worker decides on it at this moment, that one sees it through.
+    if (await tryToLockDemoPlan(tx, revisionId)) await decide(revisionId);
+  });
 }
 
 async function decide(revisionId: string): Promise<void> {
