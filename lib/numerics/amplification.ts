@@ -40,6 +40,25 @@ export function excessOf(
   return worst;
 }
 
+/** The same for a polynomial of degree 1, without solving: the inner loop of all two-level searches. */
+export function linearExcess({ re, im }: ComplexArray, size: number): number {
+  const lead = Math.hypot(re[1]!, im[1]!);
+  const rest = Math.hypot(re[0]!, im[0]!);
+  if (lead === 0) return rest === 0 ? -1 : Infinity;
+  return rest / lead - 1 - (8 * 2 ** -52 * Math.max(lead + rest, size)) / lead;
+}
+
+/** True where both roots of a quadratic are inside the circle beyond doubt (Schur-Cohn); false says nothing. */
+export function isClearlyInside({ re, im }: ComplexArray): boolean {
+  const lead2 = re[2]! * re[2]! + im[2]! * im[2]!;
+  const gap = lead2 - (re[0]! * re[0]! + im[0]! * im[0]!);
+  if (gap <= 1e-9 * lead2) return false;
+  const cross2 =
+    (re[2]! * re[1]! + im[2]! * im[1]! - (re[0]! * re[1]! + im[0]! * im[1]!)) ** 2 +
+    (re[2]! * im[1]! - im[2]! * re[1]! - (im[0]! * re[1]! - re[0]! * im[1]!)) ** 2;
+  return cross2 < gap * gap * (1 - 1e-9);
+}
+
 export function largestModulus(roots: ComplexArray): number {
   let worst = 0;
   for (let k = 0; k < roots.re.length; k++) worst = Math.max(worst, Math.hypot(roots.re[k]!, roots.im[k]!));

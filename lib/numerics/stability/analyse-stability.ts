@@ -215,7 +215,11 @@ function singleDirections(scheme: CanonicalScheme, budget: WorkBudget): { listed
     const { intervals, verdict } = decided(oneParameter(alone, { ...budget, timeLimitMs: budget.timeLimitMs / 6 }));
     if (verdict === 'not decided within the time budget') return;
     const main = mainInterval(intervals);
-    listed.push({ parameter: name, lo: main ? main.lo : '0', hi: main ? main.hi : '0' });
+    listed.push({
+      parameter: name,
+      lo: main ? (main.loExact ?? main.lo) : '0',
+      hi: main ? (main.hiExact ?? main.hi) : '0',
+    });
     bounds.push({
       name,
       lo: main ? (main.lo === null ? null : Number(main.lo)) : 0,

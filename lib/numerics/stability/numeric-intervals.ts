@@ -8,7 +8,7 @@
 import type { ScalarScheme } from '../canonical-scheme';
 import { coefficientsAt, compileScheme, polynomialFrom, type NumericScheme } from '../numeric-scheme';
 import { complexArray, polynomialRoots, rootTolerance, type ComplexArray } from '../roots';
-import { excessOf, sizeOf, unitRootSeparation } from '../amplification';
+import { excessOf, isClearlyInside, linearExcess, sizeOf, unitRootSeparation } from '../amplification';
 import { climb, gridMaxima, neighbours, waveGrid, type WaveGrid } from '../wave-grid';
 import { lowCoefficient, lowWaveGrowth, type LowWave } from './low-wavenumber';
 
@@ -27,11 +27,11 @@ export interface NumericInterval {
 export type NumericSearch = { kind: 'found'; intervals: NumericInterval[]; isolated: number[] } | { kind: 'stopped' };
 
 /** Points per pi of the scan, and of the grids that must be clear before an end stands. */
-const SCAN_PER_PI: Readonly<Record<1 | 2 | 3, number>> = { 1: 96, 2: 24, 3: 8 };
-const FINE_PER_PI: Readonly<Record<1 | 2 | 3, number>> = { 1: 720, 2: 60, 3: 18 };
+const SCAN_PER_PI: Readonly<Record<1 | 2 | 3, number>> = { 1: 96, 2: 18, 3: 8 };
+const FINE_PER_PI: Readonly<Record<1 | 2 | 3, number>> = { 1: 720, 2: 48, 3: 16 };
 const SMALLEST = 0.004;
 const LARGEST = 60;
-const RATIO = 1.13;
+const RATIO = 1.2;
 const FAR = [1e3, 1e5];
 
 /** Values at which exact shifts and other isolated stable points are looked for. */
@@ -43,6 +43,7 @@ class Probe {
   private readonly polynomial: ComplexArray;
   /** Waves that were unstable before are tried first: outside the bound they answer at once. */
   private suspects: number[][] = [];
+  private conservativeValues = 0;
 
   constructor(
     readonly scheme: NumericScheme,
@@ -76,13 +77,19 @@ class Probe {
   unstableWave(parameter: number, grid: WaveGrid, from = 0): { theta: number[]; index: number } | null {
     const coefficients = coefficientsAt(this.scheme, [parameter]);
     const size = sizeOf(coefficients);
+    const { degree } = this.scheme;
     let warm: ComplexArray | undefined;
     for (let index = from; index < grid.count; index++) {
       if ((index & 1023) === 1023) this.check();
       grid.polynomial(index, coefficients, this.polynomial);
-      const roots = polynomialRoots(this.polynomial, warm);
-      warm = roots;
-      if (excessOf(this.polynomial, roots, size) > 0) {
+      let excess: number;
+      if (degree === 1) excess = linearExcess(this.polynomial, size);
+      else if (degree === 2 && isClearlyInside(this.polynomial)) continue;
+      else {
+        warm = polynomialRoots(this.polynomial, warm);
+        excess = excessOf(this.polynomial, warm, size);
+      }
+      if (excess > 0) {
         const theta = grid.theta(index);
         this.suspects = [theta, ...this.suspects.slice(0, 5)];
         return { theta, index };
@@ -102,7 +109,16 @@ class Probe {
     return this.isConservative(parameter) ? null : lowWaveGrowth(this.scheme, this.scalar, parameter);
   }
 
+  /** A scheme that keeps all moduli at three values of the parameter does so wherever it is stable. */
   private isConservative(parameter: number): boolean {
+    if (this.conservativeValues >= 3) return true;
+    const isSo = this.keepsModuli(parameter);
+    this.conservativeValues = isSo ? this.conservativeValues + 1 : -Infinity;
+    return isSo;
+  }
+
+  private keepsModuli(parameter: number): boolean {
+    if (this.conservativeValues === -Infinity) return false;
     const coefficients = coefficientsAt(this.scheme, [parameter]);
     const size = sizeOf(coefficients);
     for (let index = 0; index < this.scan.count; index++) {
@@ -194,13 +210,13 @@ function climbForUnstable(probe: Probe, parameter: number): number[] | null {
 /** The end set by the bands next to corner waves, minimised over the direction of the ray. */
 function settleLow(probe: Probe, stable: number, unstable: number): NumericEnd | null {
   const { scheme } = probe;
-  const first = probe.lowGrowth(unstable + (stable - unstable) * 1e-6);
+  const first = probe.lowGrowth(unstable + (stable - unstable) * 1e-12);
   if (!first) return null;
   let wave = first;
   const boundary = (w: LowWave, from: number) => boundaryAt((p) => lowCoefficient(scheme, p, w) > 0, stable, from);
   let value = boundary(wave, unstable);
   for (let rounds = 0; rounds < 20; rounds++) {
-    const nearer = probe.lowGrowth(value + (stable - value) * 1e-6);
+    const nearer = probe.lowGrowth(value + (stable - value) * 1e-9);
     if (!nearer) break;
     const next = boundary(nearer, value);
     if (Math.abs(next - value) < 1e-13) break;
@@ -240,6 +256,24 @@ function scanSide(probe: Probe, side: 1 | -1, intervals: NumericInterval[]): boo
   return stable[0]!;
 }
 
+/** Whether changing the parameter's sign is the same as mirroring space: its stable set is then symmetric. */
+function isOdd(scheme: NumericScheme): boolean {
+  const keyOf = (z: number, offset: readonly number[]) => `${z}:${offset.map((o) => o + 0).join()}`;
+  const byKey = new Map(scheme.terms.map((t) => [keyOf(t.z, t.offset), t]));
+  return scheme.terms.every((t) => {
+    const image = byKey.get(keyOf(t.z, t.offset.map((o) => (o === 0 ? 0 : -o))));
+    if (!image || image.monomials.length !== t.monomials.length) return false;
+    return t.monomials.every((m, k) => {
+      const other = image.monomials[k]!;
+      const sign = m.powers[0]! % 2 === 0 ? 1 : -1;
+      return other.powers[0] === m.powers[0] && other.re === sign * m.re && other.im === sign * m.im;
+    });
+  });
+}
+
+const negated = (end: NumericEnd | null): NumericEnd | null =>
+  end && { value: end.value === 0 ? 0 : -end.value, theta: end.theta && end.theta.map((x) => -x), low: end.low };
+
 /**
  * @param scheme   with exactly one parameter
  * @param scalar   the exact scheme it was compiled from (of a system: its characteristic polynomial)
@@ -255,10 +289,15 @@ export function numericIntervals(
   const probe = new Probe(scheme, scalar, isOver);
   try {
     let intervals: NumericInterval[] = [];
-    const reachesZero = sides.map((side) => scanSide(probe, side, intervals));
+    const mirrored = sides.length === 2 && isOdd(scheme);
+    const reachesZero = (mirrored ? [1 as const] : sides).map((side) => scanSide(probe, side, intervals));
+    if (mirrored) {
+      intervals.push(...intervals.map(({ lo, hi }) => ({ lo: negated(hi), hi: negated(lo) })));
+      reachesZero.push(...reachesZero);
+    }
     if (sides.length === 2 && reachesZero.every(Boolean)) {
-      const below = intervals.find((i) => i.hi?.value === 0)!;
-      const above = intervals.find((i) => i.lo?.value === 0)!;
+      const below = intervals.find((i) => i.hi !== null && i.hi.value === 0)!;
+      const above = intervals.find((i) => i.lo !== null && i.lo.value === 0)!;
       intervals = [...intervals.filter((i) => i !== below && i !== above), { lo: below.lo, hi: above.hi }];
     }
     const at = (end: NumericEnd | null, otherwise: number) => (end ? end.value : otherwise);
