@@ -1,6 +1,6 @@
 import { Verdict } from '@/components/marks/verdict';
 import type { FindingView } from '@/lib/trials/trial';
-import { figureText } from './figure-text';
+import { Figures } from './figures';
 import { findingRows } from './finding-rows';
 
 /** What a trial found, what was required, how it was measured. */
@@ -24,13 +24,17 @@ export const FindingsTable = ({ findings }: { findings: readonly FindingView[] }
           <td className="num found">
             {row.found.map(({ text, languages }) => (
               <span key={text}>
-                {figureText(text)}
+                <Figures text={text} />
                 {languages.length > 0 && <small> {languages.join(', ')}</small>}
               </span>
             ))}
           </td>
-          <td className="q due">{row.targets.map(figureText).join('; ')}</td>
-          <td className="q small">{row.how.map(figureText).join(' ')}</td>
+          <td className="q due">
+            <Figures text={row.targets.join('; ')} />
+          </td>
+          <td className="q small">
+            <Figures text={row.how.join(' ')} />
+          </td>
           <td>
             <Verdict outcome={row.outcome} />
             {row.where.length > 0 && <small className="where"> in {row.where.join(' and ')}</small>}

@@ -34,8 +34,14 @@ export function KeysProvider({ children }: { children: React.ReactNode }) {
   const [lettersOff, setLettersOff] = useStoredFlag('single-letter-keys-off');
 
   const add = useCallback((deeds: readonly KeyDeed[]) => {
+    // How many sets of keys are heard stands on the page, for whoever must wait until it can be used.
+    const tell = () => (document.documentElement.dataset.keys = String(sets.current.size));
     sets.current.add(deeds);
-    return () => void sets.current.delete(deeds);
+    tell();
+    return () => {
+      sets.current.delete(deeds);
+      tell();
+    };
   }, []);
 
   const list = useCallback(() => setListed([...sets.current].flat()), []);

@@ -48,10 +48,11 @@ export function SignInForm({ goTo, code, demo }: SignInFormProps) {
           <span>E-mail address</span>
           <input name="email" type="email" autoComplete="username" required maxLength={320} />
         </label>
-        <label className={fault ? 'field bad' : 'field'}>
-          <span>Password</span>
+        <div className={fault ? 'field bad' : 'field'}>
+          <label htmlFor="password">Password</label>
           <input
             ref={password}
+            id="password"
             name="password"
             type="password"
             autoComplete="current-password"
@@ -60,10 +61,10 @@ export function SignInForm({ goTo, code, demo }: SignInFormProps) {
             aria-invalid={fault !== null}
             aria-describedby={fault ? 'sign-in-fault' : undefined}
           />
-          <span className="hint" id="sign-in-fault" role="alert">
+          <p className="hint" id="sign-in-fault" role="alert">
             {fault}
-          </span>
-        </label>
+          </p>
+        </div>
         <div className="acts">
           <button className="btn main" type="submit" disabled={!isReady || isBusy}>
             {isBusy ? 'Signing in' : 'Sign in'}

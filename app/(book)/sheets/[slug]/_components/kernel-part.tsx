@@ -83,7 +83,7 @@ export function KernelPart({ figure, source, first, aside, warning, origin }: Ke
       <div id="kernel-text" role="tabpanel" aria-label={`Kernel in ${NAMES[language]}`}>
         {shown?.kind === 'kernel' && (
           <div className="kern">
-            <pre tabIndex={0} aria-label={`${shown.fileName}, source text`}>
+            <pre tabIndex={0} aria-label={`${shown.fileName}, source text`} role="group">
               <code dangerouslySetInnerHTML={{ __html: shown.html }} />
             </pre>
             <div className="notes">
@@ -116,9 +116,6 @@ export function KernelPart({ figure, source, first, aside, warning, origin }: Ke
             </CopyButton>
             <span>session.txt holds the cookie of your sign-in.</span>
           </div>
-          <p className="small qq fingerprint">
-            <code>{shown.fingerprint}</code>
-          </p>
         </>
       )}
     </Part>

@@ -1,6 +1,7 @@
 import { LargeSketch } from '@/components/marks/large-sketch';
 import { Stamp } from '@/components/marks/stamp';
 import { StateMark } from '@/components/marks/vial';
+import { CopyFile } from '@/components/ui/copy-file';
 import { Prose } from '@/components/ui/prose';
 import { longDate } from '@/lib/entries/dates';
 import type { SheetView } from '@/lib/entries/entry';
@@ -87,7 +88,7 @@ function Title({ sheet }: { sheet: SheetView }) {
   );
 }
 
-function SketchLeaf({ sheet, drawing }: { sheet: SheetView; drawing: Drawing }) {
+function SketchLeaf({ sheet, drawing, kernel }: { sheet: SheetView; drawing: Drawing; kernel: ShownKernel }) {
   return (
     <div className="right">
       <div className="leafhd">
@@ -97,11 +98,20 @@ function SketchLeaf({ sheet, drawing }: { sheet: SheetView; drawing: Drawing }) 
       {drawing.sketch ? (
         <LargeSketch model={drawing.sketch} />
       ) : (
-        <p className="cap nosketch">A method for any right side has no points to draw.</p>
+        <p className="cap nosketch">
+          {sheet.kind === 'time-method'
+            ? 'A method for any right side has no points to draw.'
+            : 'There is nothing to draw until the definition holds.'}
+        </p>
       )}
       <div className="acts leafacts">
-        <a className="btn main" href="#kernel">
-          Go to the kernel
+        {kernel.kind === 'kernel' && (
+          <CopyFile address={kernel.address} className="btn main">
+            Copy C kernel
+          </CopyFile>
+        )}
+        <a className="btn" href="#kernel">
+          See the kernel
         </a>
       </div>
       {sheet.notes && (
@@ -128,7 +138,7 @@ export function SheetBody({ actor, sheet, kernel, origin }: SheetBodyProps) {
   const figureOf = (id: string) => parts.findIndex((part) => part.id === id) + 1;
   const drawing = drawingOf(sheet.definition, sheet.facts, sheet.summary);
   const { facts, summary, definition } = sheet;
-  const noTrial = kernel.kind === 'none' ? `No trial: ${kernel.reason}` : null;
+  const noTrial = kernel.kind === 'none' ? 'Without a kernel there is nothing to compile and run.' : null;
 
   return (
     <div className="sheet">
@@ -139,7 +149,7 @@ export function SheetBody({ actor, sheet, kernel, origin }: SheetBodyProps) {
         <section id="readings" tabIndex={-1} aria-label="Readings and sketch">
           <div className="spread keep">
             <Readings rule={drawing.rule} sheet={sheet} readings={readingsOf(sheet)} />
-            <SketchLeaf sheet={sheet} drawing={drawing} />
+            <SketchLeaf sheet={sheet} drawing={drawing} kernel={kernel} />
           </div>
         </section>
         {facts?.kind === 'scheme' && summary && (
