@@ -4,10 +4,15 @@ import type { CanonicalScheme } from '@/lib/numerics/canonical-scheme';
 import { CONVENTIONS } from '@/lib/numerics/equation';
 import { schemeDissipation } from '@/lib/numerics/dissipation';
 import { formatRational, rational, type Rational } from '@/lib/numerics/rational';
-import { exactIntervals } from '@/lib/numerics/stability/exact-stability';
+import { withParameters } from '@/lib/numerics/restricted-scheme';
+import { analyseStability } from '@/lib/numerics/stability/analyse-stability';
+import type { WorkBudget } from '@/lib/numerics/stability/stability-result';
 import type { DissipationFacts, StabilityFacts } from './facts';
 
 const DENOMINATOR_LIMIT = 40;
+/** Without a limit of its own, an analysis ends here. */
+const LONGEST_MS = 60_000;
+const PLACEHOLDER = 'unused';
 
 /** The fraction nearest to a positive value among those with a denominator up to 40 (continued fractions). */
 function nearbyFraction(value: number): Rational {
@@ -25,25 +30,30 @@ const numberOf = (text: string | null) => (text === null ? null : Number(text));
 
 /**
  * Half the bound of the interval that reaches furthest from 0, as a simple fraction; ten where there is no bound and
- * one half where nothing is stable; less where the scheme happens to be better there. All parameters share one value.
+ * one half where nothing is stable. Two fifths where half the bound is an exact shift, and for waves in several
+ * dimensions. All parameters share one value.
  */
 export function representativeValues(
   scheme: CanonicalScheme,
   stability: StabilityFacts,
-  special: readonly { readonly value: string }[],
+  special: readonly { readonly value: string; readonly order: number | null }[],
 ): Rational[] {
   const isTransport = CONVENTIONS[scheme.equation].nonNegative.length === 0;
+  const large = isTransport ? 10 : scheme.dims === 1 ? 30 : 20;
+  const isRadial = scheme.timeOrder === 2 && scheme.dims > 1;
   const share = (value: Rational) => scheme.parameters.map(() => value);
   const [first] = stability.intervals.filter((i) => i.hi === null || Number(i.hi) > 0).concat(stability.intervals);
   if (!first) return share(rational(1, 2));
   const [lo, hi] = [numberOf(first.lo), numberOf(first.hi)];
-  if (hi === null && (lo === null || lo <= 0)) return share(rational(isTransport ? 10 : 30));
+  if (hi === null && (lo === null || lo <= 0)) return share(rational(large));
   if (hi !== null && hi > 0) {
     const middle = lo !== null && lo > 0 ? (lo + hi) / 2 : hi / 2;
-    const isSpecial = special.some(({ value }) => value === formatRational(nearbyFraction(middle)));
-    return share(nearbyFraction(isSpecial ? 0.8 * middle : middle));
+    const isSpecial = special.some(
+      ({ value, order }) => order === null && value === formatRational(nearbyFraction(middle)),
+    );
+    return share(nearbyFraction(isSpecial || isRadial ? 0.8 * middle : middle));
   }
-  if (lo === null) return share(rational(isTransport ? -10 : 30));
+  if (lo === null) return share(rational(isTransport ? -large : large));
   if (hi === null) return share(nearbyFraction(2 * lo));
   const size = nearbyFraction(-(lo + hi) / 2);
   return share(rational(-size.num, size.den));
@@ -65,18 +75,18 @@ const undecided = (scheme: CanonicalScheme, note: string): StabilityFacts => ({
   note,
 });
 
+/** With all numbers fixed, a number that the scheme does not use stands for the line on which the analysis works. */
+function fixedStability(scheme: CanonicalScheme, budget: WorkBudget): StabilityFacts {
+  const { verdict, lostAt, method, note } = analyseStability(withParameters(scheme, [PLACEHOLDER], []), budget);
+  const fixed = 'All numbers are fixed: the verdict holds for these values.';
+  return { ...undecided(scheme, [note, fixed].filter(Boolean).join(' ')), verdict, lostAt, method };
+}
+
 export function schemeStability(scheme: CanonicalScheme, budget: Budget): StabilityFacts {
   if (budget.isCancelled()) return undecided(scheme, 'The analysis was cancelled.');
-  if (scheme.form === 'scalar' && scheme.dims === 1 && scheme.parameters.length === 1) {
-    const outcome = exactIntervals(scheme, {
-      timeLimitMs: Math.min(20_000, budget.remainingMs()),
-      isCancelled: () => budget.isCancelled(),
-    });
-    if (outcome.kind === 'decided')
-      return { ...undecided(scheme, ''), ...outcome.result, kind: 'one-parameter', examined: null };
-    return undecided(scheme, outcome.why);
-  }
-  return undecided(scheme, 'The time given to the analysis was over.');
+  const work: WorkBudget = { timeLimitMs: Math.min(LONGEST_MS, budget.remainingMs()), isCancelled: budget.isCancelled };
+  if (work.timeLimitMs <= 0) return undecided(scheme, 'The time given to the analysis was over.');
+  return scheme.parameters.length === 0 ? fixedStability(scheme, work) : analyseStability(scheme, work);
 }
 
 export function schemeDissipationFacts(scheme: CanonicalScheme, values: readonly Rational[]): DissipationFacts | null {

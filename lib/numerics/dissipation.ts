@@ -55,7 +55,8 @@ export function schemeDissipation(scheme: CanonicalScheme, values: readonly Rati
     const short = Math.hypot(...theta) > LONG_WAVE;
     for (let k = 0; k < roots.re.length; k++) {
       const modulus = Math.hypot(roots.re[k]!, roots.im[k]!);
-      const tolerance = 4 * rootTolerance(polynomial, roots.re[k]!, roots.im[k]!, size) + 1e-13;
+      // The error bound of a multiple root away from the circle has no end.
+      const tolerance = Math.min(1e-6, 4 * rootTolerance(polynomial, roots.re[k]!, roots.im[k]!, size) + 1e-13);
       const onCircle = Math.abs(modulus - 1) <= tolerance;
       if (!onCircle) conservative = false;
       if (short) maxModulus = Math.max(maxModulus, onCircle ? 1 : modulus);
@@ -64,7 +65,11 @@ export function schemeDissipation(scheme: CanonicalScheme, values: readonly Rati
   }
   const order = conservative ? null : principalDampingOrder(scalar, values);
   const kreissDissipative =
-    order !== null && order > 0 && maxModulus < 1 - 1e-12 && rootsOnUnitCircleAtTheta0 === 1 && numeric.stationaryRoots === 0;
+    order !== null &&
+    order > 0 &&
+    maxModulus < 1 - 1e-12 &&
+    rootsOnUnitCircleAtTheta0 === 1 &&
+    numeric.stationaryRoots === 0;
   return {
     at: Object.fromEntries(scheme.parameters.map((name, k) => [name, formatRational(values[k]!)])),
     principalRootDampingOrder: order,
