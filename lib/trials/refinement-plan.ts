@@ -73,6 +73,17 @@ function exactInTime(subject: MarchSubject, parameters: readonly number[]): (the
   return (theta) => spaceSymbol(parameters, theta);
 }
 
+/**
+ * Exponent of "times finer" by which a parameter changes while dt goes with dx^(s/timeOrder): 0 for the number of the
+ * highest derivative, −1 for lambda beside r, since c dt/dx then goes with dx.
+ */
+function scaling({ scheme }: MarchSubject, k: number): number {
+  const { parameters, operators, spaceOrder, timeOrder } = CONVENTIONS[scheme.equation];
+  const place = parameters.indexOf(scheme.parameters[k]!);
+  const operator = place >= 0 && parameters.length === operators.length ? operators[place]! : spaceOrder;
+  return (operator - spaceOrder) / timeOrder;
+}
+
 function runsFor(subject: MarchSubject, parameters: readonly number[], base: number, firstSteps: number): RefinedRun[] {
   const { spaceOrder, timeOrder } = CONVENTIONS[subject.scheme.equation];
   return TIMES_FINER.map((finer) => {
@@ -86,12 +97,13 @@ function runsFor(subject: MarchSubject, parameters: readonly number[], base: num
         exact: exactInTime(subject, scaled),
       };
     }
+    const scaled = parameters.map((value, k) => value * finer ** scaling(subject, k));
     return {
       n: base * finer,
       steps: Math.round(firstSteps * finer ** (spaceOrder / timeOrder)),
-      parameters,
+      parameters: scaled,
       step: 1 / finer,
-      exact: sampleScheme(subject.scheme, parameters).exact,
+      exact: sampleScheme(subject.scheme, scaled).exact,
     };
   });
 }

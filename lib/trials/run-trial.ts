@@ -98,10 +98,10 @@ function endOf(
  */
 export async function runTrial(input: KernelInput, hooks: TrialHooks = {}): Promise<TrialResult> {
   const { signal, onProgress, onFindings, sourcesOf } = hooks;
-  const about = trialSubject(input.definition, input.facts);
-  if (about.kind === 'none') return refused(about.reason);
   const printed = TRIAL_LANGUAGES.map((language) => ({ language, sources: sourcesFor(input, language) }));
   for (const { sources } of printed) if (typeof sources === 'string') return refused(sources);
+  const about = trialSubject(input.definition, input.facts);
+  if (about.kind === 'none') return refused(about.reason);
 
   const plan = planTrial(about.subject);
   const findings: FindingView[] = [];

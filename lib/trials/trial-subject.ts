@@ -4,6 +4,7 @@ import { canonicalScheme } from '@/lib/facts/canonical-scheme';
 import { canonicalStencil } from '@/lib/facts/canonical-stencil';
 import type { Facts, SchemeFacts, StencilFacts, TimeMethodFacts } from '@/lib/facts/facts';
 import type { ScalarScheme } from '@/lib/numerics/canonical-scheme';
+import { CONVENTIONS } from '@/lib/numerics/equation';
 import { isZero, parseRational, toNumber } from '@/lib/numerics/rational';
 import { gridGrowth, sampleScheme } from './characteristic';
 import { chooseParameter, type ParameterChoice } from './parameter-choice';
@@ -63,6 +64,14 @@ function chooseSeveral(scheme: ScalarScheme, facts: SchemeFacts): ParameterChoic
     : { working: [lists[2]!], stable: false, ends: [], farInside: null };
 }
 
+/** At fixed parameters; where several scale differently, with dt going as dx^(s/timeOrder). */
+function orderOf(scheme: ScalarScheme, { consistent, orderAtFixedParameter, pT, pX }: SchemeFacts['order']) {
+  if (!consistent) return null;
+  if (orderAtFixedParameter !== null || pT === null || pX === null) return orderAtFixedParameter;
+  const { spaceOrder, timeOrder } = CONVENTIONS[scheme.equation];
+  return Math.min(pX, (pT * spaceOrder) / timeOrder);
+}
+
 function schemeSubject(definition: SchemeDefinition, facts: SchemeFacts): SubjectAnswer {
   const scheme = scalarOf(definition);
   if (typeof scheme === 'string') return none(scheme);
@@ -80,7 +89,7 @@ function schemeSubject(definition: SchemeDefinition, facts: SchemeFacts): Subjec
     scheme,
     keptLevels: keptLevelsOf(scheme),
     halo: reachOf(scheme),
-    order: order.consistent ? order.orderAtFixedParameter : null,
+    order: orderOf(scheme, order),
     refine: 'grid',
     spaceSymbol: null,
     ...choice,
@@ -185,7 +194,8 @@ function stencilSubject(definition: StencilDefinition, facts: StencilFacts): Sub
     weights: used.map(({ weight }) => weight),
     derivative: stencil.operator[0]!.powers[0]!,
     shift,
-    order: facts.consistent ? facts.order : null,
+    // Printed decimals satisfy their conditions to the last digit printed: the order they stand for is what shows.
+    order: facts.nominal?.order ?? (facts.consistent ? facts.order : null),
     halo: Math.max(...offsets.map(Math.abs)),
     operations: facts.cost.operations,
     bytes: facts.cost.bytesDouble,
