@@ -4,6 +4,7 @@ import { C } from './c';
 import { coefficientSource, type Coefficient } from './coefficient';
 import { infix, type Assignment } from './expression-tree';
 import type { View } from './kernel-source';
+import { haloLines } from './halo-text';
 import type { StagesPlan, StartPlan, TablePlan } from './kernel-plan';
 import {
   arraysOf,
@@ -60,16 +61,6 @@ export class CSchemeView {
   }
   private fill(array: string) {
     return this.periodic ? `${this.context.prefix}_fill_halo(n, ${array});` : `fill(n, ${array}, context);`;
-  }
-
-  private fillLines(): string {
-    const [left, right] = this.context.plan.halo;
-    const at = (k: number) => (k === 0 ? '' : ` + ${k}`);
-    const lines = [
-      ...Array.from({ length: left }, (_, k) => `u[${k}] = u[n${at(k)}];`),
-      ...Array.from({ length: right }, (_, k) => `u[n${at(left + k)}] = u[${left + k}];`),
-    ];
-    return lines.length > 0 ? lines.join('\n') : '(void)n;\n(void)u;  /* no ghost cells */';
   }
 
   private tableRows(plan: TablePlan): View[] {
@@ -251,7 +242,7 @@ export class CSchemeView {
       divisorWords: plan.divisor ? ', or the coefficient of the new level is 0' : '',
       boundWords: boundWords(bound),
       caller: this.periodic ? [] : [{}],
-      periodic: this.periodic ? [{ fillLines: this.fillLines() }] : [],
+      periodic: this.periodic ? [{ fillLines: haloLines('c', this.context.plan.halo) }] : [],
       declarations: this.declarations(),
       checkParameters: ['ptrdiff_t n', ...this.parameters].join(', '),
       checkArguments: ['n', ...this.symbols].join(', '),
@@ -274,7 +265,7 @@ export class CSchemeView {
     const second = plan.timeOrder === 2;
     return {
       prefix,
-      caller: this.periodic ? [] : [{ fillLines: this.fillLines() }],
+      caller: this.periodic ? [] : [{ fillLines: haloLines('c', this.context.plan.halo) }],
       declarations: this.declarations(),
       arrays: String(arraysOf(plan)),
       levels: String(levelsOf(plan)),

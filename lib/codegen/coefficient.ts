@@ -65,7 +65,10 @@ export function coefficientSource(
     return polynomialText(scale(value.num, factor), symbols, literal);
   }
   const { num, den } = withPlainDenominator(value);
-  return `(${polynomialText(num, symbols, literal)})/(${polynomialText(den, symbols, literal)})`;
+  const above = polynomialText(num, symbols, literal);
+  const below = polynomialText(den, symbols, literal);
+  const inBrackets = (text: string, pattern: RegExp) => (pattern.test(text) ? `(${text})` : text);
+  return `${inBrackets(above, / /)}/${inBrackets(below, /[ *]/)}`;
 }
 
 /**

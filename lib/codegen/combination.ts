@@ -118,5 +118,6 @@ export function combine(
     coefficients.push({ name, value: group.coefficient });
     return { negative: group.negative, node: product(named(name), inner) };
   });
+  coefficients.sort((a, b) => (a.name < b.name ? -1 : 1));
   return { node: signedSum(signed), coefficients };
 }

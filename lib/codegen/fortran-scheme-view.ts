@@ -3,6 +3,7 @@ import { boundCondition } from './bound';
 import { coefficientSource, type Coefficient } from './coefficient';
 import { infix, type Assignment } from './expression-tree';
 import { FORTRAN } from './fortran';
+import { haloExtent, haloLines } from './halo-text';
 import type { StagesPlan, TablePlan } from './kernel-plan';
 import type { View } from './kernel-source';
 import {
@@ -45,7 +46,7 @@ export class FortranSchemeView {
   constructor(private readonly context: SchemeContext) {
     const { plan } = context;
     this.symbols = plan.parameters.map((p) => p.name);
-    this.extent = `${1 - plan.halo[0]}:${plan.halo[1] === 0 ? 'n' : `n+${plan.halo[1]}`}`;
+    this.extent = haloExtent(plan.halo);
   }
 
   private get periodic() {
@@ -59,16 +60,6 @@ export class FortranSchemeView {
   }
   private fill(array: string) {
     return this.periodic ? `call ${this.context.prefix}_fill_halo(n, ${array})` : `call fill(n, ${array})`;
-  }
-
-  private fillLines(): string {
-    const [left, right] = this.context.plan.halo;
-    const after = (k: number) => `n+${k}`;
-    const before = (k: number) => (k === 0 ? 'n' : `n-${k}`);
-    return [
-      ...Array.from({ length: left }, (_, k) => `u(${-k}) = u(${before(k)})`),
-      ...Array.from({ length: right }, (_, k) => `u(${after(k + 1)}) = u(${k + 1})`),
-    ].join('\n');
   }
 
   private arrayDeclaration(
@@ -257,7 +248,7 @@ export class FortranSchemeView {
         ...(start.length > 0 ? [{ name: `${prefix}_start` }] : []),
       ],
       caller: this.periodic ? [] : [{}],
-      periodic: this.periodic ? [{ fillLines: this.fillLines() }] : [],
+      periodic: this.periodic ? [{ fillLines: haloLines('fortran', this.context.plan.halo) }] : [],
       checkArguments: ['n', ...this.symbols].join(', '),
       parameterDeclarations: scalarDeclaration(this.symbols),
       refused: refused.length > 0 ? [{ condition: refused.join(' .or. ') }] : [],
@@ -300,7 +291,7 @@ export class FortranSchemeView {
       haloRight: String(plan.halo[1]),
       arrays: String(arraysOf(plan)),
       levels: String(levelsOf(plan)),
-      caller: this.periodic ? [] : [{ fillLines: this.fillLines() }],
+      caller: this.periodic ? [] : [{ fillLines: haloLines('fortran', this.context.plan.halo) }],
       checkArguments: ['n', ...this.symbols].join(', '),
       runArguments: [...(rotating ? ['newest'] : []), ...this.fillArguments].map((name) => `${name}, `).join(''),
       parameterDeclarations: scalarDeclaration(this.symbols),

@@ -26,8 +26,9 @@ export const optionsText = (options: KernelOptions) => `${options.precision},${o
 
 function notesOf(source: string, described: Described): GeneratedKernel['notes'] {
   const lines = source.split('\n');
+  const header = source.slice(0, source.indexOf('release ')).split('\n').length;
   return described.notes.flatMap(({ anchor, text }) => {
-    const line = lines.findIndex((l) => l.includes(anchor));
+    const line = lines.findIndex((l, k) => (k === 0 || k > header) && l.includes(anchor));
     return line < 0 ? [] : [{ line: line + 1, text }];
   });
 }

@@ -82,7 +82,10 @@ function formulaLines({ plan }: SchemeContext): string[] {
   };
   return [
     ...plan.sweeps.flatMap(({ assignments }, k) =>
-      entry(k === 0 ? 'Formula' : '', `stage ${k + 1}: ${assignments.map((a) => text(a, k)).join('; ')}`),
+      assignments.flatMap((a, line) => {
+        const stage = line === 0 ? `stage ${k + 1}: ` : ' '.repeat(9);
+        return entry(k === 0 && line === 0 ? 'Formula' : '', stage + text(a, k));
+      }),
     ),
     ...where,
   ];

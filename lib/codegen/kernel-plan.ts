@@ -60,6 +60,17 @@ export interface StagesPlan extends SchemeBase {
 
 export type SchemePlan = TablePlan | StagesPlan;
 
+/** An explicit difference or interpolation on offsets from the point of evaluation. */
+export interface StencilPlan {
+  readonly derivative: number;
+  readonly halo: readonly [number, number];
+  /** d[i] over reads of u, coefficients in h. */
+  readonly node: Node;
+  readonly coefficients: readonly Coefficient[];
+  /** The approximation at index i stands at x_i + h/2. */
+  readonly staggered: boolean;
+}
+
 /** "lambda" is a reserved word in Python. */
 export const parameterName = (symbol: string) => symbol.replace(/^lambda/, 'lam');
 export const asParameter = (symbol: string): Parameter => ({ symbol, name: parameterName(symbol) });

@@ -6,74 +6,23 @@ import { firstLine, schemeHeader } from './header-text';
 import { none, type Planned } from './kernel-plan';
 import type { KernelInput, KernelLanguage, KernelOptions } from './kernel-request';
 import type { View } from './kernel-source';
+import { planMethod } from './method-plan';
+import { methodDriverView, methodHeader, methodView, type MethodContext } from './method-view';
 import { PythonSchemeView } from './python-scheme-view';
 import { planScheme } from './scheme-plan';
 import { kernelPrefix, schemeCalling, schemeNotes, type SchemeContext } from './scheme-words';
+import { planStencil } from './stencil-plan';
+import { derivativeWords, stencilDriverView, stencilHeader, stencilView, type StencilContext } from './stencil-view';
 
 export interface Described {
   readonly prefix: string;
   readonly firstLine: string;
   readonly header: readonly string[];
-  /** Template without suffix: "scheme", "stencil", … */
+  /** Template without suffix: "scheme", "stencil", "runge-kutta", "multistep". */
   readonly template: string;
   readonly view: View;
-  /** Margin notes: the first line that contains `anchor`. */
+  /** Margin notes: the first line below the header that contains `anchor`. */
   readonly notes: readonly { readonly anchor: string; readonly text: string }[];
-}
-
-export interface SchemeViewer {
-  view(): View;
-  driver(): View;
-}
-
-export function schemeViewer(context: SchemeContext, language: KernelLanguage): SchemeViewer {
-  switch (language) {
-    case 'c':
-      return new CSchemeView(context);
-    case 'fortran':
-      return new FortranSchemeView(context);
-    case 'python':
-      return new PythonSchemeView(context);
-  }
-}
-
-/** The scheme of a revision with all that its kernels in any language share. */
-export function schemeContext(input: KernelInput, options: KernelOptions): Planned<SchemeContext> {
-  const { definition, facts } = input;
-  if (definition.kind !== 'scheme' || facts.kind !== 'scheme')
-    return none('The facts do not belong to this definition.');
-  const planned = planScheme(definition, facts);
-  if (planned.kind === 'none') return planned;
-  const context = {
-    input,
-    facts,
-    options,
-    plan: planned.plan,
-    bound: boundOf(facts),
-    prefix: kernelPrefix(input.callNumber),
-  };
-  return { kind: 'plan', plan: context };
-}
-
-export function describeKernel(
-  input: KernelInput,
-  language: KernelLanguage,
-  options: KernelOptions,
-): Planned<Described> {
-  const planned = schemeContext(input, options);
-  if (planned.kind === 'none') return planned;
-  const context = planned.plan;
-  return {
-    kind: 'plan',
-    plan: {
-      prefix: context.prefix,
-      firstLine: firstLine(input, context.plan.halo, boundText(context.bound), options),
-      header: schemeHeader(context, language, schemeCalling(context, language)),
-      template: 'scheme',
-      view: schemeViewer(context, language).view(),
-      notes: schemeNotes(context, language),
-    },
-  };
 }
 
 export interface DescribedDriver {
@@ -82,13 +31,120 @@ export interface DescribedDriver {
   readonly view: View;
 }
 
+interface Printable {
+  kernel(language: KernelLanguage): Described;
+  driver(language: KernelLanguage): DescribedDriver;
+}
+
+const SCHEME_VIEWS = { c: CSchemeView, fortran: FortranSchemeView, python: PythonSchemeView };
+
+function printableScheme(context: SchemeContext): Printable {
+  const { input, options, prefix, plan, bound } = context;
+  return {
+    kernel: (language) => ({
+      prefix,
+      firstLine: firstLine(input, plan.halo, boundText(bound), options),
+      header: schemeHeader(context, language, schemeCalling(context, language)),
+      template: 'scheme',
+      view: new SCHEME_VIEWS[language](context).view(),
+      notes: schemeNotes(context, language),
+    }),
+    driver: (language) => ({
+      prefix,
+      template: 'driver-scheme',
+      view: new SCHEME_VIEWS[language](context).driver(),
+    }),
+  };
+}
+
+function printableStencil(context: StencilContext): Printable {
+  const { input, options, prefix, plan, facts } = context;
+  const what = `${derivativeWords(plan.derivative)}, ${facts.order === null ? 'exact' : `order ${facts.order}`}`;
+  return {
+    kernel: (language) => ({
+      prefix,
+      firstLine: firstLine(input, plan.halo, what, options),
+      header: stencilHeader(context, language),
+      template: 'stencil',
+      view: stencilView(context, language),
+      notes: [
+        {
+          anchor: { c: 'd[i] =', fortran: 'd(i) =', python: 'out=' }[language],
+          text: 'Equal and opposite weights share one product.',
+        },
+      ],
+    }),
+    driver: (language) => ({ prefix, template: 'driver-stencil', view: stencilDriverView(context, language) }),
+  };
+}
+
+function printableMethod(context: MethodContext): Printable {
+  const { input, prefix, plan, facts } = context;
+  const limit =
+    facts.imaginaryLimit === null
+      ? 'no limit'
+      : `|y| <= ${String(Number(Number(facts.imaginaryLimit).toPrecision(6)))}`;
+  return {
+    kernel: (language) => ({
+      prefix,
+      firstLine: `${input.callNumber} r${input.revision}   order ${facts.orderLinear}; on the imaginary axis ${limit}   no halo`,
+      header: methodHeader(context, language),
+      template: plan.shape,
+      view: methodView(context, language),
+      notes: [
+        {
+          anchor: { c: 'restrict', fortran: 'intent(in', python: 'out=' }[language],
+          text:
+            plan.shape === 'multistep'
+              ? 'The oldest slope makes room for the newest.'
+              : 'Each slope joins its sums at once; one slope is stored.',
+        },
+      ],
+    }),
+    driver: (language) => ({ prefix, template: `driver-${plan.shape}`, view: methodDriverView(context, language) }),
+  };
+}
+
+function printable(input: KernelInput, options: KernelOptions): Planned<Printable> {
+  const { definition, facts } = input;
+  const prefix = kernelPrefix(input.callNumber);
+  if (definition.kind === 'scheme' && facts.kind === 'scheme') {
+    if (!facts.order.consistent) return none(facts.order.reason ?? 'The scheme is not consistent with its equation.');
+    const planned = planScheme(definition, facts);
+    if (planned.kind === 'none') return planned;
+    return {
+      kind: 'plan',
+      plan: printableScheme({ input, facts, options, plan: planned.plan, bound: boundOf(facts), prefix }),
+    };
+  }
+  if (definition.kind === 'stencil' && facts.kind === 'stencil') {
+    if (!facts.consistent) return none('The weights do not approximate this derivative.');
+    const planned = planStencil(definition);
+    if (planned.kind === 'none') return planned;
+    return { kind: 'plan', plan: printableStencil({ input, facts, options, plan: planned.plan, prefix }) };
+  }
+  if (definition.kind === 'time-method' && facts.kind === 'time-method') {
+    const planned = planMethod(definition, facts.orderNominal ?? facts.orderLinear);
+    if (planned.kind === 'none') return planned;
+    return { kind: 'plan', plan: printableMethod({ input, facts, plan: planned.plan, prefix }) };
+  }
+  return none('The facts do not belong to this definition.');
+}
+
+export function describeKernel(
+  input: KernelInput,
+  language: KernelLanguage,
+  options: KernelOptions,
+): Planned<Described> {
+  const planned = printable(input, options);
+  return planned.kind === 'none' ? planned : { kind: 'plan', plan: planned.plan.kernel(language) };
+}
+
 export function describeDriver(
   input: KernelInput,
   language: KernelLanguage,
   options: KernelOptions,
 ): Planned<DescribedDriver> {
-  const planned = schemeContext(input, options);
-  if (planned.kind === 'none') return planned;
-  const viewer = schemeViewer(planned.plan, language);
-  return { kind: 'plan', plan: { prefix: planned.plan.prefix, template: 'driver-scheme', view: viewer.driver() } };
+  const planned = printable(input, options);
+  return planned.kind === 'none' ? planned : { kind: 'plan', plan: planned.plan.driver(language) };
 }

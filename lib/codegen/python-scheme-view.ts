@@ -2,6 +2,7 @@
 import { boundCondition, boundText } from './bound';
 import { coefficientSource, type Coefficient } from './coefficient';
 import { infix, type Assignment, type Dialect } from './expression-tree';
+import { haloLines } from './halo-text';
 import type { StagesPlan, TablePlan } from './kernel-plan';
 import type { View } from './kernel-source';
 import { PYTHON, pythonSweep, type PythonSweep } from './python';
@@ -40,17 +41,6 @@ export class PythonSchemeView {
   }
   private fill(array: string) {
     return this.periodic ? `fill_halo(${array})` : `fill(${array})`;
-  }
-
-  private fillLines(): string {
-    const [left, right] = this.context.plan.halo;
-    const from = (k: number) => (k === 0 ? '' : String(k));
-    const lines: string[] = [];
-    if (left === 1) lines.push(`u[0] = u[${-right - 1}]`);
-    else if (left > 1) lines.push(`u[:${left}] = u[${-left - right}:${right === 0 ? '' : -right}]`);
-    if (right === 1) lines.push(`u[-1] = u[${left}]`);
-    else if (right > 1) lines.push(`u[-${right}:] = u[${from(left)}:${left + right}]`);
-    return lines.length > 0 ? lines.join('\n') : 'del u  # no ghost cells';
   }
 
   private sweep(assignments: readonly Assignment[]): PythonSweep {
@@ -186,7 +176,7 @@ export class PythonSchemeView {
             },
           ]
         : [],
-      periodic: this.periodic ? [{ fillLines: this.fillLines() }] : [],
+      periodic: this.periodic ? [{ fillLines: haloLines('python', this.context.plan.halo) }] : [],
       classAbout: this.classAbout().map((line) => ({ line })),
       initArguments: ['levels', ...this.symbols, ...fillInStep].join(', '),
       initScalars: [
@@ -216,7 +206,7 @@ export class PythonSchemeView {
     const fill = this.fillArguments.map((name) => `, ${name}`).join('');
     const kernelFill = (text: string) => text.replaceAll('fill_halo(', 'kernel.fill_halo(');
     return {
-      caller: this.periodic ? [] : [{ fillLines: this.fillLines() }],
+      caller: this.periodic ? [] : [{ fillLines: haloLines('python', this.context.plan.halo) }],
       count: String(this.symbols.length),
       stepFill: plan.shape === 'stages' ? fill : '',
       runFill: fill,

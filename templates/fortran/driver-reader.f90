@@ -3,7 +3,7 @@ module task_file
   use, intrinsic :: iso_fortran_env, only: wp => real64, int64, error_unit, iostat_end
   implicit none
   private
-  public :: open_tasks, next_line, word, whole, bits, line_end, read_points, print_points, seconds, triad, fail
+  public :: open_tasks, next_line, word, whole, bits, more, line_end, read_points, print_points, seconds, triad, fail
 
   integer :: unit = -1
   integer :: line_number = 0
@@ -90,6 +90,15 @@ contains
     if (status /= 0) call fail('expected the 16 hexadecimal digits of a double')
     value = transfer(pattern, value)
   end function bits
+
+  !> Whether the line has a further word.
+  function more()
+    logical :: more
+    integer :: before
+    before = place
+    more = found() /= ''
+    place = before
+  end function more
 
   subroutine line_end()
     if (found() /= '') call fail('there are more words than this task has')
