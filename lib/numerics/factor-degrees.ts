@@ -10,14 +10,22 @@ import { modularGcd, type ModularPolynomial, PrimeField, trimModular } from './p
 const PRIMES = [1009, 1013, 1021, 1033, 1049, 1061, 1069, 1093, 1097, 1109, 1117, 1129];
 const IMAGES = 4;
 
+const reduced = (a: number, prime: number) => {
+  const rest = a % prime;
+  return rest < 0 ? rest + prime : rest;
+};
+
+/** Written over a; entries of a may be any integers below 2^53. Primes are so small that sums need no reduction. */
 function remainder(field: PrimeField, a: ModularPolynomial, monic: ModularPolynomial): ModularPolynomial {
   const n = monic.length - 1;
   for (let top = a.length - 1; top >= n; top--) {
-    const factor = a[top]!;
+    const factor = reduced(a[top]!, field.prime);
     if (factor === 0) continue;
-    for (let k = 0; k <= n; k++) a[top - n + k] = field.sub(a[top - n + k]!, field.mul(factor, monic[k]!));
+    const shift = top - n;
+    for (let k = 0; k < n; k++) a[shift + k]! -= factor * monic[k]!;
   }
   a.length = Math.min(a.length, n);
+  for (let k = 0; k < a.length; k++) a[k] = reduced(a[k]!, field.prime);
   return trimModular(a);
 }
 
@@ -29,8 +37,10 @@ function productOf(
 ): ModularPolynomial {
   if (a.length === 0 || b.length === 0) return [];
   const product = new Array<number>(a.length + b.length - 1).fill(0);
-  for (let j = 0; j < a.length; j++)
-    for (let k = 0; k < b.length; k++) product[j + k] = field.add(product[j + k]!, field.mul(a[j]!, b[k]!));
+  for (let j = 0; j < a.length; j++) {
+    const factor = a[j]!;
+    for (let k = 0; k < b.length; k++) product[j + k]! += factor * b[k]!;
+  }
   return remainder(field, product, monic);
 }
 

@@ -36,11 +36,18 @@ export class PrimeField {
   }
   /** Inverse of a nonzero element. */
   inverse(a: number): number {
-    let [r, s, u, v] = [this.prime, a, 0, 1];
+    let r = this.prime;
+    let s = a;
+    let u = 0;
+    let v = 1;
     while (s !== 0) {
       const q = Math.floor(r / s);
-      [r, s] = [s, r - q * s];
-      [u, v] = [v, u - q * v];
+      const rest = r - q * s;
+      const next = u - q * v;
+      r = s;
+      s = rest;
+      u = v;
+      v = next;
     }
     return u < 0 ? u + this.prime : u;
   }
@@ -105,48 +112,56 @@ export function modularGcd(field: PrimeField, a: ModularPolynomial, b: ModularPo
   return f.map((c) => field.mul(c, inverse));
 }
 
+const degreeBelow = (a: readonly number[], from: number) => {
+  let d = from;
+  while (d >= 0 && a[d] === 0) d--;
+  return d;
+};
+
 /**
  * Resultant of polynomials of formal degrees m and n, also where leading coefficients vanish modulo p.
- * Convention: lc(a)ⁿ · Π b(α) over the roots α of a.
+ * Convention: lc(a)ⁿ · Π b(α) over the roots α of a. Both arrays, of m + 1 and n + 1 entries, are overwritten.
  */
-export function modularResultant(
-  field: PrimeField,
-  a: ModularPolynomial,
-  b: ModularPolynomial,
-  m: number,
-  n: number,
-): number {
-  let [f, g] = [trimModular([...a]), trimModular([...b])];
-  let [formalF, formalG] = [m, n];
+export function modularResultant(field: PrimeField, a: number[], b: number[], m: number, n: number): number {
+  let f = a;
+  let g = b;
+  let formalF = m;
+  let formalG = n;
   let result = 1;
+  const flip = (times: number) => {
+    if (times % 2 === 1) result = field.sub(0, result);
+  };
   for (;;) {
-    if (formalG === 0) return field.mul(result, field.power(g[0] ?? 0, formalF));
-    if (formalF === 0) return field.mul(result, field.power(f[0] ?? 0, formalG));
-    if (f.length === 0 || g.length === 0) return 0;
-    const [degreeF, degreeG] = [f.length - 1, g.length - 1];
-    if (degreeF < formalF && degreeG < formalG) return 0;
+    const degreeF = degreeBelow(f, formalF);
+    const degreeG = degreeBelow(g, formalG);
+    if (formalG === 0) return field.mul(result, field.power(g[0]!, formalF));
+    if (formalF === 0) return field.mul(result, field.power(f[0]!, formalG));
+    if (degreeF < 0 || degreeG < 0 || (degreeF < formalF && degreeG < formalG)) return 0;
     if (degreeF < formalF) {
       result = field.mul(result, field.power(g[degreeG]!, formalF - degreeF));
-      if ((formalG * (formalF - degreeF)) % 2 === 1) result = field.sub(0, result);
-      formalF = degreeF;
+      flip(formalG * (formalF - degreeF));
     }
-    if (degreeG < formalG) {
-      result = field.mul(result, field.power(f[degreeF]!, formalG - degreeG));
-      formalG = degreeG;
-    }
+    if (degreeG < formalG) result = field.mul(result, field.power(f[degreeF]!, formalG - degreeG));
     if (degreeG === 0) return field.mul(result, field.power(g[0]!, degreeF));
     if (degreeF === 0) return field.mul(result, field.power(f[0]!, degreeG));
-    if (degreeF < degreeG) {
-      [f, g] = [g, f];
-      [formalF, formalG] = [formalG, formalF];
-      if ((degreeF * degreeG) % 2 === 1) result = field.sub(0, result);
-    } else {
-      // Res(f, g) = (−1)^(mn) Res(g, f), and f may be replaced by its remainder with the same formal degree.
-      f = reduceBy(field, f, g);
-      [f, g] = [g, f];
-      [formalF, formalG] = [degreeG, degreeF];
-      if ((degreeF * degreeG) % 2 === 1) result = field.sub(0, result);
+    // Res(f, g) = (−1)^(mn) Res(g, f), and the one of higher degree may be replaced by its remainder with the same
+    // formal degree.
+    if (degreeF >= degreeG) {
+      const inverse = field.inverse(g[degreeG]!);
+      for (let top = degreeF; top >= degreeG; top--) {
+        if (f[top] === 0) continue;
+        const factor = field.mul(f[top]!, inverse);
+        const shift = top - degreeG;
+        for (let k = 0; k < degreeG; k++) f[k + shift] = field.sub(f[k + shift]!, field.mul(factor, g[k]!));
+        f[top] = 0;
+      }
     }
+    flip(degreeF * degreeG);
+    const other = f;
+    f = g;
+    g = other;
+    formalF = degreeG;
+    formalG = degreeF;
   }
 }
 
