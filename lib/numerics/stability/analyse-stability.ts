@@ -11,6 +11,7 @@ import { parseRational } from '../rational';
 import { alongLine, withParameters } from '../restricted-scheme';
 import { amplificationMatrix, isPowerBounded } from '../system-matrix';
 import { exactIntervals } from './exact-stability';
+import { leastLead } from './degenerate-level';
 import { knownRegion, type DirectionBound } from './known-regions';
 import { numericStability } from './numeric-stability';
 import type {
@@ -47,7 +48,7 @@ export interface Growth {
   method: StabilityMethod;
 }
 
-const DEFAULT_BUDGET: WorkBudget = { timeLimitMs: 8000 };
+const DEFAULT_BUDGET: WorkBudget = { timeLimitMs: 20_000 };
 /** Growth beyond this exponent counts as weak: a plain time step refinement dt ~ dx^(4/3) or so holds it. */
 const WEAK_BEYOND = 2;
 /** Values of the second number at which two-parameter regions are cut. */
@@ -173,8 +174,21 @@ const quotient = (text: string) => {
   return Number(num) / Number(den ?? 1);
 };
 
-function assembled(scheme: CanonicalScheme, result: StabilityResult): StabilityAnalysis {
+/** Values without meaning for any scheme, at which a newest level that is always degenerate shows. */
+const GENERIC_VALUES = [0.372, 1.413, 2.718];
+
+/** Whether the step cannot be solved for some wave whatever the parameter is. */
+function isAlwaysDegenerate(scheme: CanonicalScheme): boolean {
+  const numeric = compileScheme(scheme);
+  return GENERIC_VALUES.every((value) => leastLead(numeric, [value]) < 1e-9);
+}
+
+function assembled(scheme: CanonicalScheme, found: StabilityResult): StabilityAnalysis {
   const sides = sidesOf(scheme);
+  const result: StabilityResult =
+    found.verdict === 'unstable for all nonzero values' && isAlwaysDegenerate(scheme)
+      ? { ...found, verdict: 'degenerate newest level', lostAt: null }
+      : found;
   const unstable = result.verdict === 'unstable for all nonzero values';
   const growth = unstable ? growthOf(scheme, sides) : null;
   const weakest = growth?.positive ?? growth?.negative;

@@ -9,7 +9,7 @@ import { type Rational, rational, toNumber } from '../rational';
 import { components } from './critical-values';
 import { crossingCurve } from './crossing-curve';
 import { DOUBLE_ROOT, sideOf, SIMPLE_ROOTS, TWO_LEVEL } from './exact-stability';
-import { decideGap } from './gap-survey';
+import { decideGap, type MultipleRoots } from './gap-survey';
 import { rootsOf, worstWave } from './limit-behaviour';
 import type { EndBehaviour, StabilityOutcome, StableInterval, WorkBudget } from './stability-result';
 import { atParameter, rootCount, sampled, type WavePolynomial, wavePolynomial } from './wave-polynomial';
@@ -36,6 +36,7 @@ class Prover {
   constructor(
     readonly wave: WavePolynomial,
     readonly check: () => void,
+    readonly multipleRoots: MultipleRoots,
   ) {
     const coefficients = sampled(wave);
     const count = 12 * (wave.span + 3);
@@ -61,7 +62,7 @@ class Prover {
     const there = atParameter(this.wave, parameter.num, parameter.den);
     if (!there || there.levels.at(-1)!.length === 0) return false;
     const curve = crossingCurve(there, this.check);
-    return decideGap(there, curve, components(curve, this.check), rational(0n), this.check).stable;
+    return decideGap(there, curve, components(curve, this.check), rational(0n), this.check, this.multipleRoots).stable;
   }
 
   /** Ends of a bracket [stable, unstable], both decided exactly, at most WIDTH_MAX apart. */
@@ -209,12 +210,16 @@ function joined(wave: WavePolynomial, negative: Stretch[], positive: Stretch[]):
 }
 
 /** All stable intervals found by a scan, each end in a rational bracket at most 1e-10 wide, both its ends decided exactly. */
-export function certifiedIntervals(scheme: ScalarScheme, budget: WorkBudget): StabilityOutcome {
+export function certifiedIntervals(
+  scheme: ScalarScheme,
+  budget: WorkBudget,
+  multipleRoots: MultipleRoots = 'growth',
+): StabilityOutcome {
   const wave = wavePolynomial(scheme);
   if (typeof wave === 'string') return { kind: 'unsupported', why: wave };
   if (rootCount(wave) < 1) return { kind: 'unsupported', why: 'The scheme has one time level only.' };
   try {
-    const prover = new Prover(wave, workMeter(budget));
+    const prover = new Prover(wave, workMeter(budget), multipleRoots);
     const side = sideOf(scheme);
     const intervals = joined(wave, side === 'both' ? stretches(prover, -1) : [], stretches(prover, 1));
     const only = intervals[0];

@@ -71,29 +71,34 @@ function minimalCandidate(value: AlgebraicNumber, check: () => void): IntegerPol
   return polynomial;
 }
 
-/** √(a/b) as "2*sqrt(3)/9", for a/b > 0. */
-function squareRootText(square: Rational): string {
-  let [outside, inside] = [1n, square.num * square.den];
+/** √(a/b) = outside · √inside, for a/b > 0, with squares of small primes taken out of the inside. */
+export function squareRootParts(square: Rational): { outside: Rational; inside: bigint } {
+  const { outside, inside } = withoutSquares(square.num * square.den);
+  return { outside: rational(outside, square.den), inside };
+}
+
+function withoutSquares(a: bigint): { outside: bigint; inside: bigint } {
+  let [outside, inside] = [1n, a];
   for (let p = 2n; p * p <= inside && p < 2000n; p++)
     while (inside % (p * p) === 0n) {
       inside /= p * p;
       outside *= p;
     }
-  const factor = rational(outside, square.den);
-  if (inside === 1n) return formatRational(factor);
-  const head = factor.num === 1n ? '' : `${factor.num}*`;
-  return `${head}sqrt(${inside})${factor.den === 1n ? '' : `/${factor.den}`}`;
+  return { outside, inside };
+}
+
+/** √(a/b) as "2*sqrt(3)/9", for a/b > 0. */
+function squareRootText(square: Rational): string {
+  const { outside, inside } = squareRootParts(square);
+  if (inside === 1n) return formatRational(outside);
+  const head = outside.num === 1n ? '' : `${outside.num}*`;
+  return `${head}sqrt(${inside})${outside.den === 1n ? '' : `/${outside.den}`}`;
 }
 
 /** The root (−b ± √(b² − 4ac)) / 2a of a quadratic nearest to a value, as text and number. */
 function quadraticText(core: IntegerPolynomial, near: number): { text: string; value: number } | null {
   const [c, b, a] = [core[0]!, core[1]!, core[2]!];
-  let [inside, outside] = [b * b - 4n * a * c, 1n];
-  for (let p = 2n; p * p <= inside && p < 2000n; p++)
-    while (inside % (p * p) === 0n) {
-      inside /= p * p;
-      outside *= p;
-    }
+  const { outside, inside } = withoutSquares(b * b - 4n * a * c);
   const common = gcdOfIntegers(gcdOfIntegers(b, outside), 2n * a);
   const [constant, factor, den] = [-b / common, outside / common, (2n * a) / common];
   for (const side of [1n, -1n]) {

@@ -12,7 +12,7 @@ import { formatRational, toNumber } from '../rational';
 import { closedForm } from './closed-form';
 import { behaviourAt, worstWave } from './limit-behaviour';
 import { isolatedStableValues } from './isolated-values';
-import { type Gap, surveyGaps, type Survey } from './gap-survey';
+import { type Gap, type MultipleRoots, surveyGaps, type Survey } from './gap-survey';
 import type {
   EndBehaviour,
   InteriorDefect,
@@ -23,6 +23,7 @@ import type {
   WorkBudget,
 } from './stability-result';
 import { rootCount, type WavePolynomial, wavePolynomial } from './wave-polynomial';
+import { wavenumberMultiple } from './wavenumber-multiple';
 import { WorkLimitReached, workMeter } from './work-meter';
 
 const DIGITS = 20;
@@ -36,6 +37,7 @@ interface Context {
   readonly wave: WavePolynomial;
   readonly survey: Survey;
   readonly symbol: string;
+  readonly multipleRoots: MultipleRoots;
   readonly check: () => void;
 }
 
@@ -70,7 +72,7 @@ function endAt(context: Context, value: AlgebraicNumber): End {
   return {
     text: value.toDecimal(DIGITS),
     included: behaviour.stableAtLimit,
-    exact: form.text,
+    exact: form.text ?? wavenumberMultiple(context.wave, value.toNumber()),
     minimalPolynomial: form.minimalPolynomial,
     behaviour,
   };
@@ -80,7 +82,8 @@ function interiorDefects(context: Context, inside: readonly AlgebraicNumber[]): 
   return inside.flatMap((value) => {
     if (isZeroValue(value)) return [];
     const behaviour = endBehaviour(context, value);
-    return behaviour.stableAtLimit
+    const isHarmless = context.multipleRoots === 'allowed' && behaviour.why === DOUBLE_ROOT;
+    return behaviour.stableAtLimit || isHarmless
       ? []
       : (behaviour.theta ?? []).map((theta) => ({ at: value.toDecimal(DIGITS), theta, why: behaviour.why }));
   });
@@ -186,15 +189,21 @@ export const sideOf = (scheme: ScalarScheme): 'both' | 'non-negative' =>
 /**
  * All stable intervals with algebraic ends, isolated stable values and the behaviour at each end.
  * One dimension, one parameter; any number of levels, real or complex coefficients.
+ * @param multipleRoots 'allowed' where the scheme is the characteristic polynomial of a system: ends are then called
+ *        open for multiple unit roots, but gaps are not called unstable for them
  */
-export function exactIntervals(scheme: ScalarScheme, budget: WorkBudget): StabilityOutcome {
+export function exactIntervals(
+  scheme: ScalarScheme,
+  budget: WorkBudget,
+  multipleRoots: MultipleRoots = 'growth',
+): StabilityOutcome {
   const wave = wavePolynomial(scheme);
   if (typeof wave === 'string') return { kind: 'unsupported', why: wave };
   if (rootCount(wave) < 1) return { kind: 'unsupported', why: 'The scheme has one time level only.' };
   const check = workMeter(budget);
   try {
-    const survey = surveyGaps(wave, sideOf(scheme), check);
-    return { kind: 'decided', result: resultOf({ wave, survey, symbol: scheme.parameters[0]!, check }) };
+    const survey = surveyGaps(wave, sideOf(scheme), check, multipleRoots);
+    return { kind: 'decided', result: resultOf({ wave, survey, symbol: scheme.parameters[0]!, multipleRoots, check }) };
   } catch (error) {
     if (error instanceof WorkLimitReached) return { kind: 'work-limit', why: error.message };
     throw error;

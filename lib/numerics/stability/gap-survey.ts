@@ -15,6 +15,12 @@ export type GapVerdict =
   | { readonly stable: true }
   | { readonly stable: false; readonly reason: 'outside' | 'multiple' | 'unsolvable'; readonly theta: number };
 
+/**
+ * What multiple roots on the unit circle mean: 'growth' for one scalar scheme; 'allowed' for the characteristic
+ * polynomial of a system, whose amplification matrix alone tells whether they are semisimple.
+ */
+export type MultipleRoots = 'growth' | 'allowed';
+
 export interface Gap {
   readonly sample: Rational;
   readonly verdict: GapVerdict;
@@ -52,12 +58,14 @@ export function decideGap(
   parts: CurveComponents,
   sample: Rational,
   check: () => void,
+  multipleRoots: MultipleRoots = 'growth',
 ): GapVerdict {
   const decision = decideAt(wave, parts, sample, check);
-  if (!decision.stable) return { stable: false, reason: decision.reason, theta: thetaOf(decision.witness) };
+  if (!decision.stable && (decision.reason === 'outside' || multipleRoots === 'growth'))
+    return { stable: false, reason: decision.reason, theta: thetaOf(decision.witness) };
   const unsolvable = unsolvableWaves(curve, sample, check);
   if (unsolvable.length > 0) return { stable: false, reason: 'unsolvable', theta: unsolvable[0]! };
-  if (rootCount(wave) > 1) {
+  if (rootCount(wave) > 1 && multipleRoots === 'growth') {
     const { multiple } = behaviourAt(wave, parts, AlgebraicNumber.ofRational(sample), check);
     if (multiple.length > 0) return { stable: false, reason: 'multiple', theta: multiple[0]! };
   }
@@ -84,13 +92,18 @@ function samplesOfGaps(values: readonly AlgebraicNumber[]): Rational[] {
  * @param side 'non-negative' where negative values of the parameter mean nothing
  * @param check called between steps; may throw to stop
  */
-export function surveyGaps(wave: WavePolynomial, side: 'both' | 'non-negative', check: () => void): Survey {
+export function surveyGaps(
+  wave: WavePolynomial,
+  side: 'both' | 'non-negative',
+  check: () => void,
+  multipleRoots: MultipleRoots = 'growth',
+): Survey {
   const curve = crossingCurve(wave, check);
   const parts = components(curve, check);
   const values = criticalValues(criticalPolynomials(parts, check), side, check);
   const gaps = samplesOfGaps(values).map((sample, k): Gap => {
     if (k === 0 && side === 'non-negative') return { sample, verdict: { stable: false, reason: 'outside', theta: 0 } };
-    return { sample, verdict: decideGap(wave, curve, parts, sample, check) };
+    return { sample, verdict: decideGap(wave, curve, parts, sample, check, multipleRoots) };
   });
   return { curve, parts, values, gaps, side };
 }

@@ -4,10 +4,7 @@
  */
 import type { ScalarScheme } from '../canonical-scheme';
 import { CONVENTIONS } from '../equation';
-import { constant, mul, variable, type Polynomial } from '../polynomial';
-import { withParameters } from '../restricted-scheme';
-import { isStableAt } from './numeric-intervals';
-import { rationalOf } from './low-wavenumber';
+import { stabilityTest } from './numeric-intervals';
 
 export interface Region {
   /** The condition, in the scheme's own parameters. */
@@ -27,13 +24,6 @@ export interface DirectionBound {
 
 const POINTS = 60;
 const CLEAR = 0.04;
-
-/** The scheme on the ray through a point of parameter space; stable there at s = 1 or not. */
-function onRay(scheme: ScalarScheme, point: readonly number[]): ScalarScheme {
-  const s = variable(1, 0);
-  const by: Polynomial[] = point.map((x) => mul(constant(1, rationalOf(x)), s));
-  return withParameters(scheme, ['s'], by);
-}
 
 const sum = (values: readonly number[]) => values.reduce((a, b) => a + b, 0);
 
@@ -139,11 +129,12 @@ export function knownRegion(
   const highs = names.map((_, k) => reach(k));
   const lows = names.map((name, k) => (nonNegative.includes(name) ? 0 : -reach(k)));
   const points = samplePoints(lows, highs, POINTS);
+  const isStableAt = stabilityTest(scheme);
   let alive = [...candidates];
   for (const point of points) {
     if (alive.length === 0 || isOver()) return null;
     if (point.every((x) => x === 0) || alive.every((c) => Math.abs(c.margin(point)) < CLEAR)) continue;
-    const isStable = isStableAt(onRay(scheme, point), 1);
+    const isStable = isStableAt(point);
     alive = alive.filter((c) => {
       const margin = c.margin(point);
       return Math.abs(margin) < CLEAR || margin > 0 === isStable;

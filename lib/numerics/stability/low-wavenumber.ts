@@ -283,26 +283,31 @@ const UNITS: readonly (readonly [number, number, bigint, bigint])[] = [
   [0, -1, 0n, -1n],
 ];
 
+/** What the series say of the bands next to corner waves; "doubt" only where exact series were not asked for. */
+export type LowVerdict = { kind: 'growing'; wave: LowWave } | { kind: 'none' } | { kind: 'doubt' };
+
 /**
- * A growing band next to a corner wave, or null where all bands decay or are neutral to order 12. What the double
- * series leaves in doubt is decided by the same series in exact arithmetic.
- * @param scalar the exact form of `scheme`
+ * Bands next to theta = 0 and pi, to order 12 in t.
+ * @param scalar the exact form of `scheme`: growth in the double series, and a first coefficient near rounding (weakly
+ *   damped schemes at small values), count only if the exact series say so; null leaves them in doubt
+ * @param values in the order of the scheme's parameters
  */
-export function lowWaveGrowth(scheme: NumericScheme, scalar: ScalarScheme, parameter: number): LowWave | null {
-  const coefficients = coefficientsAt(scheme, [parameter]);
-  const exactValue = rationalOf(parameter);
+export function lowWaveGrowth(scheme: NumericScheme, scalar: ScalarScheme | null, values: readonly number[]): LowVerdict {
+  const coefficients = coefficientsAt(scheme, values);
+  const exactValues = scalar && values.map(rationalOf);
   for (const base of lowWaveBases(scheme.dims))
     for (const direction of RAYS[scheme.dims])
       for (const wave of lowWavesAlong(scheme, coefficients, base, direction)) {
         if (wave.isCertain && wave.coefficient < 0) continue;
         const unit = UNITS.find(([re, im]) => Math.hypot(re - wave.root[0], im - wave.root[1]) < 1e-9);
         if (!unit) continue;
-        const exact = cornerGrowth(scalar, [exactValue], {
+        if (!scalar || !exactValues) return { kind: 'doubt' };
+        const exact = cornerGrowth(scalar, exactValues, {
           shifted: base.map((x) => x !== 0),
           direction: direction.map((x) => rational(x)),
           root: { re: rational(unit[2]), im: rational(unit[3]) },
         });
-        if (exact && exact.sign > 0) return { ...wave, order: exact.order };
+        if (exact && exact.sign > 0) return { kind: 'growing', wave: { ...wave, order: exact.order } };
       }
-  return null;
+  return { kind: 'none' };
 }

@@ -45,10 +45,12 @@ class Probe {
   private suspects: number[][] = [];
   private conservativeValues = 0;
 
+  /** @param valuesAt parameter values of the scheme at one position of the search */
   constructor(
     readonly scheme: NumericScheme,
     readonly scalar: ScalarScheme,
     private readonly isOver: () => boolean,
+    private readonly valuesAt: (position: number) => readonly number[] = (p) => [p],
   ) {
     this.scan = waveGrid(scheme, SCAN_PER_PI[scheme.dims]);
     this.polynomial = complexArray(scheme.degree + 1);
@@ -69,13 +71,13 @@ class Probe {
   }
 
   isUnstableAt(parameter: number, theta: readonly number[]): boolean {
-    const coefficients = coefficientsAt(this.scheme, [parameter]);
+    const coefficients = coefficientsAt(this.scheme, this.valuesAt(parameter));
     return this.excess(coefficients, sizeOf(coefficients), theta) > 0;
   }
 
   /** An unstable wave of a grid, or null. */
   unstableWave(parameter: number, grid: WaveGrid, from = 0): { theta: number[]; index: number } | null {
-    const coefficients = coefficientsAt(this.scheme, [parameter]);
+    const coefficients = coefficientsAt(this.scheme, this.valuesAt(parameter));
     const size = sizeOf(coefficients);
     const { degree } = this.scheme;
     let warm: ComplexArray | undefined;
@@ -98,15 +100,26 @@ class Probe {
     return null;
   }
 
-  isStable(parameter: number): boolean {
+  /** "doubt": stable but for bands next to corner waves that only exact series can judge. */
+  survey(parameter: number): 'stable' | 'unstable' | 'doubt' {
     this.check();
-    if (this.suspects.some((theta) => this.isUnstableAt(parameter, theta))) return false;
-    return this.unstableWave(parameter, this.scan) === null && this.lowGrowth(parameter) === null;
+    if (this.suspects.some((theta) => this.isUnstableAt(parameter, theta))) return 'unstable';
+    if (this.unstableWave(parameter, this.scan)) return 'unstable';
+    if (this.isConservative(parameter)) return 'stable';
+    const { kind } = lowWaveGrowth(this.scheme, null, this.valuesAt(parameter));
+    return kind === 'none' ? 'stable' : 'doubt';
+  }
+
+  isStable(parameter: number): boolean {
+    const first = this.survey(parameter);
+    return first === 'doubt' ? this.lowGrowth(parameter) === null : first === 'stable';
   }
 
   /** Growth in a band next to a corner wave; not asked where every root of every wave keeps its modulus. */
   lowGrowth(parameter: number): LowWave | null {
-    return this.isConservative(parameter) ? null : lowWaveGrowth(this.scheme, this.scalar, parameter);
+    if (this.isConservative(parameter)) return null;
+    const verdict = lowWaveGrowth(this.scheme, this.scalar, this.valuesAt(parameter));
+    return verdict.kind === 'growing' ? verdict.wave : null;
   }
 
   /** A scheme that keeps all moduli at three values of the parameter does so wherever it is stable. */
@@ -119,7 +132,7 @@ class Probe {
 
   private keepsModuli(parameter: number): boolean {
     if (this.conservativeValues === -Infinity) return false;
-    const coefficients = coefficientsAt(this.scheme, [parameter]);
+    const coefficients = coefficientsAt(this.scheme, this.valuesAt(parameter));
     const size = sizeOf(coefficients);
     for (let index = 0; index < this.scan.count; index++) {
       this.scan.polynomial(index, coefficients, this.polynomial);
@@ -187,7 +200,8 @@ function settleEnd(probe: Probe, stable: number, unstable: number): NumericEnd {
     if (!found || !tryWave(found, 1e-7)) break;
     polish();
   }
-  return best;
+  // No wave found outside: the end stands where the scan put it.
+  return best.theta ? best : { ...best, theta: new Array<number>(probe.scheme.dims).fill(0) };
 }
 
 /** A wave between the grid points that is unstable at this value: by climbing on |z| and on closeness of unit roots. */
@@ -232,12 +246,30 @@ function settleLow(probe: Probe, stable: number, unstable: number): NumericEnd |
   return { value, theta: wave.base, low: wave };
 }
 
+/**
+ * Verdicts at ascending values. Doubts come in runs; of each run the ends and the middle are settled exactly, and all
+ * of it only where one of them is unstable.
+ */
+function stableAmong(probe: Probe, values: readonly number[]): boolean[] {
+  const first = values.map((p) => probe.survey(p));
+  const out = first.map((v) => v !== 'unstable');
+  for (let from = 0; from < first.length; from++) {
+    if (first[from] !== 'doubt') continue;
+    let to = from;
+    while (first[to + 1] === 'doubt') to++;
+    const settled = (k: number) => probe.lowGrowth(values[k]!) === null;
+    if (![from, (from + to) >> 1, to].every(settled)) for (let k = from; k <= to; k++) out[k] = settled(k);
+    from = to;
+  }
+  return out;
+}
+
 function scanSide(probe: Probe, side: 1 | -1, intervals: NumericInterval[]): boolean {
   const ladder: number[] = [];
   // Short binary fractions keep the exact series of low waves cheap.
   for (let p = SMALLEST; p < LARGEST; p *= RATIO) ladder.push((side * Math.round(p * 1024)) / 1024);
   const values = [...ladder, ...FAR.map((p) => side * p)];
-  const stable = values.map((p) => probe.isStable(p));
+  const stable = stableAmong(probe, values);
   let start: NumericEnd | null = { value: 0, theta: null, low: null };
   let open = stable[0]!;
   const ends: [NumericEnd | null, NumericEnd | null][] = [];
@@ -315,8 +347,8 @@ export function numericIntervals(
   }
 }
 
-/** Whether no wave grows at one value of the scheme's only parameter, by the grid and the series next to corner waves. */
-export function isStableAt(scalar: ScalarScheme, parameter: number): boolean {
+/** Whether no wave grows at given parameter values, by the grid and the series next to corner waves. */
+export function stabilityTest(scalar: ScalarScheme): (values: readonly number[]) => boolean {
   const numeric = compileScheme(scalar);
-  return new Probe(numeric, scalar, () => false).isStable(parameter);
+  return (values) => new Probe(numeric, scalar, () => false, () => values).isStable(1);
 }
