@@ -208,6 +208,7 @@ export const BOUNDS: readonly BoundCase[] = [
     definition: lines('advection', CENTRAL6, LEAPFROG),
     verdict: 'conditionally stable',
     intervals: [['-0.63052561267833784398', '0.63052561267833784398']],
+    exact: '1/kappa_max',
     closed: false,
   },
   {
@@ -293,6 +294,7 @@ export const BOUNDS: readonly BoundCase[] = [
     definition: lines('advection', CENTRAL6, RK4),
     verdict: 'conditionally stable',
     intervals: [['-1.7833957457466210136', '1.7833957457466210136']],
+    exact: '2*sqrt(2)/kappa_max',
     closed: true,
   },
   {

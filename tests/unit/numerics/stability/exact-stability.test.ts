@@ -116,6 +116,26 @@ describe('pitfalls of stability bounds', () => {
     expect(skipping.note).toMatch(/linear/);
   });
 
+  it('marks a double root on the circle strictly inside the interval', () => {
+    // z² − (2 − 16 p (1 − p) sin²(θ/2)) z + 1: at p = 1/2 and θ = π the roots meet at −1 and part again along the circle.
+    const result = bounds(
+      scalarScheme(
+        [
+          [1, 0, ['1']],
+          [0, -1, ['0', '-4', '4']],
+          [0, 0, ['-2', '8', '-8']],
+          [0, 1, ['0', '-4', '4']],
+          [-1, 0, ['1']],
+        ],
+        { equation: 'wave', timeOrder: 2 },
+      ),
+    );
+    expect(ends(result)).toEqual([['0', '1']]);
+    expect(result.intervals[0]!.interiorDefects).toEqual([
+      { at: '0.5', theta: expect.closeTo(Math.PI, 8), why: expect.stringContaining('double root') },
+    ]);
+  });
+
   it('tells a newest level that cannot be solved for: for all values, at one value, or as a factor that cancels', () => {
     const average = (level: number, sign: string): Row[] => [
       [level, -1, [sign + '1']],
@@ -200,6 +220,25 @@ describe('pitfalls of stability bounds', () => {
     );
     expect(ends(result)).toEqual([['-0.25', '0.25']]);
     expect(result.intervals[0]!.hiExact).toBe('1/4');
+  });
+
+  it('leaves multiple unit roots of a system to its matrix: two uncoupled leapfrogs are as stable as one', () => {
+    // The characteristic polynomial is the square (z² + 2 p i sin θ z − 1)².
+    const pair: Row[] = [
+      [1, 0, ['1']],
+      [0, 1, ['0', '2']],
+      [0, -1, ['0', '-2']],
+      [-1, 0, ['-2', '0', '-2']],
+      [-1, 2, ['0', '0', '1']],
+      [-1, -2, ['0', '0', '1']],
+      [-2, 1, ['0', '-2']],
+      [-2, -1, ['0', '2']],
+      [-3, 0, ['1']],
+    ];
+    expect(bounds(scalarScheme(pair)).intervals).toEqual([]);
+    const outcome = exactIntervals(scalarScheme(pair), { timeLimitMs: 20_000 }, 'allowed');
+    if (outcome.kind !== 'decided') throw new Error(outcome.why);
+    expect(ends(outcome.result)).toEqual([['-1', '1']]);
   });
 
   it('answers within its budget that it needs more time, and says what it cannot do', () => {
