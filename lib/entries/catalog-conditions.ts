@@ -147,19 +147,25 @@ const FIXED: readonly Condition[] = [
   },
 ];
 
+/** The equation without its dimensions, which are a condition of their own. */
+const familyOf = (equation: Equation | null) => equation?.replace(/-[23]d$/, '') ?? null;
+const FAMILY_NAMES: Readonly<Record<string, string>> = { ...EQUATION_NAMES, 'advection-diffusion': 'Adv.–diffusion' };
+
 /** The conditions that make sense for these lines: the equations are those that occur. */
 export function conditionsOf(lines: readonly CatalogLine[]): Condition[] {
-  const present = new Set(lines.map(({ equation }) => equation));
-  const equations = (Object.keys(EQUATION_NAMES) as Equation[]).filter((equation) => present.has(equation));
+  const present = new Set(lines.map(({ equation }) => familyOf(equation)));
+  const families = [...new Set(Object.keys(EQUATION_NAMES).map((equation) => familyOf(equation as Equation)))];
   return [
     {
       key: 'equation',
       title: 'Equation',
-      options: equations.map((value) => ({
-        value,
-        label: EQUATION_NAMES[value],
-        fits: ({ equation }) => equation === value,
-      })),
+      options: families
+        .filter((family) => family !== null && present.has(family))
+        .map((value) => ({
+          value: value ?? '',
+          label: FAMILY_NAMES[value ?? ''] ?? '',
+          fits: ({ equation }) => familyOf(equation) === value,
+        })),
     },
     ...FIXED,
   ];

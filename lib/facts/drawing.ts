@@ -1,15 +1,14 @@
 /** All that a page draws of a definition: its rule, its sketch, its scheme as numbers for the curves. */
 import type { Definition, SchemeDefinition } from '@/lib/entries/definition';
-import type { ScalarScheme } from '@/lib/numerics/canonical-scheme';
 import { type NumericScheme, characteristicOf, compileScheme } from '@/lib/numerics/numeric-scheme';
-import { constant } from '@/lib/numerics/polynomial';
-import { ONE, type Rational, ZERO, toNumber } from '@/lib/numerics/rational';
+import { toNumber } from '@/lib/numerics/rational';
 import { canonicalScheme } from './canonical-scheme';
 import { canonicalStencil } from './canonical-stencil';
 import type { Facts } from './facts';
 import type { FactsSummary } from './facts-summary';
 import { largestStable } from './reading-texts';
 import { ruleLatex } from './rule-latex';
+import { stageScheme } from './stage-scheme';
 import { type SketchModel, schemeSketch, stencilSketch } from './sketch-model';
 
 export interface Drawing {
@@ -20,32 +19,6 @@ export interface Drawing {
   readonly numeric: NumericScheme | null;
   /** Largest stable value of the common parameter; null without end, 0 where there is none. */
   readonly limit: number | null;
-}
-
-/**
- * What one stage of a Runge-Kutta step reads: the table of the whole step would show the reach of all stages
- * together, which no array is indexed by.
- */
-function stageScheme(definition: SchemeDefinition, scheme: ScalarScheme): ScalarScheme {
-  if (definition.form !== 'lines' || definition.time.kind !== 'runge-kutta') return scheme;
-  const one = constant(scheme.parameters.length, ONE);
-  const centre = Array.from({ length: scheme.dims }, () => ZERO);
-  const read = new Map<string, readonly Rational[]>([[centre.map(toNumber).join(), centre]]);
-  for (const [axis, space] of definition.space.entries()) {
-    for (const offset of canonicalStencil(space).stencil?.offsets ?? []) {
-      // A one-dimensional stencil among several dimensions acts along the axis of its place in the list.
-      const whole =
-        offset.length === scheme.dims ? offset : centre.map((zero, k) => (k === axis ? (offset[0] ?? zero) : zero));
-      read.set(whole.map(toNumber).join(), whole);
-    }
-  }
-  return {
-    ...scheme,
-    terms: [
-      { level: ONE, offset: centre, coefficient: one },
-      ...[...read.values()].map((offset) => ({ level: ZERO, offset, coefficient: one })),
-    ],
-  };
 }
 
 function schemeDrawing(definition: SchemeDefinition, facts: Facts | null, summary: FactsSummary | null): Drawing {

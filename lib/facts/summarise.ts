@@ -10,6 +10,7 @@ import { canonicalScheme } from './canonical-scheme';
 import { canonicalStencil } from './canonical-stencil';
 import type { Facts, SchemeFacts, StabilityFacts, StencilFacts, TimeMethodFacts } from './facts';
 import type { FactsSummary } from './facts-summary';
+import { stageScheme } from './stage-scheme';
 
 const SAMPLES = 25;
 const POSITIONS = Array.from({ length: SAMPLES }, (_, k) => (Math.PI * k) / (SAMPLES - 1));
@@ -64,7 +65,8 @@ const alongX = (offset: readonly Rational[]) => offset.slice(1).every(isZero);
 /** Sites on the line through the point in the first direction, and what they are for. */
 function schemeSketch(definition: SchemeDefinition, scheme: CanonicalScheme): Sketch {
   const stages = definition.form === 'lines' && definition.time.kind === 'runge-kutta' ? definition.time.b.length : 0;
-  const terms = scheme.form === 'scalar' ? scheme.terms : scheme.equations.flatMap((e) => e.terms);
+  const terms =
+    scheme.form === 'scalar' ? stageScheme(definition, scheme).terms : scheme.equations.flatMap((e) => e.terms);
   const newest = newestOf(terms);
   const isSolved = scheme.form === 'scalar' && terms.filter((t) => equals(t.level, newest)).length > 1;
   const sites = new Map<string, Sketch['sites'][number]>();

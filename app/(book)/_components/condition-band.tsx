@@ -67,7 +67,11 @@ export function ConditionBand({ conditions, onCondition }: ConditionsProps) {
   );
   return (
     <section className="conditions" aria-label="Conditions">
-      <div className="band">{first.map(column)}</div>
+      <div
+        className={first.some(({ key, options }) => key === 'equation' && options.length > 3) ? 'band many' : 'band'}
+      >
+        {first.map(column)}
+      </div>
       <details className="further" open={further.some(({ options }) => options.some(({ inForce }) => inForce))}>
         <summary>More conditions</summary>
         <div className="band">{further.map(column)}</div>

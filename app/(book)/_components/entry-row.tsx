@@ -52,20 +52,35 @@ export const EntryRow = memo(function EntryRow({ line, chosen, onChoose }: Entry
       </div>
       <Orders line={line} />
       <div>
-        <div className="bd">{summary.parameter !== null && <MathText runs={boundRuns(summary)} />}</div>
+        <div className="bd">
+          {summary.verdict === 'two-parameter region' && 'a region'}
+          {summary.parameter !== null && <MathText runs={boundRuns(summary)} />}
+        </div>
         <StaffGauge summary={summary} />
       </div>
       <Spark curves={summary.curves} />
       <div className="kps">
         <div className="kp">
-          {summary.arrays ?? '–'}
-          <span className="mo"> {summary.arrays === 1 ? 'array' : 'arrays'} · </span>
+          {summary.arrays === null ? (
+            <span className="only-d">–</span>
+          ) : (
+            <>
+              {summary.arrays}
+              <span className="mo"> {summary.arrays === 1 ? 'array' : 'arrays'} · </span>
+            </>
+          )}
           {summary.halo && <small>halo {summary.halo.join(' | ')}</small>}
         </div>
         <span className="mo"> · </span>
         <div className="kp">
-          {summary.operations ?? '–'}
-          <span className="mo"> flops · </span>
+          {summary.operations === null ? (
+            <span className="only-d">–</span>
+          ) : (
+            <>
+              {summary.operations}
+              <span className="mo"> flops · </span>
+            </>
+          )}
           {summary.bytes !== null && <small>{summary.bytes} B</small>}
         </div>
       </div>
