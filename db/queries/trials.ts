@@ -1,5 +1,5 @@
 /** Trials as the queue and the worker move them: waiting, running, and one of the three ends. */
-import { and, asc, eq, inArray, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, inArray, lt, sql } from 'drizzle-orm';
 import type { FindingView, TrialState, TrialView } from '@/lib/trials/trial';
 import type { Database } from '../client';
 import { revisions } from '../schema/revisions';
@@ -46,11 +46,21 @@ export async function findLiveTrial(db: Database, revisionId: string): Promise<s
 }
 
 /** A new trial; workers hear of it when the transaction commits. */
-export async function insertTrial(tx: Database, revisionId: string, queuedById: string): Promise<string> {
-  const [row] = await tx.insert(trials).values({ revisionId, queuedById }).returning({ id: trials.id });
+export async function insertTrial(tx: Database, revisionId: string, queuedById: string, priority = 0): Promise<string> {
+  const [row] = await tx.insert(trials).values({ revisionId, queuedById, priority }).returning({ id: trials.id });
   if (!row) throw new Error('insertTrial: the inserted row did not come back');
   await announce(tx, TRIAL_QUEUED, row.id);
   return row.id;
+}
+
+/** Puts a waiting trial before those of lower priority. */
+export async function raiseTrial(tx: Database, id: string, priority: number): Promise<void> {
+  const raised = await tx
+    .update(trials)
+    .set({ priority })
+    .where(and(eq(trials.id, id), eq(trials.state, 'waiting'), lt(trials.priority, priority)))
+    .returning({ id: trials.id });
+  if (raised.length > 0) await announce(tx, TRIAL_QUEUED, id);
 }
 
 export interface ClaimedTrial {
@@ -148,10 +158,19 @@ export async function releaseTrial(db: Database, run: Run): Promise<void> {
   await announce(db, TRIAL_PROGRESS, run.id);
 }
 
-/** Trials that have not ended, oldest first. */
+/** Trials that have not ended, in the order in which they are taken up. */
 export const listLiveTrials = (db: Database) =>
   db
-    .select({ id: trials.id, revisionId: trials.revisionId, state: trials.state })
+    .select({ id: trials.id, revisionId: trials.revisionId, state: trials.state, priority: trials.priority })
     .from(trials)
     .where(inArray(trials.state, ['waiting', 'running']))
-    .orderBy(asc(trials.queuedAt), asc(trials.id));
+    .orderBy(desc(trials.priority), asc(trials.queuedAt), asc(trials.id));
+
+/**
+ * Puts a job that nobody has taken yet before those of lower priority. The queue's own interface can only delete
+ * and send again, and would then also delete a job that is being taken at this moment.
+ */
+export async function raiseJob(db: Database, queue: string, id: string, priority: number): Promise<void> {
+  await db.execute(sql`update pgboss.job set priority = ${priority}
+    where name = ${queue} and id = ${id} and state < 'active'`);
+}

@@ -1,4 +1,4 @@
-import { index, integer, jsonb, pgEnum, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
+import { index, integer, jsonb, pgEnum, pgTable, smallint, text, unique, uuid } from 'drizzle-orm/pg-core';
 import { FINDING_NAMES, FINDING_OUTCOMES, TRIAL_LANGUAGES, TRIAL_STATES, type TrialView } from '@/lib/trials/trial';
 import { id, moment } from './columns';
 import { people } from './people';
@@ -24,6 +24,8 @@ export const trials = pgTable(
       .notNull()
       .references(() => people.id),
     queuedAt: moment().notNull().defaultNow(),
+    /** Higher is taken up first: what somebody waits for, before what the house tries for itself. */
+    priority: smallint().notNull().default(0),
     startedAt: moment(),
     finishedAt: moment(),
     progress: jsonb().$type<TrialView['progress']>().notNull().default({ done: 0, total: 0, label: 'waiting' }),

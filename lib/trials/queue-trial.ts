@@ -1,10 +1,13 @@
 import 'server-only';
 import { db } from '@/db/client';
 import { insertEvent } from '@/db/queries/house';
-import { findLiveTrial, insertTrial, lockRevisionForTrial } from '@/db/queries/trials';
+import { findLiveTrial, insertTrial, lockRevisionForTrial, raiseTrial } from '@/db/queries/trials';
 import { visibleStates } from '@/lib/entries/visibility';
 import type { Actor } from '@/lib/people/actor';
 import { Refusal } from '@/lib/refusal';
+
+/** Somebody waits for it; the house's own trials have 0. */
+const ASKED_FOR = 10;
 
 export interface QueuedTrial {
   trialId: string;
@@ -28,8 +31,11 @@ export async function queueTrial(actor: Actor, revisionId: string): Promise<Queu
     if (!revision.hasFacts)
       throw new Refusal('invalid', 'This definition has no facts yet, so there is nothing to hold a trial against.');
     const live = await findLiveTrial(tx, revisionId);
-    if (live) return { trialId: live, isNew: false };
-    const trialId = await insertTrial(tx, revisionId, actor.id);
+    if (live) {
+      await raiseTrial(tx, live, ASKED_FOR);
+      return { trialId: live, isNew: false };
+    }
+    const trialId = await insertTrial(tx, revisionId, actor.id, ASKED_FOR);
     await insertEvent(tx, { kind: 'trial.queued', actorId: actor.id, subjectId: revisionId, data: { trialId } });
     return { trialId, isNew: true };
   });

@@ -4,7 +4,7 @@ import type PgBoss from 'pg-boss';
 import { databaseOn } from '@/db/client';
 import { insertEvent } from '@/db/queries/house';
 import { listUnheldTrials, soleSweeper } from '@/db/queries/trial-locks';
-import { giveUpTrial, listLiveTrials } from '@/db/queries/trials';
+import { giveUpTrial, listLiveTrials, raiseJob } from '@/db/queries/trials';
 import { carryOutTrial, type EndedTrial } from './carry-out-trial';
 
 const QUEUE = 'trials';
@@ -41,13 +41,14 @@ export async function serveTrials(
 ): Promise<TrialService> {
   const db = databaseOn(pool);
   await boss.createQueue(QUEUE, { name: QUEUE, policy: 'standard' });
-  const send = (trialId: string, revisionId: string) =>
+  const send = (trialId: string, revisionId: string, priority: number) =>
     boss.send(
       QUEUE,
       { trialId },
       {
         id: trialId,
         singletonKey: revisionId,
+        priority,
         expireInSeconds: EXPIRE_SECONDS,
         retryLimit: RETRIES,
         retryDelay: 1,
@@ -55,14 +56,15 @@ export async function serveTrials(
       },
     );
 
-  async function mend(trialId: string, revisionId: string): Promise<void> {
+  async function mend(trialId: string, revisionId: string, priority: number): Promise<void> {
     const job = await boss.getJobById(QUEUE, trialId);
     switch (job?.state) {
       case undefined:
-        await send(trialId, revisionId);
+        await send(trialId, revisionId, priority);
         return;
       case 'created':
       case 'retry':
+        if (job!.priority < priority) await raiseJob(db, QUEUE, trialId, priority);
         return;
       case 'active':
         // Its worker is gone: nobody holds the trial.
@@ -84,7 +86,7 @@ export async function serveTrials(
       default:
         // The job ended and its trial did not: the worker stopped between the two.
         await boss.deleteJob(QUEUE, trialId);
-        await send(trialId, revisionId);
+        await send(trialId, revisionId, priority);
     }
   }
 
@@ -109,7 +111,7 @@ export async function serveTrials(
             live.map(({ id }) => id),
           ),
         );
-        for (const { id, revisionId } of live) if (unheld.has(id)) await mend(id, revisionId);
+        for (const { id, revisionId, priority } of live) if (unheld.has(id)) await mend(id, revisionId, priority);
       });
       if (done) boss.notifyWorker(workId);
     },

@@ -1,0 +1,1 @@
+ALTER TABLE "trials" ADD COLUMN "priority" smallint DEFAULT 0 NOT NULL;
