@@ -18,10 +18,10 @@ function signalGroup(child, signal) {
   }
 }
 
-function spawnBound(command, args, options) {
+function spawnBound(command, args, { deathSignal = 'KILL', ...options }) {
   if (closed) throw new Error('the launcher is stopping');
   // The kernel ends the child when we die, even of kill -9; its own session keeps the terminal's Ctrl-C from it.
-  const child = spawn('setpriv', ['--pdeathsig', 'KILL', '--', command, ...args], {
+  const child = spawn('setpriv', ['--pdeathsig', deathSignal, '--', command, ...args], {
     cwd: ROOT,
     detached: true,
     ...options,
@@ -54,11 +54,12 @@ function eachLine(stream, write) {
 
 /**
  * Starts a part of the site that runs until it is stopped; its output appears with its name before each line.
- * @param silence lines that tell nobody anything
+ * @param silence     lines that tell nobody anything
+ * @param deathSignal sent when we die; TERM for a part that must end children of its own
  * @returns {{pid: number, ended: Promise<string>, stop: () => Promise<void>}}
  */
-export function startChild(name, command, args, env, silence = /^\s*$/) {
-  const { child, ended } = spawnBound(command, args, { env, stdio: ['ignore', 'pipe', 'pipe'] });
+export function startChild(name, command, args, { env, silence = /^\s*$/, deathSignal }) {
+  const { child, ended } = spawnBound(command, args, { env, deathSignal, stdio: ['ignore', 'pipe', 'pipe'] });
   for (const stream of [child.stdout, child.stderr])
     eachLine(stream, (line) => silence.test(line) || say(`[${name}] ${line}`));
   let over = false;

@@ -35,7 +35,12 @@ async function answers(port, host) {
 export async function startWeb({ env, host, port, production }) {
   const command = production ? 'start' : 'dev';
   const args = ['node_modules/next/dist/bin/next', command, '-H', host, '-p', String(port)];
-  const part = startChild('web', process.execPath, args, env, GREETING);
+  const part = startChild('web', process.execPath, args, {
+    env,
+    silence: GREETING,
+    // The development server works in a child of its own.
+    deathSignal: production ? 'KILL' : 'TERM',
+  });
   let how = null;
   void part.ended.then((text) => (how = text));
   await until(() => how !== null || answers(port, host), 120_000, 100);
@@ -58,5 +63,5 @@ function databaseListens({ DATABASE_URL: address }) {
 /** A worker without a database would only end again: it is started once the database listens. */
 export async function startWorker({ env }) {
   await until(() => databaseListens(env), Infinity, 1_000);
-  return startChild('worker', process.execPath, [...TYPESCRIPT, 'worker.ts'], env);
+  return startChild('worker', process.execPath, [...TYPESCRIPT, 'worker.ts'], { env });
 }
