@@ -144,6 +144,7 @@ export function bivariateGcd(
     const places: number[] = [];
     const images: number[][] = [];
     for (let at = 1; places.length < nodes; at++) {
+      check();
       const left = trimModular(modularAtInner(field, rowsA, at));
       const right = trimModular(modularAtInner(field, rowsB, at));
       if (left.length < a.length || right.length < b.length) continue;
@@ -198,8 +199,8 @@ export function splitSquareFree(a: BivariatePolynomial, check?: () => void): Spl
   const mixed = primitive(transposed(dividedByInner(flipped, outer)));
   const repeated = mixed.length > 1 ? bivariateGcd(mixed, outerDerivative(mixed), check) : [[1n]];
   return {
-    inner: squareFreePart(inner),
-    outer: squareFreePart(outer),
+    inner: squareFreePart(inner, check),
+    outer: squareFreePart(outer, check),
     mixed:
       mixed.length <= 1 ? [[1n]] : repeated.length <= 1 ? mixed : primitive(exactBivariateQuotient(mixed, repeated)!),
   };

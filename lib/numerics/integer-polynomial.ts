@@ -83,16 +83,21 @@ export function pseudoRemainder(a: IntegerPolynomial, b: IntegerPolynomial): Int
   return trimmed(positive);
 }
 
-/** Primitive greatest common divisor by images modulo primes, proved by division. */
-export function gcd(a: IntegerPolynomial, b: IntegerPolynomial): IntegerPolynomial {
+const unhurried = () => undefined;
+
+/**
+ * Primitive greatest common divisor by images modulo primes, proved by division.
+ * @param check called between steps; may throw to stop
+ */
+export function gcd(a: IntegerPolynomial, b: IntegerPolynomial, check: () => void = unhurried): IntegerPolynomial {
   const [f, g] = [primitivePart(a), primitivePart(b)];
   if (f.length === 0) return g;
   if (g.length === 0) return f;
   const head = gcdOfIntegers(leading(f), leading(g));
   let remainder: ChineseRemainder | null = null;
   let size = Infinity;
-  let previous = '';
   for (let k = 0; ; k++) {
+    check();
     const field = primeField(k);
     if (field.reduce(leading(f)) === 0 || field.reduce(leading(g)) === 0) continue;
     const image = modularGcd(
@@ -105,39 +110,40 @@ export function gcd(a: IntegerPolynomial, b: IntegerPolynomial): IntegerPolynomi
     if (image.length < size || !remainder) {
       size = image.length;
       remainder = new ChineseRemainder(size);
-      previous = '';
     }
     const scale = field.reduce(head);
-    remainder.include(
+    const changed = remainder.include(
       field,
       image.map((c) => field.mul(c, scale)),
     );
+    if (changed) continue;
     const candidate = primitivePart(trimmed(remainder.lifted()));
-    const text = candidate.join();
-    if (text === previous && exactQuotient(f, candidate) && exactQuotient(g, candidate)) return candidate;
-    previous = text;
+    if (exactQuotient(f, candidate) && exactQuotient(g, candidate)) return candidate;
   }
 }
 
 /** Primitive polynomial with the same roots, each simple. */
-export function squareFreePart(a: IntegerPolynomial): IntegerPolynomial {
+export function squareFreePart(a: IntegerPolynomial, check?: () => void): IntegerPolynomial {
   const f = primitivePart(a);
   if (f.length <= 2) return f;
-  const common = gcd(f, derivative(f));
+  const common = gcd(f, derivative(f), check);
   return common.length === 1 ? f : primitivePart(exactQuotient(f, common)!);
 }
 
 /** Factors fₖ, square-free and coprime, with a = content · Π fₖᵏ (Yun's algorithm); constant factors are left out. */
-export function squareFreeDecomposition(a: IntegerPolynomial): { factor: IntegerPolynomial; multiplicity: number }[] {
+export function squareFreeDecomposition(
+  a: IntegerPolynomial,
+  check?: () => void,
+): { factor: IntegerPolynomial; multiplicity: number }[] {
   const f = primitivePart(a);
   if (f.length <= 1) return [];
-  const common = gcd(f, derivative(f));
+  const common = gcd(f, derivative(f), check);
   let rest = exactQuotient(f, common)!;
   let slope = exactQuotient(derivative(f), common)!;
   const factors: { factor: IntegerPolynomial; multiplicity: number }[] = [];
   for (let multiplicity = 1; rest.length > 1; multiplicity++) {
     const difference = subtract(slope, derivative(rest));
-    const factor = difference.length === 0 ? primitivePart(rest) : gcd(rest, difference);
+    const factor = difference.length === 0 ? primitivePart(rest) : gcd(rest, difference, check);
     if (factor.length > 1) factors.push({ factor, multiplicity });
     rest = exactQuotient(rest, factor)!;
     slope = difference.length === 0 ? [] : exactQuotient(difference, factor)!;

@@ -107,7 +107,7 @@ export function isolateRealRoots(
   check: () => void = () => undefined,
 ): RootBracket[] {
   if (a.length <= 1) return [];
-  const f = squareFreePart(a);
+  const f = squareFreePart(a, check);
   const within = (lo: bigint, hi: bigint): RootBracket[] =>
     rootsInUnitInterval(primitivePart(carriedToUnit(f, lo, hi)), check).map((root) => ({
       lo: lo * root.den + (hi - lo) * root.lo,

@@ -42,9 +42,10 @@ export function resultant(
     check();
     const field = primeField(k);
     const [rowsA, rowsB] = [modularRows(field, a), modularRows(field, b)];
-    const values = nodes.map((at) =>
-      modularResultant(field, modularAtInner(field, rowsA, at), modularAtInner(field, rowsB, at), m, n),
-    );
+    const values = nodes.map((at, index) => {
+      if (index % 32 === 0) check();
+      return modularResultant(field, modularAtInner(field, rowsA, at), modularAtInner(field, rowsB, at), m, n);
+    });
     unchanged = remainder.include(field, interpolate(field, nodes, values)) ? 0 : unchanged + 1;
     known += Math.log2(field.prime);
   }

@@ -34,12 +34,12 @@ export interface CurveComponents {
 }
 
 /** Adds a polynomial to a coprime basis: only what is new of it. */
-function include(basis: IntegerPolynomial[], addition: IntegerPolynomial): void {
-  for (const { factor } of squareFreeDecomposition(addition)) {
+function include(basis: IntegerPolynomial[], addition: IntegerPolynomial, check: () => void): void {
+  for (const { factor } of squareFreeDecomposition(addition, check)) {
     let rest = factor;
     for (const known of basis) {
       if (rest.length <= 1) break;
-      const common = gcd(rest, known);
+      const common = gcd(rest, known, check);
       if (common.length > 1) rest = primitivePart(exactQuotient(rest, common)!);
     }
     if (rest.length > 1) basis.push(rest);
@@ -52,8 +52,8 @@ export function components(curve: CrossingCurve, check: () => void): CurveCompon
   const parameters: IntegerPolynomial[] = [];
   for (const { polynomial } of curve.factors as readonly CurveFactor[]) {
     const split = splitSquareFree(polynomial, check);
-    include(parameters, split.inner);
-    include(waves, split.outer);
+    include(parameters, split.inner, check);
+    include(waves, split.outer, check);
     let rest = split.mixed;
     for (const known of mixed) {
       if (rest.length <= 1) break;
@@ -68,12 +68,12 @@ export function components(curve: CrossingCurve, check: () => void): CurveCompon
 /** Coprime square-free polynomials in the parameter whose real roots hold every critical value; 0 is always one. */
 export function criticalPolynomials(curve: CurveComponents, check: () => void): IntegerPolynomial[] {
   const basis: IntegerPolynomial[] = [[0n, 1n]];
-  for (const polynomial of curve.parameters) include(basis, polynomial);
+  for (const polynomial of curve.parameters) include(basis, polynomial, check);
   for (const component of curve.mixed) {
     if (curve.variable === 'cosine') {
-      include(basis, atOuter(component, 1n));
-      include(basis, atOuter(component, -1n));
-    } else include(basis, component.at(-1)!);
+      include(basis, atOuter(component, 1n), check);
+      include(basis, atOuter(component, -1n), check);
+    } else include(basis, component.at(-1)!, check);
     for (const wave of curve.waves) {
       const inside = withoutEnds(wave);
       if (inside.length > 1)
@@ -84,12 +84,13 @@ export function criticalPolynomials(curve: CurveComponents, check: () => void): 
             component,
             check,
           ),
+          check,
         );
     }
   }
   curve.mixed.forEach((component, k) => {
-    include(basis, discriminant(component, check));
-    for (const other of curve.mixed.slice(0, k)) include(basis, resultant(component, other, check));
+    include(basis, discriminant(component, check), check);
+    for (const other of curve.mixed.slice(0, k)) include(basis, resultant(component, other, check), check);
   });
   return basis;
 }

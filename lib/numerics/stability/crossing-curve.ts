@@ -200,6 +200,7 @@ function reconstructed(
     const places: number[] = [];
     const columns: number[][] = [];
     for (let at = 1; places.length < outerSize; at++) {
+      check();
       const [w, place, factor] = wavePlace(field, variable, at, waveDegree);
       if (w === 0 || places.includes(place)) continue;
       const levels = atFieldWave(field, wave, w, false);
