@@ -124,7 +124,7 @@ describe('the trial of a leapfrog scheme', () => {
       if (language === 'c')
         return replaceIn(sources, /u\[i \+ 1\] - u\[i - 1\]/, '(u[i + 1] + 0.0 * u[i + 2]) - u[i - 1]');
       if (language === 'fortran')
-        return replaceIn(sources, /u\(i \+ 1\) - u\(i - 1\)/, '(u(i + 1) + 0.0_real64 * u(i + 2)) - u(i - 1)');
+        return replaceIn(sources, /u\(i\+1\) - u\(i-1\)/, '(u(i+1) + 0.0_wp*u(i+2)) - u(i-1)');
       return sources;
     });
     expect(outcomeOf(result, 'guards', 'c')).toBe('failed');
