@@ -1,7 +1,7 @@
 /** What the stability facts mean, in sentences. Every figure in them is computed. */
 import { angleText, waveText } from './angle-text';
 import type { StabilityFacts, StableInterval } from './facts';
-import { decimalText, limitText, symbolText } from './reading-texts';
+import { decimalText, limitText, raised, symbolText } from './reading-texts';
 import { capital } from './readings';
 
 type Method = StabilityFacts['method'];
@@ -25,18 +25,23 @@ function endSentences(interval: StableInterval, symbol: string): string[] {
   const sentences = ends.flatMap(({ at, told }) => {
     if (at === null || told === null || at === '0') return [];
     const advice = told.stableAtLimit ? '' : ' Keep below it.';
-    return [`At ${symbol} = ${at}: ${told.why.replace(/\.$/, '')}.${advice}`];
+    const [theta] = told.theta ?? [];
+    const where = told.theta?.length === 1 && theta !== undefined ? `, decided by ${waveText(Math.abs(theta))}` : '';
+    return [`At ${symbol} = ${at}${where}: ${told.why.replace(/\.$/, '')}.${advice}`];
   });
   // A mirrored interval says the same of both of its ends; the upper one is enough.
   const mirrored = interval.lo !== null && interval.hi !== null && Number(interval.lo) === -Number(interval.hi);
   return mirrored ? sentences.slice(-1) : sentences;
 }
 
+/** "2" → "²", "5/2" → "^(5/2)" */
+const powerText = (power: string) => (power === '1' ? '' : /^\d+$/.test(power) ? raised(power) : `^(${power})`);
+
 function growthSentence({ growth, parameter }: StabilityFacts): string | null {
   const symbol = symbolText(parameter ?? 'lambda');
   const side = growth?.positive ?? growth?.negative;
   if (!side) return null;
-  const law = `the excess over 1 a step goes as ${symbol}^${side.q} for small ${symbol}`;
+  const law = `the excess over 1 a step goes as ${symbol}${powerText(side.q)} for small ${symbol}`;
   if (!side.at) return `${capital(law)}.`;
   const steps = side.at.stepsToTenfold;
   const tenfold =
@@ -88,7 +93,6 @@ export function boundClause(stability: StabilityFacts): string {
   const how = methodText(last?.method ?? stability.method, last?.tolerance);
   const at = last ? endText(last.hi, last.hiExact) : null;
   if (!told || at === null) return how;
-  return told.stableAtLimit
-    ? `reached at ${at}; ${how}`
-    : `${told.why.replace(/\.$/, '')} at |${symbol}| = ${at}: keep below; ${how}`;
+  const why = told.why.split(':')[0]?.replace(/\.$/, '');
+  return told.stableAtLimit ? `reached at ${at}; ${how}` : `${why} at ${symbol} = ${at}: keep below; ${how}`;
 }

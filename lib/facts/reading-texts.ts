@@ -34,7 +34,7 @@ export function decimalText(value: number, figures = 4): string {
   const size = Math.abs(value);
   if (size >= 1e5 || size < 1e-4) {
     const [mantissa = '', exponent = '0'] = value.toExponential(Math.max(0, figures - 2)).split('e');
-    return `${signed(String(Number(mantissa)))} × 10${superscript(String(Number(exponent)))}`;
+    return `${signed(String(Number(mantissa)))} × 10${raised(String(Number(exponent)))}`;
   }
   return signed(String(Number(value.toPrecision(figures))));
 }
@@ -52,7 +52,7 @@ const RAISED: Readonly<Record<string, string>> = {
   '8': '⁸',
   '9': '⁹',
 };
-const superscript = (digits: string) => [...digits].map((digit) => RAISED[digit] ?? digit).join('');
+export const raised = (digits: string) => [...digits].map((digit) => RAISED[digit] ?? digit).join('');
 
 /** A closed form where it is short ("1", "1/2", "√3/2"), else the decimal. */
 export function limitText(value: number, exact: string | null): string {

@@ -10,6 +10,8 @@ import { type Weighted, byPowers, lcm, letter, number, site, sum } from './sum-l
 
 /** A tableau with more stages is a table of its own, not a formula. */
 const TABLEAU_STAGES = 5;
+/** A table with more terms is too long for one line. */
+const TABLE_TERMS = 9;
 
 const isOne = ({ coefficient }: CanonicalTerm) => {
   const [only] = coefficient;
@@ -117,7 +119,10 @@ function multistepLatex(
   const older = weighted('u', alpha, -1).slice(1);
   const slopes = terms.map(([name, beta]) => {
     const members = weighted(name, beta, 1);
-    return members.length === 0 ? '' : ` + \\mathrm{\\Delta} t\\left(${sum(members)}\\right)`;
+    const [only] = members;
+    if (!only) return '';
+    if (members.length === 1) return ` + ${sum([only], '\\mathrm{\\Delta} t')}`;
+    return ` + \\mathrm{\\Delta} t\\left(${sum(members)}\\right)`;
   });
   return `${sum(newest)} = ${sum(older)}${slopes.join('')}`;
 }
@@ -152,9 +157,11 @@ export function ruleLatex(definition: Definition): string[] {
   const lines = ((): (string | null)[] => {
     if (definition.kind === 'stencil') return [stencilLatex(definition)];
     if (definition.kind === 'time-method') return [methodLatex(readTimeMethod(definition.time, '/time', []))];
-    if (definition.form === 'lines')
-      return [semiDiscreteLatex(definition), methodLatex(readTimeMethod(definition.time, '/time', []))];
     const { scheme } = canonicalScheme(definition);
+    const isShort = scheme?.form === 'scalar' && scheme.terms.length <= TABLE_TERMS;
+    // A multistep method on a short stencil is read best as the table that it is.
+    if (definition.form === 'lines' && !(isShort && definition.time.kind === 'multistep'))
+      return [semiDiscreteLatex(definition), methodLatex(readTimeMethod(definition.time, '/time', []))];
     return [scheme?.form === 'scalar' ? tableLatex(scheme) : null];
   })();
   return lines.filter((line) => line !== null);

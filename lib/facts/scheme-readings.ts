@@ -21,6 +21,16 @@ function conditionalText({ dt, dx }: { dt: number; dx: number }): string {
   return below ? `${above || '1'}/${below}` : above;
 }
 
+/** "exact at λ = −1 and 1, 4 at r = 1/6" */
+function specialText({ specialValues }: OrderFacts, symbol: string): string {
+  const byOrder = new Map<string, string[]>();
+  for (const { value, order } of specialValues) {
+    const word = order === null ? 'exact' : String(order);
+    byOrder.set(word, [...(byOrder.get(word) ?? []), signed(value)]);
+  }
+  return [...byOrder].map(([word, values]) => `${word} at ${symbol} = ${values.join(' and ')}`).join(', ');
+}
+
 function orderReadings(order: OrderFacts, parameter: string | null, observed: ObservedOrder | null): Reading[] {
   const seen = observed
     ? `observed ${observed.slope} on ${counted(observed.grids, 'grid')}`
@@ -34,9 +44,7 @@ function orderReadings(order: OrderFacts, parameter: string | null, observed: Ob
     const raised = order.orderAtFixedParameter;
     return [{ term: 'Order', value: raised === null ? 'exact' : String(raised), how }];
   }
-  const special = order.specialValues
-    .map(({ value, order: raised }) => `${raised === null ? 'exact' : raised} at ${symbol} = ${signed(value)}`)
-    .join(', ');
+  const special = specialText(order, symbol);
   const condition =
     order.conditionalTerms.length > 0
       ? `only while ${order.conditionalTerms.map(conditionalText).join(' and ')} → 0`

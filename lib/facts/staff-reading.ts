@@ -1,7 +1,7 @@
 /** The stability facts as the staff of a sheet shows them. */
 import type { StabilityFacts } from './facts';
 import type { FactsSummary } from './facts-summary';
-import { decimalText, largestStable, symbolText } from './reading-texts';
+import { decimalText, largestStable, raised, symbolText } from './reading-texts';
 
 export interface StaffReading {
   readonly symbol: string;
@@ -22,7 +22,11 @@ function spanOf(limit: number | null): number {
 }
 
 /** Growth in a hundred steps, by the modulus of the worst wave. */
-const inHundredSteps = (modulus: number) => `×${decimalText(modulus ** 100, 2)} in 100 steps`;
+function inHundredSteps(modulus: number): string {
+  const decades = 100 * Math.log10(modulus);
+  const factor = decades < 4 ? decimalText(10 ** decades, 2) : `10${raised(String(Math.floor(decades)))}`;
+  return `×${factor} in 100 steps`;
+}
 
 export function staffReading(stability: StabilityFacts, summary: FactsSummary): StaffReading {
   const symbol = symbolText(stability.parameter ?? summary.parameter ?? 'lambda');
