@@ -85,7 +85,9 @@ export function commonFactor(polynomials: readonly Polynomial[], variables: numb
   }
   const powers = commonPowers(nonzero, variables);
   const shared: Polynomial = [{ powers, re: { num: 1n, den: 1n }, im: ZERO }];
-  const shortest = [...nonzero].sort((a, b) => a.length - b.length)[0]!;
-  if (shortest.length > 1 && nonzero.every((a) => exactQuotient(a, shortest) !== null)) return monic(shortest);
+  const degree = (a: Polynomial) => Math.max(...a.map((m) => m.powers.reduce((sum, p) => sum + p, 0)));
+  const candidates = nonzero.filter((a) => a.length > 1).sort((a, b) => degree(a) - degree(b) || a.length - b.length);
+  for (const candidate of candidates.slice(0, 2))
+    if (nonzero.every((a) => exactQuotient(a, candidate) !== null)) return monic(candidate);
   return shared;
 }

@@ -211,8 +211,7 @@ export function analyseTruncation(scheme: CanonicalScheme, rounding = 0): Trunca
       modifiedEquationSecond: added?.second ? textOf(added.second, series.names) : null,
       meaning: null,
       specialValues: canAdd && !isMixed ? specialValues(scalar, series, degree, degree - spaceOrder) : [],
-      reason:
-        degree === null && dims === 1 ? 'no error term was found: the scheme reproduces the solution exactly' : null,
+      reason: reasonBeside(degree, reading, rounding),
     },
     added,
   };
