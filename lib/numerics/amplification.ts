@@ -35,7 +35,10 @@ export function excessOf(
     const modulus = Math.hypot(roots.re[k]!, roots.im[k]!);
     if (modulus <= worst + 1) continue;
     if (!Number.isFinite(modulus)) return Infinity;
-    worst = Math.max(worst, modulus - 1 - (modulus > 0.9 ? rootTolerance(polynomial, roots.re[k]!, roots.im[k]!, size) : 0));
+    worst = Math.max(
+      worst,
+      modulus - 1 - (modulus > 0.9 ? rootTolerance(polynomial, roots.re[k]!, roots.im[k]!, size) : 0),
+    );
   }
   return worst;
 }

@@ -83,9 +83,7 @@ function blownUp(coefficients: readonly ExactSeries[]): ExactSeries[] | null {
     }
     const lowered = 2 - j;
     if (lowered > 0 && sum.slice(0, lowered).some((c) => !isNothing(c))) return null;
-    out.push(
-      Array.from({ length: length - 2 }, (_, n) => (n + lowered >= 0 ? sum[n + lowered]! : gaussian(ZERO))),
-    );
+    out.push(Array.from({ length: length - 2 }, (_, n) => (n + lowered >= 0 ? sum[n + lowered]! : gaussian(ZERO))));
   }
   return out;
 }
@@ -139,10 +137,7 @@ export function cornerGrowth(
 ): { order: number; sign: -1 | 0 | 1 } | null {
   if (scheme.terms.some((t) => t.offset.some((o, d) => corner.shifted[d] && o.den !== 1n))) return null;
   for (const length of [5, 13]) {
-    const series = rootSeries(
-      polynomialSeries(scheme, values, length, corner.direction, corner.shifted),
-      corner.root,
-    );
+    const series = rootSeries(polynomialSeries(scheme, values, length, corner.direction, corner.shifted), corner.root);
     if (!series) return null;
     const modulus = squaredModulus(series);
     const order = modulus.findIndex((c, k) => k > 0 && !isZero(c));

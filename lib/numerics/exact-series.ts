@@ -31,8 +31,7 @@ export function mulSeries(a: ExactSeries, b: ExactSeries): ExactSeries {
   const out = a.map(() => NOTHING);
   for (let i = 0; i < a.length; i++) {
     if (isNothing(a[i]!)) continue;
-    for (let j = 0; i + j < a.length; j++)
-      if (!isNothing(b[j]!)) out[i + j] = addG(out[i + j]!, mulG(a[i]!, b[j]!));
+    for (let j = 0; i + j < a.length; j++) if (!isNothing(b[j]!)) out[i + j] = addG(out[i + j]!, mulG(a[i]!, b[j]!));
   }
   return out;
 }

@@ -44,7 +44,10 @@ export function equationNumbersAt(scheme: NumericScheme, parameters: readonly nu
   const values = new Map(
     Object.entries(scheme.numbers).map(([name, monomials]) => [
       name,
-      monomials.reduce((sum, m) => sum + m.re * m.powers.reduce((product, e, k) => product * parameters[k]! ** e, 1), 0),
+      monomials.reduce(
+        (sum, m) => sum + m.re * m.powers.reduce((product, e, k) => product * parameters[k]! ** e, 1),
+        0,
+      ),
     ]),
   );
   return (name) => values.get(name) ?? 0;

@@ -137,7 +137,11 @@ export function cosSin(angle: number): [number, number] {
 }
 
 /** Polynomial in z, ascending from the oldest level, from coefficients already evaluated. */
-export function polynomialFrom(scheme: NumericScheme, coefficients: ComplexArray, theta: readonly number[]): ComplexArray {
+export function polynomialFrom(
+  scheme: NumericScheme,
+  coefficients: ComplexArray,
+  theta: readonly number[],
+): ComplexArray {
   const out = complexArray(scheme.degree + 1);
   for (let j = 0; j < scheme.terms.length; j++) {
     const term = scheme.terms[j]!;

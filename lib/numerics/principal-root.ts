@@ -97,7 +97,14 @@ function follow(
       // Before the start the roots are those of theta = 0 for all that can be told.
       const at = rootsAt(position);
       const own = nearestTwo(at, 1, 0).index;
-      out.push({ t: position, re: at.re[own]!, im: at.im[own]!, argument: Math.atan2(at.im[own]!, at.re[own]!), roots: at, index: own });
+      out.push({
+        t: position,
+        re: at.re[own]!,
+        im: at.im[own]!,
+        argument: Math.atan2(at.im[own]!, at.re[own]!),
+        roots: at,
+        index: own,
+      });
       continue;
     }
     while (t < position) {

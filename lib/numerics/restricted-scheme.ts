@@ -63,7 +63,11 @@ function summed(terms: readonly CanonicalTerm[]): CanonicalTerm[] {
  * @param shift     0 or 1 per dimension; offsets must be integers where it is 1
  * @returns null where a shifted offset is not an integer
  */
-export function alongLine(scheme: ScalarScheme, direction: readonly bigint[], shift: readonly (0 | 1)[]): ScalarScheme | null {
+export function alongLine(
+  scheme: ScalarScheme,
+  direction: readonly bigint[],
+  shift: readonly (0 | 1)[],
+): ScalarScheme | null {
   const terms: CanonicalTerm[] = [];
   for (const t of scheme.terms) {
     let odd = false;

@@ -89,8 +89,7 @@ function aberthSweep(c: ComplexArray, degree: number, out: ComplexArray): number
 
 function scatter(c: ComplexArray, degree: number, out: ComplexArray): void {
   // Radius between the moduli of the smallest and largest roots: the geometric mean of all.
-  const radius =
-    (Math.hypot(c.re[0]!, c.im[0]!) / Math.hypot(c.re[degree]!, c.im[degree]!)) ** (1 / degree) || 1;
+  const radius = (Math.hypot(c.re[0]!, c.im[0]!) / Math.hypot(c.re[degree]!, c.im[degree]!)) ** (1 / degree) || 1;
   for (let k = 0; k < degree; k++) {
     const angle = (2 * Math.PI * k) / degree + 0.7;
     out.re[k] = radius * (1 + 0.1 * k) * Math.cos(angle);

@@ -39,7 +39,9 @@ export function parseAngle(text: string): number {
   try {
     return toNumber(parseRational(text));
   } catch {
-    throw new RangeError(`parseAngle: '${text}' is not an angle; accepted: a number or a multiple of pi such as 1/4*pi`);
+    throw new RangeError(
+      `parseAngle: '${text}' is not an angle; accepted: a number or a multiple of pi such as 1/4*pi`,
+    );
   }
 }
 
@@ -59,7 +61,9 @@ export function sampleRoots(scheme: CanonicalScheme, at: readonly SampleRequest[
     const values = valuesOf(scheme.parameters, request.parameters);
     const theta = request.theta.map(parseAngle);
     if (theta.length !== scheme.dims)
-      throw new RangeError(`sampleRoots: theta has ${theta.length} components, the scheme has ${scheme.dims} dimensions`);
+      throw new RangeError(
+        `sampleRoots: theta has ${theta.length} components, the scheme has ${scheme.dims} dimensions`,
+      );
     const factors =
       (scheme.form === 'system'
         ? systemEigenvalues(scheme, values, theta, numeric.degree + numeric.stationaryRoots)

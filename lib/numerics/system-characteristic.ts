@@ -109,7 +109,9 @@ function normalised(terms: Laurent, dims: number): Laurent {
 export function systemCharacteristic(system: SystemScheme): { scalar: ScalarScheme; stationaryRoots: number } {
   const size = system.unknowns.length;
   if (system.equations.length !== size)
-    throw new RangeError(`systemCharacteristic: ${size} unknowns need as many equations, not ${system.equations.length}`);
+    throw new RangeError(
+      `systemCharacteristic: ${size} unknowns need as many equations, not ${system.equations.length}`,
+    );
   const matrix = system.equations.map((equation) =>
     Array.from({ length: size }, (_, unknown) => collect(equation.terms.filter((t) => t.unknown === unknown))),
   );

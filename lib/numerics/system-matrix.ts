@@ -58,11 +58,18 @@ export function amplificationMatrix(
 }
 
 /** Nonzero eigenvalues of one step. */
-export function systemEigenvalues(system: SystemScheme, parameters: readonly number[], theta: readonly number[], count: number): ComplexArray | null {
+export function systemEigenvalues(
+  system: SystemScheme,
+  parameters: readonly number[],
+  theta: readonly number[],
+  count: number,
+): ComplexArray | null {
   const matrix = amplificationMatrix(system, parameters, theta);
   if (!matrix) return null;
   const all = eigenvalues(matrix);
-  const order = Array.from(all.re.keys()).sort((a, b) => Math.hypot(all.re[b]!, all.im[b]!) - Math.hypot(all.re[a]!, all.im[a]!));
+  const order = Array.from(all.re.keys()).sort(
+    (a, b) => Math.hypot(all.re[b]!, all.im[b]!) - Math.hypot(all.re[a]!, all.im[a]!),
+  );
   const kept = order.slice(0, count);
   return { re: Float64Array.from(kept, (k) => all.re[k]!), im: Float64Array.from(kept, (k) => all.im[k]!) };
 }

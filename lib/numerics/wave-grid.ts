@@ -134,9 +134,7 @@ export function gridMaxima(
     if (found.length === keep && value <= found[keep - 1]!.value) continue;
     const theta = grid.theta(index);
     // Neighbours of a better point climb to the same maximum.
-    const rival = found.find((f) =>
-      grid.theta(f.index).every((x, d) => Math.abs(x - theta[d]!) < 1.5 * grid.step),
-    );
+    const rival = found.find((f) => grid.theta(f.index).every((x, d) => Math.abs(x - theta[d]!) < 1.5 * grid.step));
     if (rival) {
       if (value <= rival.value) continue;
       Object.assign(rival, { index, value });

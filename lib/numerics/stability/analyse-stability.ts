@@ -10,10 +10,10 @@ import { constant, variable, zero } from '../polynomial';
 import { parseRational } from '../rational';
 import { alongLine, withParameters } from '../restricted-scheme';
 import { amplificationMatrix, isPowerBounded } from '../system-matrix';
-import { exactIntervals } from './exact-stability';
 import { leastLead } from './degenerate-level';
 import { knownRegion, type DirectionBound } from './known-regions';
 import { numericStability } from './numeric-stability';
+import { provenIntervals } from './proven-stability';
 import type {
   EndBehaviour,
   StabilityLoss,
@@ -142,8 +142,18 @@ function oneParameter(scheme: CanonicalScheme, budget: WorkBudget): StabilityOut
   const direction = onlyDirection(scheme);
   if (direction !== null) {
     const unit = Array.from({ length: scheme.dims }, (_, d) => (d === direction ? 1n : 0n));
-    const line = scheme.dims === 1 ? scalar : alongLine(scalar, unit, unit.map(() => 0 as const));
-    const outcome = line ? exactIntervals(line, { ...budget, timeLimitMs: budget.timeLimitMs * 0.6 }) : null;
+    const line =
+      scheme.dims === 1
+        ? scalar
+        : alongLine(
+            scalar,
+            unit,
+            unit.map(() => 0 as const),
+          );
+    const multipleRoots = scheme.form === 'system' ? 'allowed' : 'growth';
+    const outcome = line
+      ? provenIntervals(line, { ...budget, timeLimitMs: budget.timeLimitMs * 0.6 }, multipleRoots)
+      : null;
     if (outcome?.kind === 'decided') {
       const judged = withMatrixBehaviour(scheme, outcome.result);
       return { kind: 'decided', result: sides.length === 1 ? nonNegativePart(judged) : judged };
@@ -163,7 +173,8 @@ const UNDECIDED: StabilityResult = {
 
 function growthOf(scheme: CanonicalScheme, sides: readonly (1 | -1)[]): StabilityAnalysis['growth'] {
   const numeric = compileScheme(scheme);
-  const on = (side: 1 | -1): GrowthAsymptotics | null => (sides.includes(side) ? growthAsymptotics(numeric, side) : null);
+  const on = (side: 1 | -1): GrowthAsymptotics | null =>
+    sides.includes(side) ? growthAsymptotics(numeric, side) : null;
   const positive = on(1);
   const negative = on(-1);
   return positive || negative ? { positive, negative } : null;
@@ -217,7 +228,10 @@ const decided = (outcome: StabilityOutcome): StabilityResult =>
 const mainInterval = (intervals: readonly StableInterval[]) =>
   intervals.find((i) => (i.lo === null || Number(i.lo) <= 0) && (i.hi === null || Number(i.hi) >= 0)) ?? intervals[0];
 
-function singleDirections(scheme: CanonicalScheme, budget: WorkBudget): { listed: StabilityAnalysis['singleDirection']; bounds: DirectionBound[] } {
+function singleDirections(
+  scheme: CanonicalScheme,
+  budget: WorkBudget,
+): { listed: StabilityAnalysis['singleDirection']; bounds: DirectionBound[] } {
   const listed: StabilityAnalysis['singleDirection'] = [];
   const bounds: DirectionBound[] = [];
   scheme.parameters.forEach((name, k) => {
@@ -266,7 +280,9 @@ function equalParameters(scheme: CanonicalScheme, budget: WorkBudget): Stability
     ...analysis,
     singleDirection: listed,
     region: region?.text ?? null,
-    note: [analysis.note, `${common} is the common value of ${scheme.parameters.join(', ')}.`].filter(Boolean).join(' '),
+    note: [analysis.note, `${common} is the common value of ${scheme.parameters.join(', ')}.`]
+      .filter(Boolean)
+      .join(' '),
   };
 }
 
@@ -278,7 +294,10 @@ function twoParameters(scheme: CanonicalScheme, budget: WorkBudget): StabilityAn
   let isComplete = true;
   const cuts = CUTS.flatMap((value) => {
     const cut = withParameters(scheme, [first], [variable(1, 0), constant(1, parseRational(value))]);
-    const outcome = oneParameter(cut, { ...budget, timeLimitMs: Math.min(remaining(budget, started).timeLimitMs, budget.timeLimitMs / 8) });
+    const outcome = oneParameter(cut, {
+      ...budget,
+      timeLimitMs: Math.min(remaining(budget, started).timeLimitMs, budget.timeLimitMs / 8),
+    });
     if (outcome.kind !== 'decided') {
       isComplete = false;
       return [];

@@ -204,8 +204,28 @@ export function lowWaveBases(dims: number): number[][] {
 /** Rays that see both the axes and the diagonals; mirrored ones follow by symmetry of ln|z| in t. */
 export const RAYS: Readonly<Record<1 | 2 | 3, readonly (readonly number[])[]>> = {
   1: [[1]],
-  2: [[1, 1], [1, -1], [1, 0], [0, 1], [2, 1], [1, 2], [2, -1], [1, -2]],
-  3: [[1, 1, 1], [1, 1, -1], [1, -1, 1], [-1, 1, 1], [1, 0, 0], [0, 1, 0], [0, 0, 1], [1, 1, 0], [1, 0, 1], [0, 1, 1]],
+  2: [
+    [1, 1],
+    [1, -1],
+    [1, 0],
+    [0, 1],
+    [2, 1],
+    [1, 2],
+    [2, -1],
+    [1, -2],
+  ],
+  3: [
+    [1, 1, 1],
+    [1, 1, -1],
+    [1, -1, 1],
+    [-1, 1, 1],
+    [1, 0, 0],
+    [0, 1, 0],
+    [0, 0, 1],
+    [1, 1, 0],
+    [1, 0, 1],
+    [0, 1, 1],
+  ],
 };
 
 /** Unit roots at a base with their multiplicity (1 or 2; roots of higher multiplicity are left to the samples). */
@@ -260,7 +280,8 @@ export function lowCoefficient(
   let worst = -Infinity;
   for (const { root, count } of unit) {
     if (Math.hypot(root[0] - wave.root[0], root[1] - wave.root[1]) > 0.1) continue;
-    for (const z of branchSeries(series, root, count === 2)) worst = Math.max(worst, logarithmOfModulus(z).value[wave.order]!);
+    for (const z of branchSeries(series, root, count === 2))
+      worst = Math.max(worst, logarithmOfModulus(z).value[wave.order]!);
   }
   return worst;
 }
@@ -292,7 +313,11 @@ export type LowVerdict = { kind: 'growing'; wave: LowWave } | { kind: 'none' } |
  *   damped schemes at small values), count only if the exact series say so; null leaves them in doubt
  * @param values in the order of the scheme's parameters
  */
-export function lowWaveGrowth(scheme: NumericScheme, scalar: ScalarScheme | null, values: readonly number[]): LowVerdict {
+export function lowWaveGrowth(
+  scheme: NumericScheme,
+  scalar: ScalarScheme | null,
+  values: readonly number[],
+): LowVerdict {
   const coefficients = coefficientsAt(scheme, values);
   const exactValues = scalar && values.map(rationalOf);
   for (const base of lowWaveBases(scheme.dims))

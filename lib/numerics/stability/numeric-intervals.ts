@@ -181,7 +181,7 @@ function settleEnd(probe: Probe, stable: number, unstable: number): NumericEnd {
       }
   };
   const sweep = (grid: WaveGrid) => {
-    for (let from = 0; from < grid.count; ) {
+    for (let from = 0; from < grid.count;) {
       const found = probe.unstableWave(before(best.value, 1e-12), grid, from);
       if (!found) break;
       tryWave(found.theta, 0);
@@ -293,7 +293,12 @@ function isOdd(scheme: NumericScheme): boolean {
   const keyOf = (z: number, offset: readonly number[]) => `${z}:${offset.map((o) => o + 0).join()}`;
   const byKey = new Map(scheme.terms.map((t) => [keyOf(t.z, t.offset), t]));
   return scheme.terms.every((t) => {
-    const image = byKey.get(keyOf(t.z, t.offset.map((o) => (o === 0 ? 0 : -o))));
+    const image = byKey.get(
+      keyOf(
+        t.z,
+        t.offset.map((o) => (o === 0 ? 0 : -o)),
+      ),
+    );
     if (!image || image.monomials.length !== t.monomials.length) return false;
     return t.monomials.every((m, k) => {
       const other = image.monomials[k]!;
@@ -350,5 +355,11 @@ export function numericIntervals(
 /** Whether no wave grows at given parameter values, by the grid and the series next to corner waves. */
 export function stabilityTest(scalar: ScalarScheme): (values: readonly number[]) => boolean {
   const numeric = compileScheme(scalar);
-  return (values) => new Probe(numeric, scalar, () => false, () => values).isStable(1);
+  return (values) =>
+    new Probe(
+      numeric,
+      scalar,
+      () => false,
+      () => values,
+    ).isStable(1);
 }

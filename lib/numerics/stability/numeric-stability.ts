@@ -18,10 +18,27 @@ import type { EndBehaviour, StabilityLoss, StabilityOutcome, StableInterval, Wor
 const TOLERANCE = 1e-9;
 const LINES: Readonly<Record<1 | 2 | 3, readonly (readonly bigint[])[]>> = {
   1: [[1n]],
-  2: [[1n, 1n], [1n, -1n], [1n, 0n], [0n, 1n], [1n, 2n], [2n, 1n], [1n, -2n], [2n, -1n]],
+  2: [
+    [1n, 1n],
+    [1n, -1n],
+    [1n, 0n],
+    [0n, 1n],
+    [1n, 2n],
+    [2n, 1n],
+    [1n, -2n],
+    [2n, -1n],
+  ],
   3: [
-    [1n, 1n, 1n], [1n, 1n, -1n], [1n, -1n, 1n], [-1n, 1n, 1n], [1n, 0n, 0n], [0n, 1n, 0n], [0n, 0n, 1n],
-    [1n, 1n, 0n], [1n, 0n, 1n], [0n, 1n, 1n],
+    [1n, 1n, 1n],
+    [1n, 1n, -1n],
+    [1n, -1n, 1n],
+    [-1n, 1n, 1n],
+    [1n, 0n, 0n],
+    [0n, 1n, 0n],
+    [0n, 0n, 1n],
+    [1n, 1n, 0n],
+    [1n, 0n, 1n],
+    [0n, 1n, 1n],
   ],
 };
 
@@ -41,7 +58,10 @@ const isNear = (x: number) => Math.abs(x) < 1e-5;
 const wrapped = (x: number) => x - 2 * Math.PI * Math.round(x / (2 * Math.PI));
 
 /** Lines shift·pi + t·direction that pass through a wave, simplest first. */
-function linesThrough(theta: readonly number[], ray: readonly number[] | null): { direction: readonly bigint[]; shift: (0 | 1)[] }[] {
+function linesThrough(
+  theta: readonly number[],
+  ray: readonly number[] | null,
+): { direction: readonly bigint[]; shift: (0 | 1)[] }[] {
   const dims = theta.length as 1 | 2 | 3;
   const out: { direction: readonly bigint[]; shift: (0 | 1)[] }[] = [];
   for (const direction of LINES[dims]) {
@@ -85,12 +105,28 @@ class LineEnds {
     if (known) return known;
     const line = alongLine(this.scalar, direction, shift);
     const equation = ON_A_LINE[this.scalar.equation] ?? this.scalar.equation;
-    const outcome = line ? exactIntervals({ ...line, equation }, { ...this.budget, timeLimitMs: this.budget.timeLimitMs / 4 }) : null;
+    const outcome = line
+      ? exactIntervals({ ...line, equation }, { ...this.budget, timeLimitMs: this.budget.timeLimitMs / 4 })
+      : null;
     const ends =
       outcome?.kind === 'decided'
         ? outcome.result.intervals.flatMap((i) => [
-            ...(i.lo === null ? [] : [{ value: Number(i.lo), end: { text: i.lo, exact: i.loExact, minimalPolynomial: i.loMinimalPolynomial ?? null } }]),
-            ...(i.hi === null ? [] : [{ value: Number(i.hi), end: { text: i.hi, exact: i.hiExact, minimalPolynomial: i.hiMinimalPolynomial ?? null } }]),
+            ...(i.lo === null
+              ? []
+              : [
+                  {
+                    value: Number(i.lo),
+                    end: { text: i.lo, exact: i.loExact, minimalPolynomial: i.loMinimalPolynomial ?? null },
+                  },
+                ]),
+            ...(i.hi === null
+              ? []
+              : [
+                  {
+                    value: Number(i.hi),
+                    end: { text: i.hi, exact: i.hiExact, minimalPolynomial: i.hiMinimalPolynomial ?? null },
+                  },
+                ]),
           ])
         : [];
     this.known.set(key, ends);
@@ -143,7 +179,9 @@ export function lossOutside(numeric: NumericScheme, ends: readonly number[]): St
   const nearest = ends.filter((x) => x !== 0).sort((a, b) => Math.abs(a) - Math.abs(b) || b - a)[0];
   const parameter = nearest === undefined ? 0.4 : nearest * 1.01;
   const { modulus, theta } = spectralRadius(numeric, [parameter]);
-  return Number.isFinite(modulus) && modulus > 1 ? { parameter, theta: theta.map((x) => Math.abs(wrapped(x))), modulus } : null;
+  return Number.isFinite(modulus) && modulus > 1
+    ? { parameter, theta: theta.map((x) => Math.abs(wrapped(x))), modulus }
+    : null;
 }
 
 /**
@@ -182,7 +220,9 @@ export function numericStability(
     };
   });
   const everywhere =
-    intervals.length === 1 && intervals[0]!.hi === null && (sides.includes(-1) ? intervals[0]!.lo === null : intervals[0]!.lo === '0');
+    intervals.length === 1 &&
+    intervals[0]!.hi === null &&
+    (sides.includes(-1) ? intervals[0]!.lo === null : intervals[0]!.lo === '0');
   const ends = search.intervals.flatMap(({ lo, hi }) => [lo, hi].filter((e) => e !== null).map((e) => e.value));
   return {
     kind: 'decided',
