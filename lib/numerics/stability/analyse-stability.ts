@@ -202,8 +202,8 @@ function assembled(scheme: CanonicalScheme, found: StabilityResult): StabilityAn
       : found;
   const unstable = result.verdict === 'unstable for all nonzero values';
   const growth = unstable ? growthOf(scheme, sides) : null;
-  const weakest = growth?.positive ?? growth?.negative;
-  const isWeak = weakest != null && quotient(weakest.q) > WEAK_BEYOND;
+  const weakest = growth?.positive ?? growth?.negative ?? null;
+  const isWeak = weakest !== null && quotient(weakest.q) > WEAK_BEYOND;
   return {
     kind: 'one-parameter',
     parameter: scheme.parameters[0] ?? null,
