@@ -1,6 +1,7 @@
 import { spawn, type ChildProcess } from 'node:child_process';
 import path from 'node:path';
 import { eq, sql } from 'drizzle-orm';
+import pg from 'pg';
 import { afterEach, describe, expect, it } from 'vitest';
 import { findTrialFor } from '@/db/queries/latest-trial';
 import { holdTrial, listUnheldTrials } from '@/db/queries/trial-locks';
@@ -16,11 +17,11 @@ import { useTestDatabase } from '@/tests/support/test-database';
 
 const ROOT = path.resolve(import.meta.dirname, '..', '..');
 /** A trial takes two seconds of processor time; a machine that runs other things may need many times that. */
-const LONG_MS = 300_000;
+const LONG_MS = 600_000;
 
 const { db, pool } = useTestDatabase();
 
-async function until<T>(what: () => Promise<T | null | undefined | false>, withinMs = 120_000): Promise<T> {
+async function until<T>(what: () => Promise<T | null | undefined | false>, withinMs = 280_000): Promise<T> {
   const end = Date.now() + withinMs;
   for (;;) {
     const found = await what();
@@ -254,6 +255,35 @@ describe('workers', () => {
     expect(worker.exitCode).toBe(0);
     const trial = await stateOf(trialId);
     expect(trial).toMatchObject({ state: 'waiting', startedAt: null });
+  });
+});
+
+describe('a worker whose database goes away', () => {
+  it('goes on when it is back, and completes the trial it was in', { timeout: LONG_MS }, async () => {
+    const author = await aPerson('contributor');
+    const revision = await aDraft(author);
+    const { trialId } = await queueTrial(author, revision.id);
+    const worker = startWorker();
+    await inState(trialId, 'running');
+    const { rows } = await pool.query<{ name: string }>('select current_database() as name');
+    const name = rows[0]!.name;
+    // From another database of the cluster, since nobody may be connected to this one for a while.
+    const outside = new pg.Client({
+      connectionString: Object.assign(new URL(process.env.DATABASE_URL!), { pathname: '/postgres' }).href,
+    });
+    await outside.connect();
+    try {
+      await outside.query(`alter database ${name} allow_connections false`);
+      await outside.query('select pg_terminate_backend(pid) from pg_stat_activity where datname = $1', [name]);
+      await new Promise((resolve) => setTimeout(resolve, 6_000));
+    } finally {
+      await outside.query(`alter database ${name} allow_connections true`);
+      await outside.end();
+    }
+    await inState(trialId, 'passed');
+    expect(worker.exitCode).toBeNull();
+    expect(worker.signalCode).toBeNull();
+    expect(await finishedEvents(trialId)).toHaveLength(1);
   });
 });
 
