@@ -1,7 +1,10 @@
 /** The stable range of a scheme as a kernel states and checks it. */
 import type { SchemeFacts } from '@/lib/facts/facts';
+import type { RationalFunction } from '@/lib/numerics/rational-function';
 import { parseRational, toNumber, type Rational } from '@/lib/numerics/rational';
+import { coefficientSource } from './coefficient';
 import { parameterName } from './kernel-plan';
+import { regionInequalities, type Inequality } from './region';
 
 /** One end of a stable interval. */
 export interface BoundEnd {
@@ -24,8 +27,13 @@ export type Bound =
   | { readonly kind: 'pieces'; readonly name: string; readonly pieces: readonly BoundPiece[] }
   | { readonly kind: 'always' }
   | { readonly kind: 'never'; readonly sentence: string }
-  /** Several parameters: stated, not checked. */
-  | { readonly kind: 'region'; readonly text: string }
+  /** Several parameters; `inequalities` is null where the region has no closed form that could be checked. */
+  | {
+      readonly kind: 'region';
+      readonly text: string;
+      readonly symbols: readonly string[];
+      readonly inequalities: readonly Inequality[] | null;
+    }
   | { readonly kind: 'unknown'; readonly sentence: string };
 
 function asRational(text: string | null): Rational | null {
@@ -56,14 +64,20 @@ function endOf(
   return { value, decimal: withPoint(String(value)), text, included: included ?? true, why };
 }
 
-/** The verdict of the facts as pieces to check, in ascending order. */
-export function boundOf(facts: SchemeFacts): Bound {
+/**
+ * The verdict of the facts as pieces to check, in ascending order.
+ * @param symbols parameters of the scheme
+ */
+export function boundOf(facts: SchemeFacts, symbols: readonly string[]): Bound {
   const { stability } = facts;
   if (stability.kind === 'two-parameter')
-    return { kind: 'region', text: stability.region ?? 'see the stability map on the sheet' };
+    return {
+      kind: 'region',
+      text: stability.region?.replaceAll('lambda', 'lam') ?? 'stable region: see the map on the sheet',
+      symbols: symbols.map(parameterName),
+      inequalities: stability.region === null ? null : regionInequalities(stability.region, symbols),
+    };
   switch (stability.verdict) {
-    case 'unconditionally stable':
-      return { kind: 'always' };
     case 'unstable for all nonzero values':
       return { kind: 'never', sentence: 'UNSTABLE for every nonzero value of the parameter: do not march with it.' };
     case 'weakly unstable for all nonzero values':
@@ -88,25 +102,28 @@ export function boundOf(facts: SchemeFacts): Bound {
     );
     if (end && !inside && end.value !== 0) pieces.push({ lo: end, hi: end });
   }
+  const everywhere = pieces.every((p) => !p.lo && !p.hi);
+  if (everywhere && (pieces.length > 0 || stability.verdict === 'unconditionally stable')) return { kind: 'always' };
   if (pieces.length === 0) return { kind: 'unknown', sentence: 'No stable range is known.' };
-  if (pieces.length === 1 && !pieces[0]!.lo && !pieces[0]!.hi) return { kind: 'always' };
   pieces.sort((a, b) => (a.lo?.value ?? -Infinity) - (b.lo?.value ?? -Infinity));
   return { kind: 'pieces', name: parameterName(stability.parameter ?? 'lambda'), pieces };
 }
 
+/** Long closed forms give way to their decimals. */
+const shortly = ({ text }: BoundEnd) => (text.length > 22 ? text.replace(/^.* = /, '') : text);
+
 function pieceText(name: string, { lo, hi }: BoundPiece): string {
+  const keep = hi && !hi.included ? '; keep below' : '';
   if (lo && hi) {
-    if (lo.value === hi.value) return `${name} = ${hi.text}`;
-    if (lo.value === -hi.value)
-      return `|${name}| <= ${hi.text}${hi.included ? '' : `; keep below ${hi.text.replace(/ =.*/, '')}`}`;
-    const keep = hi.included ? '' : `; keep below ${hi.text.replace(/ =.*/, '')}`;
-    return `${lo.text} <= ${name} <= ${hi.text}${keep}`;
+    if (lo.value === hi.value) return `${name} = ${shortly(hi)}`;
+    if (lo.value === -hi.value) return `|${name}| <= ${shortly(hi)}${keep}`;
+    return `${shortly(lo)} <= ${name} <= ${shortly(hi)}${keep}`;
   }
-  if (hi) return `${name} <= ${hi.text}`;
-  return lo ? `${name} >= ${lo.text}` : `every ${name}`;
+  if (hi) return `${name} <= ${shortly(hi)}${keep}`;
+  return lo ? `every ${name} >= ${shortly(lo)}` : `every ${name}`;
 }
 
-/** "|lam| <= 1; keep below 1": the words of the first line. */
+/** "|lam| <= 1; keep below": the words of the first line. */
 export function boundText(bound: Bound): string {
   switch (bound.kind) {
     case 'pieces':
@@ -128,7 +145,7 @@ export function advisedText(bound: Bound): string | null {
   const piece = [...bound.pieces].reverse().find((p) => p.lo?.value !== p.hi?.value);
   if (!piece) return null;
   const end = piece.hi && piece.hi.value > 0 ? piece.hi : piece.lo;
-  if (!end) return null;
+  if (!end || end.value === 0) return null;
   const work = 0.9 * Math.abs(end.value);
   const unit = 10 ** (Math.floor(Math.log10(work)) - 2);
   const cut = Number((Math.floor(work / unit + 1e-9) * unit).toPrecision(3));
@@ -144,13 +161,27 @@ export function advisedText(bound: Bound): string | null {
 /** Ends of the pieces as a condition, in a language's own words; null where nothing is to be checked. */
 export function boundCondition(
   bound: Bound,
-  words: { readonly and: string; readonly or: string; readonly literal: (decimal: string) => string },
+  words: {
+    readonly and: string;
+    readonly or: string;
+    readonly decimal: (text: string) => string;
+    readonly literal: (value: Rational) => string;
+  },
 ): string | null {
+  if (bound.kind === 'region')
+    return (
+      bound.inequalities
+        ?.map(({ left, right }) => {
+          const side = (value: RationalFunction) => coefficientSource(value, bound.symbols, words.literal);
+          return `${side(left)} <= ${side(right)}`;
+        })
+        .join(` ${words.and} `) ?? null
+    );
   if (bound.kind !== 'pieces') return null;
   const parts = bound.pieces.map(({ lo, hi }) => {
     const ends = [
-      ...(lo ? [`${bound.name} >= ${words.literal(lo.decimal)}`] : []),
-      ...(hi ? [`${bound.name} <= ${words.literal(hi.decimal)}`] : []),
+      ...(lo ? [`${bound.name} >= ${words.decimal(lo.decimal)}`] : []),
+      ...(hi ? [`${bound.name} <= ${words.decimal(hi.decimal)}`] : []),
     ];
     const both = ends.join(` ${words.and} `);
     return ends.length > 1 && bound.pieces.length > 1 ? `(${both})` : both;

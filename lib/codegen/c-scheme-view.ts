@@ -224,7 +224,7 @@ export class CSchemeView {
 
   view(): View {
     const { plan, prefix, bound } = this.context;
-    const condition = boundCondition(bound, { and: '&&', or: '||', literal: (d) => (d.startsWith('-') ? `${d}` : d) });
+    const condition = boundCondition(bound, { and: '&&', or: '||', decimal: (text) => text, literal: C.literal });
     const refused = [
       ...this.symbols.map((name) => `!isfinite(${name})`),
       ...(plan.divisor ? [`!(fabs(${coefficientSource(plan.divisor, this.symbols, C.literal)}) > 0.0)`] : []),

@@ -223,8 +223,8 @@ export class FortranSchemeView {
   view(): View {
     const { plan, prefix, bound } = this.context;
     const rotating = plan.shape === 'table';
-    const literal = (decimal: string) => (decimal.startsWith('-') ? `(${decimal}_wp)` : `${decimal}_wp`);
-    const condition = boundCondition(bound, { and: '.and.', or: '.or.', literal });
+    const decimal = (text: string) => (text.startsWith('-') ? `(${text}_wp)` : `${text}_wp`);
+    const condition = boundCondition(bound, { and: '.and.', or: '.or.', decimal, literal: FORTRAN.literal });
     const refused = [
       ...this.symbols.map((name) => `.not. ieee_is_finite(${name})`),
       ...(plan.divisor

@@ -42,7 +42,16 @@ export const fileEnd = (input: KernelInput, language: KernelLanguage): string[] 
   ...entry('Generator', `release ${GENERATOR_RELEASE}. Generated; change the entry, not this file.`),
 ];
 
-const orderText = (order: number | null) => (order === null ? 'exact or undefined' : String(order));
+function orderLines({ facts, plan }: SchemeContext): string[] {
+  const { pT, pX, orderAtFixedParameter } = facts.order;
+  const names = plan.parameters.map((p) => p.name).join(', ');
+  const parts = [
+    ...(pT === null ? [] : [`${pT} in time`]),
+    ...(pX === null ? [] : [`${pX} in space`]),
+    ...(orderAtFixedParameter === null || names === '' ? [] : [`${orderAtFixedParameter} at fixed ${names}`]),
+  ];
+  return entry('Order', parts.length > 0 ? `${parts.join(', ')}.` : 'see the sheet.');
+}
 
 /** A formula with levels and points: u[n-1,i+1]. */
 function formulaDialect(levelOf: ReadonlyMap<string, string>): Dialect {
@@ -91,6 +100,18 @@ function formulaLines({ plan }: SchemeContext): string[] {
   ];
 }
 
+/** Terms of the truncation error that grow as dx alone goes to 0. */
+function conditionLines({ facts }: SchemeContext): string[] {
+  const worst = facts.order.conditionalTerms[0];
+  if (!worst) return [];
+  const factor = (name: string, power: number) => (power === 1 ? name : `${name}^${power}`);
+  const ratio =
+    worst.dx < 0
+      ? `${factor('dt', worst.dt)}/${factor('dx', -worst.dx)}`
+      : `${factor('dx', worst.dx)}/${factor('dt', -worst.dt)}`;
+  return entry('', `Consistent only while ${ratio} goes to 0 with the grid.`);
+}
+
 function stabilityLines({ bound, plan }: SchemeContext): string[] {
   const advised = advisedText(bound);
   const parameters = plan.parameters.map((p) => p.name).join(', ');
@@ -106,10 +127,10 @@ function stabilityLines({ bound, plan }: SchemeContext): string[] {
     case 'always':
       return entry('Stable', `for every value of ${parameters || 'the parameters'}.`);
     case 'region':
-      return entry(
-        'Stable',
-        `${boundText(bound)}. check() refuses numbers that are not finite only: keep to this region yourself.`,
-      );
+      return [
+        ...entry('Stable', `for ${boundText(bound)}.`),
+        ...(bound.inequalities ? [] : entry('', 'No closed form: check refuses numbers that are not finite only.')),
+      ];
     case 'never':
       return ['*'.repeat(WIDTH), ...entry('STABILITY', bound.sentence), '*'.repeat(WIDTH)];
     case 'unknown':
@@ -131,7 +152,7 @@ function arraysLines(context: SchemeContext): string[] {
         'Storage',
         plan.inPlace
           ? `the oldest level is read only at the point being written and is overwritten in place: ${plan.arrays} arrays.`
-          : `${levelsOf(plan)} kept level${levelsOf(plan) === 1 ? '' : 's'} and one array for the new level; rotate the arrays after each step. Least number of arrays by the facts: ${facts.storage.arraysInPlace}.`,
+          : `${levelsOf(plan)} kept level${levelsOf(plan) === 1 ? '' : 's'} and one array for the new level; rotate the arrays after each step.${facts.storage.arraysInPlace < plan.arrays ? ` The facts know of ${facts.storage.arraysInPlace} array${facts.storage.arraysInPlace === 1 ? '' : 's'}, swept in one direction; this kernel does not use that.` : ''}`,
       ),
     );
   } else
@@ -174,10 +195,9 @@ export function schemeHeader(context: SchemeContext, language: KernelLanguage, c
     ...entry('Entry', `${input.callNumber}, revision ${input.revision}: ${input.title} (double precision).`),
     ...(words ? entry('Equation', `${words.equation}; ${words.numbers.join(', ')}.`) : []),
     ...formulaLines(context),
-    ...entry(
-      'Order',
-      `${orderText(facts.order.pT)} in time, ${orderText(facts.order.pX)} in space, ${orderText(facts.order.orderAtFixedParameter)} at fixed ${plan.parameters.map((p) => p.name).join(', ') || 'numbers'}.`,
-    ),
+    ...orderLines(context),
+    ...conditionLines(context),
+    ...(facts.order.meaning ? entry('Error', facts.order.meaning.replaceAll('lambda', 'lam')) : []),
     ...stabilityLines(context),
     ...arraysLines(context),
     ...entry('Boundary', fill),

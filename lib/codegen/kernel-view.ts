@@ -114,11 +114,21 @@ function printable(input: KernelInput, options: KernelOptions): Planned<Printabl
     if (planned.kind === 'none') return planned;
     return {
       kind: 'plan',
-      plan: printableScheme({ input, facts, options, plan: planned.plan, bound: boundOf(facts), prefix }),
+      plan: printableScheme({
+        input,
+        facts,
+        options,
+        plan: planned.plan,
+        bound: boundOf(
+          facts,
+          planned.plan.parameters.map((p) => p.symbol),
+        ),
+        prefix,
+      }),
     };
   }
   if (definition.kind === 'stencil' && facts.kind === 'stencil') {
-    if (!facts.consistent) return none('The weights do not approximate this derivative.');
+    if (!facts.consistent && !facts.nominal) return none('The weights do not approximate this derivative.');
     const planned = planStencil(definition);
     if (planned.kind === 'none') return planned;
     return { kind: 'plan', plan: printableStencil({ input, facts, options, plan: planned.plan, prefix }) };

@@ -140,7 +140,7 @@ export class PythonSchemeView {
 
   view(): View {
     const { plan, bound } = this.context;
-    const condition = boundCondition(bound, { and: 'and', or: 'or', literal: (d) => d });
+    const condition = boundCondition(bound, { and: 'and', or: 'or', decimal: (text) => text, literal: PYTHON.literal });
     const refused = [
       ...this.symbols.map((name) => ({
         condition: `not math.isfinite(${name})`,
@@ -172,7 +172,7 @@ export class PythonSchemeView {
         ? [
             {
               outside: `not (${condition})`,
-              message: `f"${bound.kind === 'pieces' ? `${bound.name} = {${bound.name}}` : ''} is outside the stable range ${boundText(bound)}"`,
+              message: `f"${this.symbols.map((name) => `${name} = {${name}}`).join(', ')} is outside the stable range ${boundText(bound)}"`,
             },
           ]
         : [],

@@ -26,8 +26,11 @@ export const minPoints = (plan: SchemePlan) => Math.max(1, ...plan.halo);
 /** Index of the oldest kept level among the arrays. */
 export const oldestOf = (plan: TablePlan) => plan.arrays - plan.keptLevels;
 
+/** Whether the check compares the parameters with a bound. */
+const isChecked = (bound: Bound) => bound.kind === 'pieces' || (bound.kind === 'region' && bound.inequalities !== null);
+
 export const boundWords = (bound: Bound) =>
-  bound.kind === 'pieces' ? `not within ${boundText(bound)}` : 'never returned: no bound is checked';
+  isChecked(bound) ? `not within ${boundText(bound)}` : 'never returned: no bound is checked';
 
 export const levelWords = (age: number) => (age === 0 ? 'level n' : `level n-${age}`);
 

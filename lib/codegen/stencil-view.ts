@@ -179,7 +179,7 @@ export function stencilHeader(context: StencilContext, language: KernelLanguage)
       'Units',
       plan.derivative === 0
         ? 'd in the unit of u.'
-        : `d in the unit of u over that of h to the power ${plan.derivative}.`,
+        : `d in the unit of u over that of h${plan.derivative > 1 ? ` to the power ${plan.derivative}` : ''}.`,
     ),
     ...entry('Calling', CALLING[language](prefix, usesSpacing(plan) ? ', h' : '')),
     ...fileEnd(input, language),

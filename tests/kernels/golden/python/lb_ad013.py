@@ -1,0 +1,207 @@
+# AD 013 r2   |lam| <= 0.723627   halo 1|1, periodic fill included
+# levelbook:adams-bashforth-3-central-2/2/python/double,periodic:20d737a143a8bbbe630d3896f2f17f00d96e449af1de02b8edfde77391431e2d
+#
+# Entry       AD 013, revision 2: Adams-Bashforth 3, central 2 (double precision).
+# Equation    u_t + c u_x = 0; lam = c dt/dx.
+# Formula     u[n+1,i] = u[n,i] - a1*(u[n,i+1] - u[n,i-1]) + b1*(u[n-1,i+1] - u[n-1,i-1]) -
+#             c1*(u[n-2,i+1] - u[n-2,i-1])
+#             with a1 = (23/24)*lam, b1 = (2/3)*lam, c1 = (5/24)*lam
+# Order       3 in time, 2 in space, 2 at fixed lam.
+# Error       At lam = 13/36 the leading error term adds dispersion: short waves lag behind;
+#             the next one adds fourth-order diffusion: short waves are damped.
+# Stable      for |lam| <= 0.723627.
+#             Advised working value: |lam| <= 0.651 (nine tenths of the bound).
+# Arrays      4 of n + 2 doubles, contiguous; ghost cells: 1 before the first point, 1 after
+#             the last.
+#             u: level n
+#             u1: level n-1
+#             u2: level n-2
+#             w: level n+1 out
+# Storage     3 kept levels and one array for the new level; rotate the arrays after each
+#             step.
+# Work        9 operations and 40 bytes a point and step by the facts.
+# Boundary    periodic: fill_halo copies the ghost cells.
+# Start-up    start makes the 3 kept levels from the initial level, to the order of the
+#             scheme.
+# Units       u in any unit; time and space enter through the dimensionless numbers only.
+# Calling     levels = [numpy.zeros(length(n)) for _ in range(4)]
+#             start(levels, lam)
+#             levels = run(nsteps, levels, lam)   result in levels[-1][1:1 + n]
+#             Bad arguments raise ValueError. Step checks shapes when it is made, not at every call.
+#             The first array is the spare one.
+# Bitwise     C, Fortran and Python agree bit for bit when the compiled ones are built with
+#             -ffp-contract=off. A library built with -Ofast in the same process flushes
+#             subnormal numbers here too.
+# Cautions    Von Neumann analysis holds for constant coefficients on periodic or infinite
+#             domains; with boundaries, variable coefficients or nonlinear terms it is
+#             necessary but not always sufficient.
+#             A passed trial is evidence for this kernel, not for the code that calls it.
+#             Where results bear on safety, verification and validation under the applicable
+#             codes and by licensed practice remain with the user.
+# References  A reference, Journal 1 (1970) 1-2.
+# Licence     office internal.
+# Generator   release 1.0.0. Generated; change the entry, not this file.
+#
+import math
+
+import numpy as np
+
+HALO_LEFT = 1  # ghost cells before the first point
+HALO_RIGHT = 1  # ghost cells after the last point
+MIN_POINTS = 1
+LEVELS = 3  # time levels kept between steps
+ARRAYS = 4  # arrays of length(n) doubles
+WHOLE = 200_000  # up to here a sweep takes the array whole; beyond, in chunks that stay in cache
+CHUNK = 16_384
+
+
+def length(n):
+    """Doubles in every array: n points and their ghost cells."""
+    return n + HALO_LEFT + HALO_RIGHT
+
+
+def check(n, lam):
+    """Raises ValueError where n or a parameter cannot be used; O(1)."""
+    if n < MIN_POINTS:
+        raise ValueError(f"n = {n} is too small; accepted: n >= {MIN_POINTS}")
+    if not math.isfinite(lam):
+        raise ValueError(f"lam = {lam} is not a finite number")
+    if not (lam >= -0.7236272269866327 and lam <= 0.7236272269866327):
+        raise ValueError(f"lam = {lam} is outside the stable range |lam| <= 0.723627")
+
+
+def check_state(u):
+    """Raises ValueError where a point of u is not a finite number; O(n), so not part of a step."""
+    if not np.isfinite(u[HALO_LEFT : u.size - HALO_RIGHT]).all():
+        raise ValueError("the state holds a NaN or an infinite value")
+
+
+def fill_halo(u):
+    """Ghost cells of a periodic row."""
+    u[0] = u[-2]
+    u[-1] = u[1]
+
+
+def _points(arrays, count=ARRAYS):
+    """Number of points of `count` distinct contiguous float64 arrays of one length."""
+    if len(arrays) != count:
+        raise ValueError(f"{len(arrays)} arrays given; accepted: {count}")
+    for k, a in enumerate(arrays):
+        if not isinstance(a, np.ndarray) or a.dtype != np.float64 or a.ndim != 1 or not a.flags.c_contiguous:
+            raise ValueError("accepted: contiguous one-dimensional float64 arrays")
+        if a.shape != arrays[0].shape:
+            raise ValueError(f"shapes differ: {a.shape} and {arrays[0].shape}")
+        if any(np.may_share_memory(a, b) for b in arrays[:k]):
+            raise ValueError("the arrays overlap in memory; accepted: distinct arrays")
+    n = arrays[0].size - HALO_LEFT - HALO_RIGHT
+    if n < MIN_POINTS:
+        raise ValueError(f"n = {n} is too small; accepted: n >= {MIN_POINTS}")
+    return n
+
+
+def _part(a, start, stop, offset):
+    """View of points start ... stop - 1, shifted by offset."""
+    return a[HALO_LEFT + start + offset : HALO_LEFT + stop + offset]
+
+
+class Step:
+    """One step of the scheme on prepared views; nothing is allocated when it is called.
+
+    levels: arrays of length(n), the oldest first; rotated by every call, the newest last.
+    u: level n
+    u1: level n-1
+    u2: level n-2
+    w: level n+1 out
+    Fill the ghost cells of levels[-1] before the call.
+    """
+
+    def __init__(self, levels, lam):
+        self.levels = list(levels)
+        self.n = n = _points(self.levels)
+        self.lam = lam = float(lam)
+        self.a1 = (23.0/24.0)*lam
+        self.b1 = (2.0/3.0)*lam
+        self.c1 = (5.0/24.0)*lam
+        size = n if n <= WHOLE else CHUNK
+        parts = [(a, min(a + size, n)) for a in range(0, n, size)]
+        s = np.empty(size)
+        self._turn = 0
+        self._turns = []
+        for _ in range(ARRAYS):
+            w, u2, u1, u = self.levels
+            self._turns.append(
+                [
+                    (
+                        _part(w, a, b, 0),
+                        _part(u, a, b, 0),
+                        _part(u, a, b, 1),
+                        _part(u, a, b, -1),
+                        _part(u1, a, b, 1),
+                        _part(u1, a, b, -1),
+                        _part(u2, a, b, 1),
+                        _part(u2, a, b, -1),
+                        s[: b - a],
+                    )
+                    for a, b in parts
+                ]
+            )
+            self.levels.append(self.levels.pop(0))
+
+    def __call__(self):
+        for w, u, u_p1, u_m1, u1_p1, u1_m1, u2_p1, u2_m1, s in self._turns[self._turn]:
+            np.subtract(u_p1, u_m1, out=w)
+            np.multiply(self.a1, w, out=w)
+            np.subtract(u, w, out=w)
+            np.subtract(u1_p1, u1_m1, out=s)
+            np.multiply(self.b1, s, out=s)
+            np.add(w, s, out=w)
+            np.subtract(u2_p1, u2_m1, out=s)
+            np.multiply(self.c1, s, out=s)
+            np.subtract(w, s, out=w)
+        self._turn = (self._turn + 1) % ARRAYS
+        self.levels.append(self.levels.pop(0))
+
+
+def start(levels, lam):
+    """Makes the missing levels in place.
+
+    Makes 2 further levels by the Taylor series in time with 3 terms (a
+    Runge-Kutta step of 3 stages), with differences of order 2 in space.
+    In: the initial level in the oldest kept array. Out: all kept levels, the oldest first.
+    """
+    n = _points(levels)
+    check(n, lam)
+    work = np.empty_like(levels[0])
+    s1 = 0.5*lam
+
+    def at(a, offset):
+        return _part(a, 0, n, offset)
+
+    for k in range(2, ARRAYS):
+        u = levels[k - 1]
+        fill_halo(u)
+        y = u
+        for m in range(3, 0, -1):
+            w = levels[k] if m % 2 == 1 else work
+            c = 1.0 / m
+            at(w, 0)[:] = at(u, 0) - c*(s1*(at(y, 1) - at(y, -1)))
+            fill_halo(w)
+            y = w
+
+
+def run(nsteps, levels, lam):
+    """Marches nsteps steps and returns the arrays, the newest level last.
+
+    The first array is spare; then come the kept levels, the oldest first.
+    They are rotated: on return the last is the newest.
+    """
+    step = Step(levels, lam)
+    check(step.n, lam)
+    if nsteps < 0:
+        raise ValueError(f"nsteps = {nsteps}; accepted: nsteps >= 0")
+    fill_halo(step.levels[-2])
+    fill_halo(step.levels[-3])
+    for _ in range(nsteps):
+        fill_halo(step.levels[-1])
+        step()
+    return step.levels
