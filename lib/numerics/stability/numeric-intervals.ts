@@ -6,11 +6,12 @@
  * closeness of unit roots) is unstable before it, and series settle the bands next to theta = 0 and pi.
  */
 import type { ScalarScheme } from '../canonical-scheme';
-import { coefficientsAt, compileScheme, polynomialFrom, type NumericScheme } from '../numeric-scheme';
-import { complexArray, polynomialRoots, rootTolerance, type ComplexArray } from '../roots';
-import { excessOf, isClearlyInside, linearExcess, sizeOf, unitRootSeparation } from '../amplification';
-import { climb, gridMaxima, neighbours, waveGrid, type WaveGrid } from '../wave-grid';
-import { lowCoefficient, lowWaveGrowth, type LowWave } from './low-wavenumber';
+import { coefficientsAt, compileScheme, type NumericScheme } from '../numeric-scheme';
+import type { ComplexArray } from '../roots';
+import { excessOf, sizeOf, unitRootSeparation } from '../amplification';
+import { climb, gridMaxima, neighbours, type WaveGrid } from '../wave-grid';
+import { lowCoefficient, type LowWave } from './low-wavenumber';
+import { SearchStopped, WaveProbe } from './wave-probe';
 
 export interface NumericEnd {
   readonly value: number;
@@ -26,9 +27,6 @@ export interface NumericInterval {
 }
 export type NumericSearch = { kind: 'found'; intervals: NumericInterval[]; isolated: number[] } | { kind: 'stopped' };
 
-/** Points per pi of the scan, and of the grids that must be clear before an end stands. */
-const SCAN_PER_PI: Readonly<Record<1 | 2 | 3, number>> = { 1: 96, 2: 18, 3: 8 };
-const FINE_PER_PI: Readonly<Record<1 | 2 | 3, number>> = { 1: 720, 2: 48, 3: 16 };
 const SMALLEST = 0.004;
 const LARGEST = 60;
 const RATIO = 1.2;
@@ -36,117 +34,6 @@ const FAR = [1e3, 1e5];
 
 /** Values at which exact shifts and other isolated stable points are looked for. */
 const ISOLATED_CANDIDATES = [1, 2, 3, 4, 1 / 2, 1 / 3, 2 / 3, 1 / 4, 3 / 2, 3 / 4];
-
-class Probe {
-  readonly scan: WaveGrid;
-  private fine: WaveGrid | null = null;
-  private readonly polynomial: ComplexArray;
-  /** Waves that were unstable before are tried first: outside the bound they answer at once. */
-  private suspects: number[][] = [];
-  private conservativeValues = 0;
-
-  /** @param valuesAt parameter values of the scheme at one position of the search */
-  constructor(
-    readonly scheme: NumericScheme,
-    readonly scalar: ScalarScheme,
-    private readonly isOver: () => boolean,
-    private readonly valuesAt: (position: number) => readonly number[] = (p) => [p],
-  ) {
-    this.scan = waveGrid(scheme, SCAN_PER_PI[scheme.dims]);
-    this.polynomial = complexArray(scheme.degree + 1);
-  }
-
-  get fineGrid(): WaveGrid {
-    this.fine ??= waveGrid(this.scheme, FINE_PER_PI[this.scheme.dims]);
-    return this.fine;
-  }
-
-  check(): void {
-    if (this.isOver()) throw new SearchStopped();
-  }
-
-  excess(coefficients: ComplexArray, size: number, theta: readonly number[]): number {
-    const polynomial = polynomialFrom(this.scheme, coefficients, theta);
-    return excessOf(polynomial, polynomialRoots(polynomial), size);
-  }
-
-  isUnstableAt(parameter: number, theta: readonly number[]): boolean {
-    const coefficients = coefficientsAt(this.scheme, this.valuesAt(parameter));
-    return this.excess(coefficients, sizeOf(coefficients), theta) > 0;
-  }
-
-  /** An unstable wave of a grid, or null. */
-  unstableWave(parameter: number, grid: WaveGrid, from = 0): { theta: number[]; index: number } | null {
-    const coefficients = coefficientsAt(this.scheme, this.valuesAt(parameter));
-    const size = sizeOf(coefficients);
-    const { degree } = this.scheme;
-    let warm: ComplexArray | undefined;
-    for (let index = from; index < grid.count; index++) {
-      if ((index & 1023) === 1023) this.check();
-      grid.polynomial(index, coefficients, this.polynomial);
-      let excess: number;
-      if (degree === 1) excess = linearExcess(this.polynomial, size);
-      else if (degree === 2 && isClearlyInside(this.polynomial)) continue;
-      else {
-        warm = polynomialRoots(this.polynomial, warm);
-        excess = excessOf(this.polynomial, warm, size);
-      }
-      if (excess > 0) {
-        const theta = grid.theta(index);
-        this.suspects = [theta, ...this.suspects.slice(0, 5)];
-        return { theta, index };
-      }
-    }
-    return null;
-  }
-
-  /** "doubt": stable but for bands next to corner waves that only exact series can judge. */
-  survey(parameter: number): 'stable' | 'unstable' | 'doubt' {
-    this.check();
-    if (this.suspects.some((theta) => this.isUnstableAt(parameter, theta))) return 'unstable';
-    if (this.unstableWave(parameter, this.scan)) return 'unstable';
-    if (this.isConservative(parameter)) return 'stable';
-    const { kind } = lowWaveGrowth(this.scheme, null, this.valuesAt(parameter));
-    return kind === 'none' ? 'stable' : 'doubt';
-  }
-
-  isStable(parameter: number): boolean {
-    const first = this.survey(parameter);
-    return first === 'doubt' ? this.lowGrowth(parameter) === null : first === 'stable';
-  }
-
-  /** Growth in a band next to a corner wave; not asked where every root of every wave keeps its modulus. */
-  lowGrowth(parameter: number): LowWave | null {
-    if (this.isConservative(parameter)) return null;
-    const verdict = lowWaveGrowth(this.scheme, this.scalar, this.valuesAt(parameter));
-    return verdict.kind === 'growing' ? verdict.wave : null;
-  }
-
-  /** A scheme that keeps all moduli at three values of the parameter does so wherever it is stable. */
-  private isConservative(parameter: number): boolean {
-    if (this.conservativeValues >= 3) return true;
-    const isSo = this.keepsModuli(parameter);
-    this.conservativeValues = isSo ? this.conservativeValues + 1 : -Infinity;
-    return isSo;
-  }
-
-  private keepsModuli(parameter: number): boolean {
-    if (this.conservativeValues === -Infinity) return false;
-    const coefficients = coefficientsAt(this.scheme, this.valuesAt(parameter));
-    const size = sizeOf(coefficients);
-    for (let index = 0; index < this.scan.count; index++) {
-      this.scan.polynomial(index, coefficients, this.polynomial);
-      const roots = polynomialRoots(this.polynomial);
-      for (let k = 0; k < roots.re.length; k++) {
-        const deficit = 1 - Math.hypot(roots.re[k]!, roots.im[k]!);
-        if (!(deficit <= 4 * rootTolerance(this.polynomial, roots.re[k]!, roots.im[k]!, size))) return false;
-      }
-    }
-    return true;
-  }
-}
-
-class SearchStopped extends Error {}
 
 /** The unstable side of the boundary at one wave, between a stable and an unstable value, to the last bits. */
 function boundaryAt(isUnstable: (parameter: number) => boolean, stable: number, unstable: number): number {
@@ -161,7 +48,7 @@ function boundaryAt(isUnstable: (parameter: number) => boolean, stable: number, 
 }
 
 /** Drives an end from `unstable` towards `stable` until no wave is unstable before it. */
-function settleEnd(probe: Probe, stable: number, unstable: number): NumericEnd {
+function settleEnd(probe: WaveProbe, stable: number, unstable: number): NumericEnd {
   let best: NumericEnd = { value: unstable, theta: null, low: null };
   const inwards = Math.sign(stable - unstable);
   const before = (value: number, relative: number) => value + inwards * relative * Math.max(Math.abs(value), 1e-3);
@@ -205,7 +92,7 @@ function settleEnd(probe: Probe, stable: number, unstable: number): NumericEnd {
 }
 
 /** A wave between the grid points that is unstable at this value: by climbing on |z| and on closeness of unit roots. */
-function climbForUnstable(probe: Probe, parameter: number): number[] | null {
+function climbForUnstable(probe: WaveProbe, parameter: number): number[] | null {
   const coefficients = coefficientsAt(probe.scheme, [parameter]);
   const size = sizeOf(coefficients);
   const excess = (polynomial: ComplexArray, roots: ComplexArray) => excessOf(polynomial, roots, size);
@@ -222,7 +109,7 @@ function climbForUnstable(probe: Probe, parameter: number): number[] | null {
 }
 
 /** The end set by the bands next to corner waves, minimised over the direction of the ray. */
-function settleLow(probe: Probe, stable: number, unstable: number): NumericEnd | null {
+function settleLow(probe: WaveProbe, stable: number, unstable: number): NumericEnd | null {
   const { scheme } = probe;
   const first = probe.lowGrowth(unstable + (stable - unstable) * 1e-12);
   if (!first) return null;
@@ -250,7 +137,7 @@ function settleLow(probe: Probe, stable: number, unstable: number): NumericEnd |
  * Verdicts at ascending values. Doubts come in runs; of each run the ends and the middle are settled exactly, and all
  * of it only where one of them is unstable.
  */
-function stableAmong(probe: Probe, values: readonly number[]): boolean[] {
+function stableAmong(probe: WaveProbe, values: readonly number[]): boolean[] {
   const first = values.map((p) => probe.survey(p));
   const out = first.map((v) => v !== 'unstable');
   for (let from = 0; from < first.length; from++) {
@@ -264,7 +151,7 @@ function stableAmong(probe: Probe, values: readonly number[]): boolean[] {
   return out;
 }
 
-function scanSide(probe: Probe, side: 1 | -1, intervals: NumericInterval[]): boolean {
+function scanSide(probe: WaveProbe, side: 1 | -1, intervals: NumericInterval[]): boolean {
   const ladder: number[] = [];
   // Short binary fractions keep the exact series of low waves cheap.
   for (let p = SMALLEST; p < LARGEST; p *= RATIO) ladder.push((side * Math.round(p * 1024)) / 1024);
@@ -323,7 +210,7 @@ export function numericIntervals(
   sides: readonly (1 | -1)[],
   isOver: () => boolean,
 ): NumericSearch {
-  const probe = new Probe(scheme, scalar, isOver);
+  const probe = new WaveProbe(scheme, scalar, isOver);
   try {
     let intervals: NumericInterval[] = [];
     const mirrored = sides.length === 2 && isOdd(scheme);
@@ -356,7 +243,7 @@ export function numericIntervals(
 export function stabilityTest(scalar: ScalarScheme): (values: readonly number[]) => boolean {
   const numeric = compileScheme(scalar);
   return (values) =>
-    new Probe(
+    new WaveProbe(
       numeric,
       scalar,
       () => false,
