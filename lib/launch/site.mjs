@@ -48,8 +48,10 @@ export async function startWeb({ env, host, port, production }) {
   return part;
 }
 
-function databaseListens({ DATABASE_URL: address }) {
+/** Whether a server listens there; one that is reached by a socket file is taken to. */
+export function databaseListens(address) {
   const { hostname, port } = new URL(address);
+  if (hostname === '') return true;
   return new Promise((resolve) => {
     const socket = net.connect({ host: hostname, port: Number(port || 5432), timeout: 3_000 });
     const answer = (is) => () => {
@@ -62,6 +64,6 @@ function databaseListens({ DATABASE_URL: address }) {
 
 /** A worker without a database would only end again: it is started once the database listens. */
 export async function startWorker({ env }) {
-  await until(() => databaseListens(env), Infinity, 1_000);
+  await until(() => databaseListens(env.DATABASE_URL), Infinity, 1_000);
   return startChild('worker', process.execPath, [...TYPESCRIPT, 'worker.ts'], { env });
 }

@@ -13,8 +13,8 @@ import { startCluster } from './postgres.mjs';
 import { DATA, writePrivately } from './places.mjs';
 import { livingProcess } from './processes.mjs';
 import { say, seconds, step } from './say.mjs';
-import { chooseAddress, readEnvFile, settingsFor } from './settings.mjs';
-import { prepareDatabase, startWeb, startWorker } from './site.mjs';
+import { chooseAddress, givenDatabase, readEnvFile, settingsFor } from './settings.mjs';
+import { databaseListens, prepareDatabase, startWeb, startWorker } from './site.mjs';
 import { ensureSystemPackages } from './system-packages.mjs';
 
 const LOCK = 'start';
@@ -74,7 +74,11 @@ async function keep(name, start) {
 
 /** Our own server, unless DATABASE_URL names another. */
 async function databaseUrl() {
-  if (process.env.DATABASE_URL) return process.env.DATABASE_URL;
+  const given = givenDatabase();
+  if (given) {
+    if (await databaseListens(given)) return given;
+    throw new Error(`no PostgreSQL answers at ${new URL(given).host}, which DATABASE_URL names.`);
+  }
   let cluster = null;
   await step('database server', () =>
     keep('database server', async () => {

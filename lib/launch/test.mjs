@@ -71,14 +71,16 @@ async function browser() {
   emptyDatabase('browser');
   const host = '127.0.0.1';
   const port = await freePort(3100, host);
-  const env = settingsFor({ databaseUrl: url('browser'), port, demo: true, production: true });
+  const address = `http://${host}:${port}`;
+  const settings = settingsFor({ databaseUrl: url('browser'), port, demo: true, production: true });
+  const env = { ...settings, NEXTAUTH_URL: address };
   await prepareDatabase(env);
   const web = await keepForNow(await startWeb({ env, host, port, production: true }));
   const worker = await keepForNow(await startWorker({ env }));
   const report = freshReport('browser');
   const status = await node(['node_modules/@playwright/test/cli.js', 'test', '--reporter=list,json'], {
     ...process.env,
-    LEVELBOOK_URL: `http://${host}:${port}`,
+    LEVELBOOK_URL: address,
     DATABASE_URL: url('browser'),
     PLAYWRIGHT_JSON_OUTPUT_NAME: report,
   });
