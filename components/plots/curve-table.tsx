@@ -22,7 +22,11 @@ const PARTS = [
 ];
 
 /** Four decimals; a last bit that differs between machines must not turn 0 into −0. */
-const fixedText = (value: number) => value.toFixed(4).replace(/^-(?=0\.0000$)/, '').replace('-', '−');
+const fixedText = (value: number) =>
+  value
+    .toFixed(4)
+    .replace(/^-(?=0\.0000$)/, '')
+    .replace('-', '−');
 
 /** The numbers of a plot as a table, at every sixteenth of π. */
 export function CurveTable({ data }: { data: ThetaPlotData }) {

@@ -6,6 +6,8 @@ export interface RefinementSeries {
   readonly grids: readonly number[];
   readonly errors: readonly number[];
   readonly slope: number;
+  /** What `grids` counts, where it is not points. */
+  readonly unit?: string;
 }
 
 const powerOfTen = (exponent: number) =>
@@ -35,7 +37,8 @@ export function RefinementPlot({ series }: { series: RefinementSeries }) {
     SIZE.left + 20 + ((Math.log2(points) - first) / (last - first)) * (SIZE.right - SIZE.left - 40);
   const yOf = (log: number) => SIZE.bottom - ((log - low) / (high - low)) * (SIZE.bottom - SIZE.top);
   const middle = drawable[Math.floor(drawable.length / 2)]!;
-  const spoken = drawable.map(({ points, error }) => `${points} points ${error.toExponential(1)}`).join(', ');
+  const unit = series.unit ?? 'points';
+  const spoken = drawable.map(({ points, error }) => `${points} ${unit} ${error.toExponential(1)}`).join(', ');
 
   return (
     <svg
@@ -43,7 +46,7 @@ export function RefinementPlot({ series }: { series: RefinementSeries }) {
       viewBox={`0 0 ${SIZE.width} ${SIZE.height}`}
       style={{ maxWidth: SIZE.width * 1.1 }}
       role="img"
-      aria-label={`Largest error against points: ${spoken}; slope ${series.slope.toFixed(2)}`}
+      aria-label={`Largest error against ${unit}: ${spoken}; slope ${series.slope.toFixed(2)}`}
     >
       {Array.from({ length: Math.floor((high - low) / step) + 1 }, (_, k) => low + k * step).map((exponent) => (
         <g key={exponent}>
@@ -76,7 +79,7 @@ export function RefinementPlot({ series }: { series: RefinementSeries }) {
         Largest error, {series.name}
       </text>
       <text x={SIZE.right} y={SIZE.height - 3} className="p-x" textAnchor="end">
-        points
+        {unit}
       </text>
     </svg>
   );

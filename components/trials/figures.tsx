@@ -5,6 +5,7 @@ const POWER_OF_TEN = /(\d(?:\.\d+)?)e([+-]?)0*(\d+)/gi;
 /** Signs as the book sets them: ≥, ≤, ±, the long minus. */
 const signs = (text: string) =>
   text
+    .replace(/(^|[\s;,])x ?(?=\d)/g, '$1× ')
     .replace(/>=/g, '≥')
     .replace(/<=/g, '≤')
     .replace(/\+-|\+\/-/g, '±')

@@ -26,10 +26,10 @@ export const FINDING_TITLES = {
 export interface FindingRow {
   readonly name: FindingName;
   readonly title: string;
-  /** What was found; `languages` is empty where all found the same. */
+  /** What was found; `languages` is empty where all found the same, here and below. */
   readonly found: readonly { readonly languages: readonly string[]; readonly text: string }[];
   readonly targets: readonly string[];
-  readonly how: readonly string[];
+  readonly how: readonly { readonly languages: readonly string[]; readonly text: string }[];
   readonly outcome: FindingOutcome;
   /** Languages in which it failed or did not run, where not all did. */
   readonly where: readonly string[];
@@ -41,19 +41,24 @@ const GRAVITY: readonly FindingOutcome[] = ['failed', 'not-run', 'passed', 'not-
 const distinct = (texts: readonly string[]) => [...new Set(texts.filter(Boolean))];
 const languageName = ({ language }: FindingView) => (language ? LANGUAGE_NAMES[language] : 'all');
 
+/** Distinct texts, each with the languages that gave it; without them where all gave the same. */
+function byText(findings: readonly FindingView[], read: (finding: FindingView) => string) {
+  const texts = distinct(findings.map(read));
+  return texts.map((text) => ({
+    text,
+    languages: texts.length === 1 ? [] : findings.filter((one) => read(one) === text).map(languageName),
+  }));
+}
+
 function rowOf(name: FindingName, findings: readonly FindingView[]): FindingRow {
   const outcome = GRAVITY.find((one) => findings.some((finding) => finding.outcome === one)) ?? 'not-applicable';
   const concerned = findings.filter((finding) => finding.outcome === outcome);
-  const measured = distinct(findings.map((finding) => finding.measured));
   return {
     name,
     title: FINDING_TITLES[name],
-    found: measured.map((text) => ({
-      text,
-      languages: measured.length === 1 ? [] : findings.filter((one) => one.measured === text).map(languageName),
-    })),
+    found: byText(findings, ({ measured }) => measured),
     targets: distinct(findings.map((finding) => finding.target)),
-    how: distinct(concerned.map((finding) => finding.how)),
+    how: byText(concerned, ({ how }) => how),
     outcome,
     where: concerned.length === findings.length ? [] : concerned.map(languageName),
   };

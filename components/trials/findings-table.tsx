@@ -3,6 +3,9 @@ import type { FindingView } from '@/lib/trials/trial';
 import { Figures } from './figures';
 import { findingRows } from './finding-rows';
 
+/** A longer one is set as text, not as a figure. */
+const LONG_FIGURE = 14;
+
 /** What a trial found, what was required, how it was measured. */
 export const FindingsTable = ({ findings }: { findings: readonly FindingView[] }) => (
   <table className="trial">
@@ -23,7 +26,7 @@ export const FindingsTable = ({ findings }: { findings: readonly FindingView[] }
           </th>
           <td className="num found">
             {row.found.map(({ text, languages }) => (
-              <span key={text}>
+              <span key={text} className={text.length > LONG_FIGURE ? 'long' : undefined}>
                 <Figures text={text} />
                 {languages.length > 0 && <small> {languages.join(', ')}</small>}
               </span>
@@ -33,7 +36,12 @@ export const FindingsTable = ({ findings }: { findings: readonly FindingView[] }
             <Figures text={row.targets.join('; ')} />
           </td>
           <td className="q small">
-            <Figures text={row.how.join(' ')} />
+            {row.how.map(({ text, languages }) => (
+              <p key={text}>
+                {languages.length > 0 && <b>{languages.join(', ')}: </b>}
+                <Figures text={text} />
+              </p>
+            ))}
           </td>
           <td>
             <Verdict outcome={row.outcome} />

@@ -1,11 +1,18 @@
 'use client';
 
 import { useEffect, useState } from 'react';
+import useSWR from 'swr';
+import { fetchText } from '@/components/ui/fetch-text';
 import type { TrialView } from '@/lib/trials/trial';
 
 const SETTLED = ['passed', 'failed', 'refused'];
-/** A trial that no worker has taken after this time is told to wait for one. */
-const PATIENCE_MS = 12_000;
+const WORKERS_ASKED_MS = 10_000;
+
+/** Workers that reported lately, as the health check tells. */
+const countWorkers = async (address: string): Promise<number> => {
+  const { workers } = JSON.parse(await fetchText(address)) as { workers: { seenLately: number } };
+  return workers.seenLately;
+};
 
 export const isSettled = (trial: TrialView) => SETTLED.includes(trial.state);
 
@@ -25,7 +32,6 @@ export interface LiveTrial {
 export function useLiveTrial(initial: TrialView | null, followId: string | null, onSettled: () => void): LiveTrial {
   const [heard, setHeard] = useState<TrialView | null>(null);
   const [isCut, setIsCut] = useState(false);
-  const [isLate, setIsLate] = useState(false);
   const trial = heard && heard.id === (followId ?? heard.id) ? heard : initial;
 
   useEffect(() => {
@@ -44,14 +50,9 @@ export function useLiveTrial(initial: TrialView | null, followId: string | null,
   }, [followId, onSettled]);
 
   const isWaiting = trial?.state === 'waiting';
-  useEffect(() => {
-    if (!isWaiting) return;
-    const timer = setTimeout(() => setIsLate(true), PATIENCE_MS);
-    return () => {
-      clearTimeout(timer);
-      setIsLate(false);
-    };
-  }, [isWaiting, followId]);
+  const { data: workersSeen } = useSWR(isWaiting ? '/api/health' : null, countWorkers, {
+    refreshInterval: WORKERS_ASKED_MS,
+  });
 
-  return { trial, isWorkerAway: isWaiting && isLate, isCut };
+  return { trial, isWorkerAway: isWaiting && workersSeen === 0, isCut };
 }

@@ -11,9 +11,17 @@ export function refinementSeries(findings: readonly FindingView[]): RefinementSe
     const grids = numbersOf(data?.grids);
     const errors = numbersOf(data?.errors);
     const slope = data?.slope;
-    if (name === 'refinement' && grids && errors && typeof slope === 'number') {
-      return { name: language ? LANGUAGE_NAMES[language] : 'kernel', grids, errors, slope };
-    }
+    if (name !== 'refinement' || !grids || !errors || typeof slope !== 'number') continue;
+    const steps = numbersOf(data?.marchedSteps);
+    // Refined in time alone, on one grid: the steps are what was refined.
+    const isInTime = steps !== null && new Set(grids).size === 1;
+    return {
+      name: language ? LANGUAGE_NAMES[language] : 'kernel',
+      grids: isInTime ? steps : grids,
+      errors,
+      slope,
+      ...(isInTime && { unit: 'steps' }),
+    };
   }
   return null;
 }

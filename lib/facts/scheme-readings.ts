@@ -8,6 +8,8 @@ import { type Reading, counted, countWord } from './readings';
 export interface ObservedOrder {
   readonly slope: string;
   readonly grids: number;
+  /** "grid", or "step" where time alone was refined. */
+  readonly refined: string;
 }
 
 const exponent = (power: number) =>
@@ -33,7 +35,7 @@ function specialText({ specialValues }: OrderFacts, symbol: string): string {
 
 function orderReadings(order: OrderFacts, parameter: string | null, observed: ObservedOrder | null): Reading[] {
   const seen = observed
-    ? `observed ${observed.slope} on ${counted(observed.grids, 'grid')}`
+    ? `observed ${observed.slope} on ${counted(observed.grids, observed.refined)}`
     : 'exact, from the truncated series';
   const symbol = symbolText(parameter ?? 'lambda');
   if (order.pT === null || order.pX === null) {

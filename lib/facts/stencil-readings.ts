@@ -1,19 +1,21 @@
 /** The readings of a stencil and of a time method. */
 import type { StencilFacts, TimeMethodFacts } from './facts';
-import { decimalText, limitText, signed } from './reading-texts';
+import { decimalText, limitText, raised, signed } from './reading-texts';
 import { angleText } from './angle-text';
 import { type Reading, counted } from './readings';
 
 const pointsAWave = (theta: number) => decimalText((2 * Math.PI) / theta, 3);
 
-function errorText({ leadingError }: StencilFacts): string | null {
-  if (!leadingError) return null;
-  const power = (k: number) => (k === 1 ? 'Δx' : `Δx^${k}`);
+/** The coefficient of the leading error, and what it stands before. */
+function errorReading({ leadingError }: StencilFacts): Reading[] {
+  if (!leadingError) return [];
+  const power = leadingError.hPower === 1 ? 'Δx' : `Δx${raised(String(leadingError.hPower))}`;
   if (leadingError.terms) {
     const terms = Object.entries(leadingError.terms).map(([word, value]) => `${signed(value)} u_${word}`);
-    return `${power(leadingError.hPower)} (${terms.join(' + ')})`;
+    return [{ term: 'Leading error', value: power, how: `times ${terms.join(' + ')}; approximation minus derivative` }];
   }
-  return `${signed(leadingError.coefficient ?? '')} ${power(leadingError.hPower)} u^(${leadingError.derivative})`;
+  const of = `times ${power} and the derivative of order ${leadingError.derivative}; approximation minus derivative`;
+  return [{ term: 'Leading error', value: signed(leadingError.coefficient ?? ''), how: of }];
 }
 
 const haloText = (halo: StencilFacts['halo']) =>
@@ -48,7 +50,6 @@ function bandwidthReadings({ modifiedWavenumber }: StencilFacts): Reading[] {
 }
 
 export function stencilReadings(facts: StencilFacts): Reading[] {
-  const error = errorText(facts);
   return [
     {
       term: 'Order',
@@ -57,7 +58,7 @@ export function stencilReadings(facts: StencilFacts): Reading[] {
         ? 'exact, from the moments of the weights'
         : `does not approximate the derivative: moment ${facts.firstViolatedMoment} is off by ${signed(facts.momentResidual ?? '')}`,
     },
-    ...(error ? [{ term: 'Leading error', value: error, how: 'approximation minus derivative' }] : []),
+    ...errorReading(facts),
     ...(facts.nominal
       ? [
           {
@@ -73,7 +74,7 @@ export function stencilReadings(facts: StencilFacts): Reading[] {
       term: 'Halo',
       value: haloText(facts.halo),
       how: facts.extent
-        ? `reaches from ${signed(facts.extent[0])} to ${signed(facts.extent[1])} spacings`
+        ? `reaches ${signed(facts.extent[0])} left and ${signed(facts.extent[1])} right`
         : 'per dimension',
     },
     {

@@ -1,7 +1,8 @@
 'use client';
 
 import { signIn } from 'next-auth/react';
-import { useEffect, useRef, useState } from 'react';
+import { useRef, useState } from 'react';
+import { useHydrated } from '@/components/ui/use-hydrated';
 import { signInSentence } from '@/lib/auth/sign-in-answer';
 import type { Role } from '@/lib/people/role';
 
@@ -16,9 +17,8 @@ interface SignInFormProps {
 export function SignInForm({ goTo, code, demo }: SignInFormProps) {
   const [fault, setFault] = useState(code ? signInSentence(code) : null);
   const [isBusy, setIsBusy] = useState(false);
-  const [isReady, setIsReady] = useState(false);
+  const isReady = useHydrated();
   const password = useRef<HTMLInputElement>(null);
-  useEffect(() => setIsReady(true), []);
 
   const enter = async (email: string, secret: string) => {
     setIsBusy(true);

@@ -5,6 +5,13 @@ import type { SheetView } from '@/lib/entries/entry';
 import { EQUATION_LATEX } from '@/lib/entries/equation-latex';
 import type { Reading } from '@/lib/facts/readings';
 
+const LONG_VALUE = 9;
+const isLong = (value: Reading['value']) =>
+  (typeof value === 'string' ? value : value.map(({ text }) => text).join('')).length > LONG_VALUE;
+
+/** MathML does not break lines, so a longer rule is set smaller. */
+const sizeOf = (latex: string) => (latex.length > 260 ? 'tiny-rule' : latex.length > 130 ? 'small-rule' : undefined);
+
 /** The rule, its equation and its dimensionless numbers. */
 function RuleLines({ rule, sheet }: { rule: readonly string[]; sheet: SheetView }) {
   const equation = sheet.equation ? EQUATION_LATEX[sheet.equation] : null;
@@ -12,7 +19,7 @@ function RuleLines({ rule, sheet }: { rule: readonly string[]; sheet: SheetView 
   return (
     <div className="eqn">
       {rule.map((latex) => (
-        <div key={latex}>
+        <div key={latex} className={sizeOf(latex)}>
           <Formula latex={latex} />
         </div>
       ))}
@@ -52,7 +59,9 @@ export const Readings = ({
       {readings.map(({ term, value, how }) => (
         <div key={term} className="read">
           <dt>{term}</dt>
-          <dd>{typeof value === 'string' ? <Letters text={value} /> : <MathText runs={value} />}</dd>
+          <dd className={isLong(value) ? 'long' : undefined}>
+            {typeof value === 'string' ? <Letters text={value} /> : <MathText runs={value} />}
+          </dd>
           <dd>
             <Letters text={how} />
           </dd>
