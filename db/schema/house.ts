@@ -51,7 +51,24 @@ export const letters = pgTable(
     index('letters_to_send')
       .on(t.nextAt)
       .where(sql`${t.state} = 'waiting'`),
+    index('letters_by_age').on(t.createdAt, t.id),
+    index('letters_by_recipient').on(t.recipientId),
   ],
+);
+
+/** What the local mail catcher was given, where the house has no mail server; the page "Arrived mail" shows it. */
+export const caughtLetters = pgTable(
+  'caught_letters',
+  {
+    id: bigint({ mode: 'number' }).primaryKey().generatedAlwaysAsIdentity(),
+    sender: text().notNull(),
+    recipient: text().notNull(),
+    subject: text().notNull(),
+    text: text().notNull(),
+    html: text().notNull(),
+    arrivedAt: createdAt(),
+  },
+  (t) => [index('caught_letters_by_recipient').on(t.recipient, t.id)],
 );
 
 /** One row: what the house has decided for itself. */

@@ -14,9 +14,16 @@ export const EVENT_KINDS = [
   'adoption.recorded',
   'remark.written',
   'person.added',
-  'person.signed-out-everywhere',
+  'person.invited',
+  'person.joined',
+  'person.renamed',
   'person.role-changed',
   'person.disabled',
+  'person.opened',
+  'person.password-changed',
+  'person.password-reset',
+  'person.signed-out-everywhere',
+  'letter.sent-again',
   'demo.filled',
 ] as const;
 export type EventKind = (typeof EVENT_KINDS)[number];
