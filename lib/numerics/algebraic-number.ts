@@ -131,19 +131,6 @@ export class AlgebraicNumber {
     }
   }
 
-  /** Sign of a polynomial at this number, exact. */
-  signOf(a: IntegerPolynomial): -1 | 0 | 1 {
-    if (this.isRootOf(a)) return 0;
-    const foreign = isolateRealRoots(a);
-    for (;;) {
-      const { lo, hi, den } = this.bracket;
-      const touches = foreign.some((root) => root.lo * den <= hi * root.den && lo * root.den <= root.hi * den);
-      if (!touches || lo === hi) return signAt(a, lo, den);
-      this.bisect();
-      foreign.forEach((root, k) => (foreign[k] = halved(a, root)));
-    }
-  }
-
   toNumber(): number {
     return Number(this.toDecimal(17));
   }

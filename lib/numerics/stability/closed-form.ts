@@ -149,7 +149,8 @@ export function closedForm(value: AlgebraicNumber, symbol: string, check: () => 
   const radical = radicalText(minimal, value);
   const decimal = Number(value.toDecimal(20));
   const text = radical && Math.abs(radical.value - decimal) <= 1e-14 * Math.abs(decimal) ? radical.text : null;
-  if (text !== null && degree(minimal) === 1) return { text, minimalPolynomial: null };
+  const isRational = text !== null && /^-?\d+(\/\d+)?$/.test(text);
+  if (isRational) return { text, minimalPolynomial: null };
   const polynomial = polynomialText(minimal, symbol);
   return { text, minimalPolynomial: polynomial.length <= POLYNOMIAL_TEXT_MAX ? polynomial : null };
 }

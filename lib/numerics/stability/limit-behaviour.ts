@@ -137,5 +137,7 @@ export function worstWave(wave: WavePolynomial, parameter: number): { theta: num
   }
   const theta = (lo + hi) / 2;
   const modulus = modulusAt(theta);
-  return modulus > best.modulus ? { theta, modulus } : best;
+  // A wave of the grid (π, π/2) stands where refinement gains nothing but rounding.
+  const found = modulus > best.modulus * (1 + 1e-12) ? { theta, modulus } : best;
+  return Math.abs(found.theta + Math.PI) < 1e-12 ? { ...found, theta: Math.PI } : found;
 }
