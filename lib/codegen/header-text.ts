@@ -182,7 +182,7 @@ function startLines({ plan }: SchemeContext): string[] {
 }
 
 export function schemeHeader(context: SchemeContext, language: KernelLanguage, calling: readonly string[]): string[] {
-  const { input, facts, plan, options } = context;
+  const { input, facts, options } = context;
   const definition = input.definition;
   const equation: Equation | null = definition.kind === 'scheme' ? definition.equation : null;
   const words = equation ? EQUATION_TEXT[equation] : null;
