@@ -4,9 +4,9 @@ import type { CanonicalScheme } from '@/lib/numerics/canonical-scheme';
 import { sampleRoots, type SampleRequest } from '@/lib/numerics/samples';
 import { analyseStencil, inconsistencySentence } from '@/lib/numerics/stencil';
 import { analyseTimeMethod } from '@/lib/numerics/time-method';
-import { analyseTruncation } from '@/lib/numerics/truncation';
+import { analyseTruncation, type TruncationAnalysis } from '@/lib/numerics/truncation';
 import type { Definition, SchemeDefinition, StencilDefinition, TimeMethodDefinition } from '@/lib/entries/definition';
-import { canonicalScheme } from './canonical-scheme';
+import { canonicalScheme, nominalScheme } from './canonical-scheme';
 import { canonicalStencil } from './canonical-stencil';
 import { readTimeMethod } from './canonical-time-method';
 import { readDefinition } from './definition-shape';
@@ -59,6 +59,14 @@ function analyseTimeMethodDefinition(definition: TimeMethodDefinition): Analysis
 const placeOf = (definition: SchemeDefinition) =>
   definition.form === 'table' ? '/terms' : definition.form === 'system' ? '/equations' : '/space';
 
+/** Orders within the rounding of the decimals: of the method as meant where that can be told, else by tolerance. */
+function nominalOrders(definition: SchemeDefinition, scheme: CanonicalScheme, rounding: number): TruncationAnalysis {
+  const tolerant = analyseTruncation(scheme, rounding);
+  const meant = nominalScheme(definition);
+  const exact = meant && analyseTruncation(meant);
+  return exact?.order.consistent ? { ...exact, order: { ...exact.order, reason: tolerant.order.reason } } : tolerant;
+}
+
 function analyseSchemeDefinition(
   definition: SchemeDefinition,
   budget: Budget,
@@ -69,7 +77,7 @@ function analyseSchemeDefinition(
   let orders = analyseTruncation(scheme);
   const rounding = orders.order.consistent ? 0 : roundingOf(definition);
   if (rounding > 0) {
-    const nominal = analyseTruncation(scheme, rounding);
+    const nominal = nominalOrders(definition, scheme, rounding);
     if (nominal.order.consistent) {
       const sentence = `as printed, the scheme ${orders.order.reason ?? 'is not consistent'}; within the rounding of its decimals it is consistent`;
       problems.push(warningAt(placeOf(definition), 'nominally-consistent', sentence));

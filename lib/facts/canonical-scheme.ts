@@ -16,3 +16,12 @@ export function canonicalScheme(definition: SchemeDefinition): { scheme: Canonic
         : canonicalSystem(definition, problems);
   return { scheme, problems };
 }
+
+/**
+ * The scheme that the author of a Runge-Kutta method in decimals meant: coefficients of its stability function that are
+ * 1/k! within rounding are taken as 1/k!. Null where the definition has no such method.
+ */
+export function nominalScheme(definition: SchemeDefinition): CanonicalScheme | null {
+  if (definition.form !== 'lines' || definition.time.kind !== 'runge-kutta') return null;
+  return canonicalLines(definition, [], true);
+}

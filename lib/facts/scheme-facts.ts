@@ -20,7 +20,9 @@ import { analyseTimeMethod, isExplicitTableau, tableauRegisters } from '@/lib/nu
 import type { TruncationAnalysis } from '@/lib/numerics/truncation';
 import { canonicalStencil } from './canonical-stencil';
 import { readTimeMethod, type ExactTimeMethod } from './canonical-time-method';
-import type { SchemeFacts } from './facts';
+import { nominalScheme } from './canonical-scheme';
+import type { SchemeFacts, StabilityFacts } from './facts';
+import { roundingOf } from './rounding';
 import { representativeValues, schemeDissipationFacts, schemeStability } from './scheme-stability';
 
 /** Nonzero roots z at each wave. */
@@ -113,6 +115,23 @@ export function schemeStructure(definition: SchemeDefinition, scheme: CanonicalS
   };
 }
 
+const isUnstable = ({ verdict }: StabilityFacts) => verdict.includes('unstable for all');
+
+/**
+ * Decimals that miss a Taylor coefficient by rounding make almost every bounded wave grow by about that much: where the
+ * method as meant has a bound, the bound is the answer, and the note says what the printed digits do.
+ */
+function stabilityOf(definition: SchemeDefinition, scheme: CanonicalScheme, budget: Budget) {
+  const printed = schemeStability(scheme, budget);
+  const meant = isUnstable(printed) && roundingOf(definition) > 0 ? nominalScheme(definition) : null;
+  if (!meant) return { stability: printed, meant: scheme };
+  const stability = schemeStability(meant, budget);
+  if (isUnstable(stability) || stability.verdict === 'not decided within the time budget')
+    return { stability: printed, meant: scheme };
+  const note = `Taken as meant: coefficients of the stability function within the rounding of the printed decimals of 1/k! count as 1/k!. As printed the scheme is ${printed.verdict}, at the rate of that rounding.`;
+  return { stability: { ...stability, note: [stability.note, note].filter(Boolean).join(' ') }, meant };
+}
+
 export function schemeFacts(
   definition: SchemeDefinition,
   scheme: CanonicalScheme,
@@ -121,10 +140,10 @@ export function schemeFacts(
 ): SchemeFacts {
   const structure = schemeStructure(definition, scheme);
   budget.progress(0.2, 'stability');
-  const stability = schemeStability(scheme, budget);
+  const { stability, meant } = stabilityOf(definition, scheme, budget);
   budget.progress(0.8, 'dissipation');
   const values = representativeValues(scheme, stability, order.specialValues);
-  const dissipation = order.consistent && !budget.isSpent() ? schemeDissipationFacts(scheme, values) : null;
+  const dissipation = order.consistent && !budget.isSpent() ? schemeDissipationFacts(meant, values) : null;
   const at = scheme.parameters.map((name, k) => `${name} = ${formatRational(values[k]!)}`).join(', ');
   const axes = scheme.dims === 1 ? 0 : scheme.dims;
   budget.progress(1, 'done');

@@ -16,7 +16,9 @@ import {
   shiftPowers,
   type ShiftPolynomial,
 } from '@/lib/numerics/shift-polynomial';
+import { nominalStabilityFunction } from '@/lib/numerics/order-conditions';
 import { stabilityFunction } from '@/lib/numerics/stability-function';
+import { isExplicitTableau } from '@/lib/numerics/time-method';
 import { canonicalStencil, type CanonicalStencil } from './canonical-stencil';
 import type { Problem } from './facts';
 import { hasErrors, problemAt } from './problem';
@@ -152,8 +154,11 @@ function rungeKuttaRows(
   right: ShiftPolynomial,
   one: ShiftPolynomial,
   variables: number,
+  nominal: boolean,
 ): LevelRow[] {
-  const { numerator, denominator } = stabilityFunction(method.A, method.b);
+  const { numerator, denominator } = nominal
+    ? nominalStabilityFunction(method.A, method.b, method.ulp)
+    : stabilityFunction(method.A, method.b);
   const degree = Math.max(numerator.length, denominator.length) - 1;
   const leftPowers = shiftPowers(left, one, degree);
   const rightPowers = shiftPowers(right, one, degree);
@@ -190,9 +195,11 @@ function rowsOf(
   definition: LinesScheme,
   operators: ReturnType<typeof spaceOperators>,
   variables: number,
+  nominal: boolean,
 ): LevelRow[] {
   const { left, rights, one } = operators;
-  if (method.kind === 'runge-kutta') return rungeKuttaRows(method, left, rights.reduce(addShifts), one, variables);
+  if (method.kind === 'runge-kutta')
+    return rungeKuttaRows(method, left, rights.reduce(addShifts), one, variables, nominal);
   if (method.kind === 'multistep')
     return multistepRows(
       method.alpha,
@@ -222,7 +229,8 @@ function timeProblem(time: TimeMethod, definition: LinesScheme): Problem | null 
   return null;
 }
 
-export function canonicalLines(definition: LinesScheme, problems: Problem[]): CanonicalScheme | null {
+/** @param nominal whether an explicit Runge-Kutta method in decimals is taken as its author meant it */
+export function canonicalLines(definition: LinesScheme, problems: Problem[], nominal = false): CanonicalScheme | null {
   const { dims, timeOrder } = CONVENTIONS[definition.equation];
   const operators = readSpace(definition, problems);
   const method = readTimeMethod(definition.time, '/time', problems);
@@ -244,12 +252,8 @@ export function canonicalLines(definition: LinesScheme, problems: Problem[]): Ca
     return null;
   }
   const variables = vocabulary.parameters.length;
-  const rows = rowsOf(
-    method,
-    definition,
-    spaceOperators(operators, definition, vocabulary.numbers, variables),
-    variables,
-  );
+  const space = spaceOperators(operators, definition, vocabulary.numbers, variables);
+  const rows = rowsOf(method, definition, space, variables, nominal && isDecimalExplicit(method));
   const terms: CanonicalTerm[] = rows.flatMap(({ level, shifts }) =>
     shifts.map(({ offset, coefficient }) => ({
       level: rational(level),
@@ -286,6 +290,9 @@ export function canonicalLines(definition: LinesScheme, problems: Problem[]): Ca
     ),
   };
 }
+
+const isDecimalExplicit = (method: ExactTimeMethod) =>
+  method.kind === 'runge-kutta' && !isZero(method.ulp) && isExplicitTableau(method.A);
 
 const stringOfBig = (_: string, value: unknown) => (typeof value === 'bigint' ? String(value) : value);
 

@@ -86,7 +86,8 @@ function summariseScheme(definition: SchemeDefinition, facts: SchemeFacts): Fact
   return {
     dims: facts.halo.length,
     explicit: facts.storage.explicit,
-    orderTime: facts.order.pT,
+    // A method printed in decimals is known by the order that its author gave it.
+    orderTime: facts.order.pT === null ? null : Math.max(facts.order.pT, facts.timeMethod?.orderNominal ?? 0),
     orderSpace: facts.order.pX,
     arrays: facts.storage.arraysInPlace,
     levels: facts.levels,

@@ -63,6 +63,42 @@ export function nominalOrder(A: Matrix, b: Vector, ulp: Rational): number {
   );
 }
 
+/** Moments bᵀAᵏ⁻¹1 for k = 1 … s: the coefficients of R(z) of an explicit method. */
+function moments(A: Matrix, b: Vector): Rational[] {
+  let vector: Vector = b.map(() => ONE);
+  return b.map(() => {
+    const moment = dot(b, vector);
+    vector = apply(A, vector);
+    return moment;
+  });
+}
+
+/**
+ * R(z) of an explicit method as its author meant it: every coefficient that is 1/k! within the rounding of the printed
+ * decimals is taken as 1/k!, the others as printed.
+ */
+export function nominalStabilityFunction(
+  A: Matrix,
+  b: Vector,
+  ulp: Rational,
+): { numerator: Rational[]; denominator: Rational[] } {
+  const widened = (x: Rational) => (x.den === 1n ? abs(x) : add(abs(x), ulp));
+  const plain = moments(
+    A.map((row) => row.map(abs)),
+    b.map(abs),
+  );
+  const wide = moments(
+    A.map((row) => row.map(widened)),
+    b.map(widened),
+  );
+  let due = ONE;
+  const numerator = moments(A, b).map((value, k) => {
+    due = div(due, rational(k + 1));
+    return compare(abs(sub(value, due)), sub(wide[k]!, plain[k]!)) <= 0 ? due : value;
+  });
+  return { numerator: [ONE, ...numerator], denominator: [ONE] };
+}
+
 /** Order on linear problems: agreement of R(z) with e^z. */
 export function linearOrder(A: Matrix, b: Vector): number {
   const { numerator, denominator } = stabilityFunction(A, b);

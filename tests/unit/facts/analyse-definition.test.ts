@@ -2,7 +2,7 @@ import { execFileSync } from 'node:child_process';
 import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { createBudget } from '@/lib/numerics/budget';
 import { Definition } from '@/lib/entries/definition';
 import { analyseDefinition } from '@/lib/facts/analyse-definition';
@@ -10,6 +10,9 @@ import { Analysis, type SchemeFacts } from '@/lib/facts/facts';
 import { FactsSummary } from '@/lib/facts/facts-summary';
 import { summarise } from '@/lib/facts/summarise';
 import { referenceValues } from '../../support/reference-values';
+
+// A busy machine is no failure.
+vi.setConfig({ testTimeout: 60_000 });
 
 const central = { kind: 'stencil', dims: 1, derivative: 1, offsets: ['-1', '0', '1'], weights: null };
 const leapfrog = {
@@ -137,6 +140,29 @@ describe('the analysis of a definition', () => {
       ]),
     );
     expect(heat.stability).toMatchObject({ parameter: 'r', intervals: [{ hiExact: '1/4' }] });
+  });
+
+  it('takes a method printed in decimals as its author meant it where the digits alone would spoil it', () => {
+    // Spiteri & Ruuth, SIAM J. Numer. Anal. 40 (2002) 469-491, method SSPRK(5,4) in 15 decimals (from memory).
+    const A = [
+      ['0', '0', '0', '0', '0'],
+      ['0.391752226571890', '0', '0', '0', '0'],
+      ['0.217669096261169', '0.368410593050371', '0', '0', '0'],
+      ['0.082692086657811', '0.139958502191895', '0.251891774271694', '0', '0'],
+      ['0.067966283637115', '0.115034698504632', '0.207034898597386', '0.544974750228521', '0'],
+    ];
+    const b = ['0.146811876084786', '0.248482909444976', '0.104258830331981', '0.274438900901350', '0.226007483236906'];
+    const definition = { ...leapfrog, time: { kind: 'runge-kutta', A, b } };
+    const analysis = analyseDefinition(definition);
+    expect(analysis).toMatchObject({
+      verdict: 'facts',
+      problems: [{ severity: 'warning', code: 'nominally-consistent' }],
+    });
+    const facts = analysis.facts as SchemeFacts;
+    expect(facts.order).toMatchObject({ consistent: true, pT: 4, pX: 2 });
+    expect(facts.timeMethod).toMatchObject({ orderLinear: 0, orderNominal: 4 });
+    expect(facts.stability.verdict).toBe('conditionally stable');
+    expect(summarise(Definition.parse(definition), facts).orderTime).toBe(4);
   });
 
   it('sweeps against the reads where the oldest level may be written over', () => {
