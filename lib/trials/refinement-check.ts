@@ -2,7 +2,7 @@
 import type { ApplyTask, DriverTask, MarchTask, StartTask } from '@/lib/codegen/driver-protocol';
 import { toNumber } from '@/lib/numerics/rational';
 import { expOf, minus, modulus, powerOf, type Complex } from './characteristic';
-import { notApplicable, outcomeOf, short, stateOf, type Answers, type Check, type Judgement } from './check';
+import { notApplicable, outcomeOf, stateOf, type Answers, type Check, type Judgement } from './check';
 import { planRefinement, slopeOf, type RefinedRun } from './refinement-plan';
 import { SMOOTH_WAVES, smoothField } from './smooth-field';
 import type { MarchSubject, StencilSubject } from './subject';

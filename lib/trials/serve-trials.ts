@@ -9,10 +9,10 @@ import { carryOutTrial, type EndedTrial } from './carry-out-trial';
 
 const QUEUE = 'trials';
 /**
- * Far beyond the length of a trial: the queue then takes the job for lost even though its worker lives. A worker that
+ * Beyond the six boxes of a trial at their wall limit: the queue then takes the job for lost even though its worker lives. A worker that
  * dies is noticed much sooner, by the lock that goes with it.
  */
-const EXPIRE_SECONDS = 180;
+const EXPIRE_SECONDS = 400;
 const RETRIES = 4;
 /** From taking a job to holding its trial is a matter of milliseconds. */
 const TAKING_MS = 5_000;

@@ -160,7 +160,7 @@ function timeMethodSubject(time: LinesScheme['time'], facts: TimeMethodFacts): S
     scheme,
     keptLevels: keptLevelsOf(scheme),
     halo: reachOf(scheme),
-    order: facts.orderLinear,
+    order: facts.orderNominal ?? facts.orderLinear,
     refine: 'time',
     spaceSymbol: ([lambda = 0, r = 0], theta) => [-2 * r * (1 - Math.cos(theta)), -lambda * Math.sin(theta)],
     working: working.length > 0 ? working.slice(0, 4) : [[0.3, 0]],
