@@ -81,60 +81,94 @@ export function stabilityMap(
   });
   const levels = scheme.degree + 1;
   const modulus = new Float64Array(values.length * thetaCount);
-  const at = [...parameters];
-  // Even and odd parts per level and magnitude: value = Σ even cos + i odd sin.
-  const evenRe = new Float64Array(levels * many);
-  const evenIm = new Float64Array(levels * many);
-  const oddRe = new Float64Array(levels * many);
-  const oddIm = new Float64Array(levels * many);
-  const re = new Float64Array(levels * thetaCount);
-  const im = new Float64Array(levels * thetaCount);
+  const parts = Array.from(values, (value) =>
+    foldedParts(scheme, { distinct, index, sign }, parameters, varied, value),
+  );
+  const re = new Float64Array(levels * BLOCK);
+  const im = new Float64Array(levels * BLOCK);
   const polynomial = complexArray(levels);
-  for (let v = 0; v < values.length; v++) {
-    at[varied] = values[v]!;
-    const coefficients = coefficientsAt(scheme, at);
-    for (const part of [evenRe, evenIm, oddRe, oddIm]) part.fill(0);
-    scheme.terms.forEach((term, j) => {
-      const slot = term.z * many + index[j]!;
-      evenRe[slot]! += coefficients.re[j]!;
-      evenIm[slot]! += coefficients.im[j]!;
-      oddRe[slot]! += sign[j]! * coefficients.re[j]!;
-      oddIm[slot]! += sign[j]! * coefficients.im[j]!;
-    });
-    re.fill(0);
-    im.fill(0);
-    for (let level = 0; level < levels; level++)
-      for (let k = 0; k < many; k++) {
-        const slot = level * many + k;
-        const er = evenRe[slot]!;
-        const ei = evenIm[slot]!;
-        const or = oddRe[slot]!;
-        const oi = oddIm[slot]!;
-        const row = level * thetaCount;
-        const table = k * thetaCount;
-        if (er !== 0 || oi !== 0)
-          for (let w = 0; w < thetaCount; w++) re[row + w]! += er * cosines[table + w]! - oi * sines[table + w]!;
-        if (ei !== 0 || or !== 0)
-          for (let w = 0; w < thetaCount; w++) im[row + w]! += ei * cosines[table + w]! + or * sines[table + w]!;
-      }
-    const out = v * thetaCount;
-    if (levels === 2) linearRow(modulus, out, re, im, thetaCount);
-    else if (levels === 3) quadraticRow(modulus, out, re, im, thetaCount);
-    else iteratedRow(modulus, out, re, im, thetaCount, polynomial);
+  // Block by block of waves, so that tables and rows stay in the first cache while the values go by.
+  for (let from = 0; from < thetaCount; from += BLOCK) {
+    const n = Math.min(BLOCK, thetaCount - from);
+    for (let v = 0; v < values.length; v++) {
+      fillRows(parts[v]!, levels, many, cosines, sines, thetaCount, from, n, re, im);
+      const out = v * thetaCount + from;
+      if (levels === 2) linearRow(modulus, out, re, im, n);
+      else if (levels === 3) quadraticRow(modulus, out, re, im, n);
+      else iteratedRow(modulus, out, re, im, n, polynomial);
+    }
   }
   return { modulus, thetas, values };
 }
 
+const BLOCK = 256;
+
+/** Four numbers per level and magnitude: value = Σ (even cos) + i (odd sin), each with real and imaginary part. */
+function foldedParts(
+  scheme: NumericScheme,
+  { distinct, index, sign }: Folded,
+  parameters: readonly number[],
+  varied: number,
+  value: number,
+): Float64Array {
+  const at = [...parameters];
+  at[varied] = value;
+  const coefficients = coefficientsAt(scheme, at);
+  const out = new Float64Array((scheme.degree + 1) * distinct.length * 4);
+  scheme.terms.forEach((term, j) => {
+    const slot = 4 * (term.z * distinct.length + index[j]!);
+    out[slot]! += coefficients.re[j]!;
+    out[slot + 1]! += coefficients.im[j]!;
+    out[slot + 2]! += sign[j]! * coefficients.re[j]!;
+    out[slot + 3]! += sign[j]! * coefficients.im[j]!;
+  });
+  return out;
+}
+
+function fillRows(
+  parts: Float64Array,
+  levels: number,
+  many: number,
+  cosines: Float64Array,
+  sines: Float64Array,
+  stride: number,
+  from: number,
+  n: number,
+  re: Float64Array,
+  im: Float64Array,
+): void {
+  re.fill(0);
+  im.fill(0);
+  for (let level = 0; level < levels; level++)
+    for (let k = 0; k < many; k++) {
+      const slot = 4 * (level * many + k);
+      const [evenRe, evenIm, oddRe, oddIm] = [parts[slot]!, parts[slot + 1]!, parts[slot + 2]!, parts[slot + 3]!];
+      const row = level * BLOCK;
+      const table = k * stride + from;
+      if (evenRe !== 0) for (let w = 0; w < n; w++) re[row + w]! += evenRe * cosines[table + w]!;
+      if (oddIm !== 0) for (let w = 0; w < n; w++) re[row + w]! -= oddIm * sines[table + w]!;
+      if (evenIm !== 0) for (let w = 0; w < n; w++) im[row + w]! += evenIm * cosines[table + w]!;
+      if (oddRe !== 0) for (let w = 0; w < n; w++) im[row + w]! += oddRe * sines[table + w]!;
+    }
+}
+
 function linearRow(modulus: Float64Array, out: number, re: Float64Array, im: Float64Array, n: number): void {
   for (let w = 0; w < n; w++) {
-    const lead = re[n + w]! * re[n + w]! + im[n + w]! * im[n + w]!;
+    const lead = re[BLOCK + w]! * re[BLOCK + w]! + im[BLOCK + w]! * im[BLOCK + w]!;
     modulus[out + w] = Math.sqrt((re[w]! * re[w]! + im[w]! * im[w]!) / lead);
   }
 }
 
 function quadraticRow(modulus: Float64Array, out: number, re: Float64Array, im: Float64Array, n: number): void {
   for (let w = 0; w < n; w++)
-    modulus[out + w] = quadraticModulus(re[2 * n + w]!, im[2 * n + w]!, re[n + w]!, im[n + w]!, re[w]!, im[w]!);
+    modulus[out + w] = quadraticModulus(
+      re[2 * BLOCK + w]!,
+      im[2 * BLOCK + w]!,
+      re[BLOCK + w]!,
+      im[BLOCK + w]!,
+      re[w]!,
+      im[w]!,
+    );
 }
 
 function iteratedRow(
@@ -148,8 +182,8 @@ function iteratedRow(
   let warm: ComplexArray | undefined;
   for (let w = 0; w < n; w++) {
     for (let level = 0; level < polynomial.re.length; level++) {
-      polynomial.re[level] = re[level * n + w]!;
-      polynomial.im[level] = im[level * n + w]!;
+      polynomial.re[level] = re[level * BLOCK + w]!;
+      polynomial.im[level] = im[level * BLOCK + w]!;
     }
     // Roots change little along theta, so each wave starts from its neighbour's.
     warm = polynomialRoots(polynomial, warm);
