@@ -221,11 +221,8 @@ describe('the analysis of a definition', () => {
 describe('npm run analyse', () => {
   const run = (args: string[], input = '') => {
     try {
-      const stdout = execFileSync('npm', ['run', '--silent', 'analyse', '--', ...args], {
-        input,
-        encoding: 'utf8',
-        stdio: 'pipe',
-      });
+      const command = ['--import', 'tsx', 'lib/facts/analyse-files.ts', ...args];
+      const stdout = execFileSync(process.execPath, command, { input, encoding: 'utf8', stdio: 'pipe' });
       return { status: 0, stdout, stderr: '' };
     } catch (error) {
       const { status, stdout, stderr } = error as { status: number; stdout: string; stderr: string };
