@@ -75,7 +75,7 @@ export function floorOf(root, name, text) {
   if (name.startsWith('db/')) return 'db';
   if (name.startsWith('components/')) return 'component';
   if (name.startsWith('app/')) return 'app';
-  if (['worker.ts', 'proxy.ts', 'instrumentation.ts'].includes(name)) return 'program';
+  if (['worker.ts', 'mail-catcher.ts', 'proxy.ts', 'instrumentation.ts'].includes(name)) return 'program';
   return null;
 }
 

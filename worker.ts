@@ -1,5 +1,5 @@
 /**
- * A worker: takes trials from the queue and reports that it lives. Any number of them may serve one database.
+ * A worker: takes trials from the queue, sends letters and reports that it lives. Any number of them may serve one database.
  * Started with `node --conditions=react-server --import tsx worker.ts`.
  */
 import { randomBytes } from 'node:crypto';
@@ -9,9 +9,13 @@ import PgBoss from 'pg-boss';
 import { db, pool } from '@/db/client';
 import { isDatabaseAway } from '@/db/errors';
 import { listen } from '@/db/listen';
+import { LETTER_WAITING } from '@/db/queries/letters';
 import { TRIAL_QUEUED } from '@/db/queries/trials';
 import { removeWorker, reportWorker } from '@/db/queries/workers';
 import { env } from '@/lib/env';
+import { openPost } from '@/lib/mail/deliver';
+import { fromOf, senderOf } from '@/lib/mail/sender';
+import { type LetterService, serveLetters } from '@/lib/mail/serve-letters';
 import { vetDemoEntry, vetWaitingDemoEntries } from '@/lib/reviews/vet-demo-entries';
 import { sandboxMode } from '@/lib/sandbox/run-command';
 import { serveTrials, type TrialService } from '@/lib/trials/serve-trials';
@@ -82,6 +86,21 @@ async function startService(boss: PgBoss): Promise<TrialService | null> {
   return null;
 }
 
+/** Null where the settings name no mail server: letters then wait. */
+async function startLetters(boss: PgBoss): Promise<LetterService | null> {
+  const { SMTP_URL, LEVELBOOK_DEMO: demoMode } = settings;
+  while (SMTP_URL && !signal.aborted) {
+    try {
+      const post = openPost(SMTP_URL, fromOf(settings));
+      return await serveLetters(boss, db, { sender: senderOf(settings), post, demoMode }, signal);
+    } catch (error) {
+      report('start of the letters', error);
+      await pause(START_PAUSE_MS);
+    }
+  }
+  return null;
+}
+
 async function main(): Promise<void> {
   // The queue settles its jobs without being waited for; where the database is away, that fails on its own.
   process.on('unhandledRejection', (error) => {
@@ -98,11 +117,16 @@ async function main(): Promise<void> {
   const boss = await startQueue();
   const service = boss && (await startService(boss));
   if (boss && service) {
-    const sweep = repeat('sweep', SWEEP_MS, service.sweep);
+    const letters = await startLetters(boss);
+    const sweepLetters = async () => letters?.sweep();
+    const sweep = Promise.all([repeat('sweep', SWEEP_MS, service.sweep), repeat('letters', SWEEP_MS, sweepLetters)]);
     const ear = listen(
       settings.DATABASE_URL,
-      [TRIAL_QUEUED],
-      () => void service.sweep().catch((error: unknown) => report('sweep', error)),
+      [TRIAL_QUEUED, LETTER_WAITING],
+      (channel) =>
+        void (channel === TRIAL_QUEUED ? service.sweep() : sweepLetters()).catch((error: unknown) =>
+          report('sweep', error),
+        ),
       () => service.wake(),
     );
     if (settings.LEVELBOOK_DEMO)

@@ -1,6 +1,8 @@
-import { and, asc, eq, isNull, sql } from 'drizzle-orm';
+import { and, asc, eq, isNotNull, isNull, sql } from 'drizzle-orm';
+import type { LetterWish } from '@/lib/mail/letter';
+import type { Role } from '@/lib/people/role';
 import type { Database } from '../client';
-import { people } from '../schema/people';
+import { links, people, sessions } from '../schema/people';
 
 const person = {
   id: people.id,
@@ -48,4 +50,97 @@ export async function listDemoPeople(db: Database) {
     .from(people)
     .where(and(eq(people.demo, true), isNull(people.disabledAt)))
     .orderBy(asc(people.role), asc(people.name));
+}
+
+/** Everyone, by name, with what the page for administrators says of them. */
+export async function listPeople(db: Database) {
+  return db
+    .select({
+      id: people.id,
+      name: people.name,
+      email: people.email,
+      role: people.role,
+      disabledAt: people.disabledAt,
+      demo: people.demo,
+      createdAt: people.createdAt,
+      hasPassword: sql<boolean>`${people.passwordHash} is not null`,
+      seenAt: sql`(select max(seen_at) from ${sessions} where ${sessions.personId} = ${people.id})`.mapWith(
+        sessions.seenAt,
+      ),
+      /** Until when an invitation that was sent can be taken up. */
+      invitedUntil: sql`(select max(expires_at) from ${links} where ${links.personId} = ${people.id}
+        and ${links.purpose} = 'invitation' and ${links.endedAt} is null)`.mapWith(links.expiresAt),
+    })
+    .from(people)
+    .orderBy(asc(sql`lower(${people.name})`), asc(people.id));
+}
+export type ListedPerson = Awaited<ReturnType<typeof listPeople>>[number];
+
+/** With what decides on changes to an account. */
+export async function findAccount(db: Database, id: string) {
+  const [row] = await db
+    .select({ ...person, passwordHash: people.passwordHash, letterWish: people.letterWish })
+    .from(people)
+    .where(eq(people.id, id));
+  return row ?? null;
+}
+
+/** People who can open the house to others: administrators with a password and an open account. */
+export async function countAdministrators(db: Database, countDemo: boolean): Promise<number> {
+  return db.$count(
+    people,
+    and(
+      eq(people.role, 'administrator'),
+      isNull(people.disabledAt),
+      isNotNull(people.passwordHash),
+      countDemo ? undefined : eq(people.demo, false),
+    ),
+  );
+}
+
+/** @returns false where the role has changed meanwhile; breaks `an_administrator_stays` */
+export async function moveRole(tx: Database, id: string, step: { from: Role; to: Role }): Promise<boolean> {
+  const rows = await tx
+    .update(people)
+    .set({ role: step.to })
+    .where(and(eq(people.id, id), eq(people.role, step.from)))
+    .returning({ id: people.id });
+  return rows.length === 1;
+}
+
+/** Closes an open account. @returns false where it is closed already; breaks `an_administrator_stays` */
+export async function closeAccountOf(tx: Database, id: string): Promise<boolean> {
+  const rows = await tx
+    .update(people)
+    .set({ disabledAt: sql`now()`, sessionVersion: sql`${people.sessionVersion} + 1` })
+    .where(and(eq(people.id, id), isNull(people.disabledAt)))
+    .returning({ id: people.id });
+  return rows.length === 1;
+}
+
+export async function openAccountOf(tx: Database, id: string): Promise<boolean> {
+  const rows = await tx
+    .update(people)
+    .set({ disabledAt: null })
+    .where(and(eq(people.id, id), isNotNull(people.disabledAt)))
+    .returning({ id: people.id });
+  return rows.length === 1;
+}
+
+/** @returns false where there is no open account of that id */
+export async function setPassword(tx: Database, id: string, passwordHash: string): Promise<boolean> {
+  const rows = await tx
+    .update(people)
+    .set({ passwordHash })
+    .where(and(eq(people.id, id), isNull(people.disabledAt)))
+    .returning({ id: people.id });
+  return rows.length === 1;
+}
+
+export async function renamePerson(tx: Database, id: string, name: string) {
+  await tx.update(people).set({ name }).where(eq(people.id, id));
+}
+
+export async function setLetterWish(db: Database, id: string, letterWish: LetterWish) {
+  await db.update(people).set({ letterWish }).where(eq(people.id, id));
 }

@@ -1,6 +1,7 @@
 /** The parts of a running site: schema, demo, web server, worker. */
 import net from 'node:net';
 import { run, startChild } from './children.mjs';
+import { freePort } from './ports.mjs';
 import { until } from './processes.mjs';
 
 /** Node with TypeScript. The condition lets files that belong on a server load outside Next. */
@@ -60,6 +61,19 @@ export function databaseListens(address) {
     };
     socket.once('connect', answer(true)).once('error', answer(false)).once('timeout', answer(false));
   });
+}
+
+/**
+ * What a site without a mail server is told instead: our own catcher at a free port.
+ * @returns the settings that name it
+ */
+export async function catcherSettings() {
+  return { SMTP_URL: `smtp://127.0.0.1:${await freePort(2525)}`, LEVELBOOK_MAIL_CATCHER: '1' };
+}
+
+/** Takes letters in and shows them; while the database is away it takes none, and they wait. */
+export function startMailCatcher({ env }) {
+  return startChild('mail catcher', process.execPath, [...TYPESCRIPT, 'mail-catcher.ts'], { env });
 }
 
 /** A worker without a database would only end again: it is started once the database listens. */

@@ -14,7 +14,7 @@ import { DATA, writePrivately } from './places.mjs';
 import { livingProcess } from './processes.mjs';
 import { say, seconds, step } from './say.mjs';
 import { chooseAddress, givenDatabase, readEnvFile, settingsFor } from './settings.mjs';
-import { databaseListens, prepareDatabase, startWeb, startWorker } from './site.mjs';
+import { catcherSettings, databaseListens, prepareDatabase, startMailCatcher, startWeb, startWorker } from './site.mjs';
 import { ensureSystemPackages } from './system-packages.mjs';
 
 const LOCK = 'start';
@@ -120,17 +120,21 @@ async function main() {
   await ensureNodePackages();
   const { host, port } = withWeb ? await chooseAddress() : { port: process.env.PORT ?? 3000 };
   const env = settingsFor({ databaseUrl: await databaseUrl(), port, demo: ownServer, production });
+  const catchesMail = withWeb && withWorker && !env.SMTP_URL && (env.LEVELBOOK_DEMO === '1' || !production);
+  if (catchesMail) Object.assign(env, await catcherSettings());
   await step('schema and content of the database', () => prepareDatabase(env));
   if (withWeb) {
     if (production) await ensureBuild();
     await step('web server', () => keep('web server', () => startWeb({ env, host, port, production })));
   }
+  if (catchesMail) await step('mail catcher', () => keep('mail catcher', async () => startMailCatcher({ env })));
   if (withWorker) await step('worker', () => keep('worker', () => startWorker({ env })));
 
   const address = process.env.NEXTAUTH_URL ?? `http://localhost:${port}`;
   if (withWeb) tellOthers(LOCK, { address });
   say(`\nLevelbook is ready after ${seconds(Date.now() - since)}${withWeb ? `: ${address}` : ' (a worker only).'}`);
   if (withWeb && env.LEVELBOOK_DEMO === '1') say('The accounts of the demo are shown on the sign-in page.');
+  if (catchesMail) say('No mail leaves this machine: administrators find the letters under "Arrived mail".');
   say('Ctrl-C stops it.');
 }
 

@@ -13,7 +13,7 @@ import { freePort } from './ports.mjs';
 import { startCluster } from './postgres.mjs';
 import { say, seconds } from './say.mjs';
 import { settingsFor } from './settings.mjs';
-import { prepareDatabase, startWeb, startWorker } from './site.mjs';
+import { catcherSettings, prepareDatabase, startMailCatcher, startWeb, startWorker } from './site.mjs';
 import { ensureSystemPackages } from './system-packages.mjs';
 import { countPlaywright, countVitest } from './test-reports.mjs';
 
@@ -73,9 +73,10 @@ async function browser() {
   const port = await freePort(3100, host);
   const address = `http://${host}:${port}`;
   const settings = settingsFor({ databaseUrl: url('browser'), port, demo: true, production: true });
-  const env = { ...settings, NEXTAUTH_URL: address };
+  const env = { ...settings, NEXTAUTH_URL: address, ...(await catcherSettings()) };
   await prepareDatabase(env);
   const web = await keepForNow(await startWeb({ env, host, port, production: true }));
+  const catcher = await keepForNow(startMailCatcher({ env }));
   const worker = await keepForNow(await startWorker({ env }));
   const report = freshReport('browser');
   const status = await node(['node_modules/@playwright/test/cli.js', 'test', '--reporter=list,json'], {
@@ -85,6 +86,7 @@ async function browser() {
     PLAYWRIGHT_JSON_OUTPUT_NAME: report,
   });
   await worker.stop();
+  await catcher.stop();
   await web.stop();
   return countPlaywright(report, status);
 }
