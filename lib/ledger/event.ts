@@ -2,6 +2,8 @@
 export const EVENT_KINDS = [
   'draft.created',
   'draft.saved',
+  'attachment.added',
+  'attachment.removed',
   'revision.submitted',
   'revision.taken-back',
   'revision.signed',

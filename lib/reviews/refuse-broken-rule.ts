@@ -16,6 +16,7 @@ const SENTENCE: Readonly<Record<string, string>> = {
   one_number_per_entry: 'Somebody began a revision of this entry at the same moment. Try again.',
   one_call_number_per_entry: 'This call number has just been taken. Try again.',
   one_address_per_entry: 'An entry with this address is in the book already. Choose another title.',
+  attachments_are_frozen: CHANGED,
   one_running_adoption_per_code: 'This code is already recorded for this revision.',
 };
 
