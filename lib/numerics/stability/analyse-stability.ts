@@ -194,14 +194,15 @@ function isAlwaysDegenerate(scheme: CanonicalScheme): boolean {
   return GENERIC_VALUES.every((value) => leastLead(numeric, [value]) < 1e-9);
 }
 
-function assembled(scheme: CanonicalScheme, found: StabilityResult): StabilityAnalysis {
+function assembled(scheme: CanonicalScheme, found: StabilityResult, left: WorkBudget): StabilityAnalysis {
   const sides = sidesOf(scheme);
   const result: StabilityResult =
     found.verdict === 'unstable for all nonzero values' && isAlwaysDegenerate(scheme)
       ? { ...found, verdict: 'degenerate newest level', lostAt: null }
       : found;
   const unstable = result.verdict === 'unstable for all nonzero values';
-  const growth = unstable ? growthOf(scheme, sides) : null;
+  const isTimeLeft = left.timeLimitMs > 0 && !left.isCancelled?.();
+  const growth = unstable && isTimeLeft ? growthOf(scheme, sides) : null;
   const weakest = growth?.positive ?? growth?.negative ?? null;
   const isWeak = weakest !== null && quotient(weakest.q) > WEAK_BEYOND;
   return {
@@ -217,7 +218,7 @@ function assembled(scheme: CanonicalScheme, found: StabilityResult): StabilityAn
     cuts: [],
     singleDirection: [],
     method: result.method,
-    note: result.note,
+    note: unstable && !isTimeLeft ? 'The growth was not examined within the time budget.' : result.note,
   };
 }
 
@@ -267,7 +268,8 @@ function equalParameters(scheme: CanonicalScheme, budget: WorkBudget): Stability
     [common],
     scheme.parameters.map(() => variable(1, 0)),
   );
-  const analysis = assembled(equal, decided(oneParameter(equal, { ...budget, timeLimitMs: budget.timeLimitMs * 0.6 })));
+  const result = decided(oneParameter(equal, { ...budget, timeLimitMs: budget.timeLimitMs * 0.6 }));
+  const analysis = assembled(equal, result, remaining(budget, started));
   const { listed, bounds } = singleDirections(scheme, remaining(budget, started));
   const { scalar } = characteristicOf(scheme);
   const left = remaining(budget, started);
@@ -334,7 +336,11 @@ function twoParameters(scheme: CanonicalScheme, budget: WorkBudget): StabilityAn
  * @param budget time for all of it; what does not fit is said to be undecided, never guessed
  */
 export function analyseStability(scheme: CanonicalScheme, budget: WorkBudget = DEFAULT_BUDGET): StabilityAnalysis {
-  if (scheme.parameters.length === 1) return assembled(scheme, decided(oneParameter(scheme, budget)));
+  const started = performance.now();
+  if (scheme.parameters.length === 1) {
+    const result = decided(oneParameter(scheme, budget));
+    return assembled(scheme, result, remaining(budget, started));
+  }
   if (scheme.equation === 'advection-diffusion' && scheme.parameters.length === 2) return twoParameters(scheme, budget);
   return equalParameters(scheme, budget);
 }
