@@ -1,6 +1,7 @@
 /** The entry to the engine: anything in, facts or problems out. */
 import { createBudget, type Budget } from '@/lib/numerics/budget';
 import type { CanonicalScheme } from '@/lib/numerics/canonical-scheme';
+import { CONVENTIONS } from '@/lib/numerics/equation';
 import { sampleRoots, type SampleRequest } from '@/lib/numerics/samples';
 import { analyseStencil, inconsistencySentence } from '@/lib/numerics/stencil';
 import { analyseTimeMethod } from '@/lib/numerics/time-method';
@@ -67,6 +68,30 @@ function nominalOrders(definition: SchemeDefinition, scheme: CanonicalScheme, ro
   return exact?.order.consistent ? { ...exact, order: { ...exact.order, reason: tolerant.order.reason } } : tolerant;
 }
 
+/** The same definition with the equation's own numbers free: dt and dx can then be refined apart. */
+function freed(definition: SchemeDefinition): SchemeDefinition {
+  const { parameters, common } = CONVENTIONS[definition.equation];
+  const family = Object.entries(definition.fixed ?? {}).filter(
+    ([name]) => name !== common && !parameters.includes(name),
+  );
+  return { ...definition, path: undefined, fixed: Object.fromEntries(family) };
+}
+
+/** A cut ties dt to dx: the powers of each are those of the scheme from which it is cut. */
+function withFreePowers(definition: SchemeDefinition, analysis: TruncationAnalysis): TruncationAnalysis {
+  const { order } = analysis;
+  if (!order.consistent || order.pT !== null || order.pX !== null || (!definition.path && !definition.fixed))
+    return analysis;
+  const { scheme } = canonicalScheme(freed(definition));
+  const whole = scheme && analyseTruncation(scheme);
+  if (!whole) return analysis;
+  // On a cut through speed and diffusivity a wrong diffusivity looks like an error of the speed's order.
+  if (!whole.order.consistent) return definition.equation === 'advection-diffusion' ? whole : analysis;
+  const free = whole.order;
+  const { pT, pX, conditionalTerms, mixedLowest, reason } = free;
+  return { ...analysis, order: { ...order, pT, pX, conditionalTerms, mixedLowest, reason } };
+}
+
 function analyseSchemeDefinition(
   definition: SchemeDefinition,
   budget: Budget,
@@ -74,7 +99,7 @@ function analyseSchemeDefinition(
 ): Analysis {
   const { scheme, problems } = canonicalScheme(definition);
   if (!scheme) return invalid(problems);
-  let orders = analyseTruncation(scheme);
+  let orders = withFreePowers(definition, analyseTruncation(scheme));
   const rounding = orders.order.consistent ? 0 : roundingOf(definition);
   if (rounding > 0) {
     const nominal = nominalOrders(definition, scheme, rounding);

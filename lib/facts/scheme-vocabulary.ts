@@ -18,6 +18,7 @@ export interface SchemeVocabulary {
   readonly complex: boolean;
 }
 
+const MOST_FIXED = 16;
 const NAME = /^[A-Za-z_][A-Za-z0-9_]*$/;
 
 interface Cut {
@@ -68,6 +69,11 @@ export function schemeVocabulary(
 ): SchemeVocabulary | null {
   const { parameters, common, complex } = CONVENTIONS[definition.equation];
   const fixed = new Map<string, Rational>();
+  const given = Object.keys(definition.fixed ?? {}).length;
+  if (given > MOST_FIXED) {
+    problems.push(problemAt('/fixed', 'too-many', `${given} numbers are fixed; accepted: at most ${MOST_FIXED}`));
+    return null;
+  }
   for (const [name, text] of Object.entries(definition.fixed ?? {})) {
     const place = `/fixed/${name.replace(/~/g, '~0').replace(/\//g, '~1')}`;
     if (!NAME.test(name) || name === 'i')

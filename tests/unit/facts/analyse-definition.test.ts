@@ -128,6 +128,17 @@ describe('the analysis of a definition', () => {
     });
   });
 
+  it('keeps the orders in time and space of the scheme that is cut or whose numbers are fixed', () => {
+    const ftcs: [number, number, string][] = [
+      [1, 0, '1'],
+      [0, -1, '-lambda/2-r'],
+      [0, 0, '2*r-1'],
+      [0, 1, 'lambda/2-r'],
+    ];
+    for (const more of [{ path: 'r=lambda/2' }, { fixed: { r: '1/4' } }, { fixed: { r: '1/4', lambda: '1/2' } }])
+      expect(schemeFacts(table('advection-diffusion', ftcs, more)).order).toMatchObject({ pT: 1, pX: 2 });
+  });
+
   it('takes the common symbol for all directions alike', () => {
     const heat = schemeFacts(
       table('diffusion-2d', [
@@ -232,7 +243,7 @@ describe('npm run analyse', () => {
 
   it(
     'prints an array for one definition, for a list, and for points; and exits 1 where one is invalid',
-    { timeout: 60_000 },
+    { timeout: 180_000 },
     () => {
       const folder = mkdtempSync(path.join(tmpdir(), 'analyse-'));
       try {
