@@ -7,8 +7,8 @@ import { getToken } from 'next-auth/jwt';
 import { type NextRequest, NextResponse } from 'next/server';
 import { contentSecurityPolicy } from '@/lib/web/content-security-policy';
 
-// Sign-in itself, and addresses whose own frames answer programs with a problem document.
-const OPEN = /^\/(sign-in|api|kernels)(\/|$)/;
+// Sign-in, what leads to it, and addresses whose own frames answer programs with a problem document.
+const OPEN = /^\/(sign-in|invitation|reset|api|kernels)(\/|$)/;
 
 export async function proxy(request: NextRequest) {
   const { pathname, search } = request.nextUrl;

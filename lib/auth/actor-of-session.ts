@@ -5,6 +5,8 @@ import type { Role } from '@/lib/people/role';
 export interface SessionClaim {
   personId: string;
   sessionVersion: number;
+  /** Row of the session, by which it can be ended; absent before the row is made. */
+  sessionId?: string;
 }
 
 export interface SessionPerson {

@@ -2,6 +2,7 @@ import 'server-only';
 import type { NextAuthOptions } from 'next-auth';
 import CredentialsProvider from 'next-auth/providers/credentials';
 import { db } from '@/db/client';
+import { endSession, insertSession } from '@/db/queries/sessions';
 import { env } from '@/lib/env';
 import { safeCallbackUrl } from './callback-url';
 import { networkAddress } from './network-address';
@@ -22,26 +23,38 @@ export function authOptions(): NextAuthOptions {
       CredentialsProvider({
         credentials: { email: { type: 'email' }, password: { type: 'password' } },
         async authorize(credentials, request) {
+          const headers = new Headers(request.headers);
+          const address = networkAddress(headers);
           const outcome = await signIn(
             db,
-            {
-              email: String(credentials?.email ?? ''),
-              password: String(credentials?.password ?? ''),
-              address: networkAddress(new Headers(request.headers)),
-            },
+            { email: String(credentials?.email ?? ''), password: String(credentials?.password ?? ''), address },
             LEVELBOOK_DEMO,
           );
           // next-auth hands the message of an error to the page as ?error=…
           if (outcome.kind !== 'signed-in') throw new Error(signInCode(outcome));
-          return { id: outcome.claim.personId, sessionVersion: outcome.claim.sessionVersion };
+          const { personId, sessionVersion } = outcome.claim;
+          const userAgent = (headers.get('user-agent') ?? '').slice(0, 300);
+          const sessionId = await insertSession(db, { personId, userAgent, address });
+          return { id: personId, sessionVersion, sessionId };
         },
       }),
     ],
+    events: {
+      async signOut({ token }) {
+        // The cookie is gone either way; where the database is away, the row runs out by itself.
+        if (token.sub && token.sessionId) await endSession(db, token.sub, token.sessionId).catch(() => undefined);
+      },
+    },
     callbacks: {
-      jwt: ({ token, user }) => (user ? { sub: user.id, sessionVersion: user.sessionVersion } : token),
+      jwt: ({ token, user }) =>
+        user ? { sub: user.id, sessionVersion: user.sessionVersion, sessionId: user.sessionId } : token,
       session: ({ session, token }) => ({
         expires: session.expires,
-        claim: { personId: token.sub ?? '', sessionVersion: token.sessionVersion },
+        claim: {
+          personId: token.sub ?? '',
+          sessionVersion: token.sessionVersion,
+          ...(token.sessionId && { sessionId: token.sessionId }),
+        },
       }),
       redirect({ url, baseUrl }) {
         const path = url.startsWith(`${baseUrl}/`) ? url.slice(baseUrl.length) : url;

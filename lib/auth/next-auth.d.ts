@@ -3,6 +3,7 @@ import type { SessionClaim } from './actor-of-session';
 declare module 'next-auth' {
   interface User {
     sessionVersion: number;
+    sessionId: string;
   }
   interface Session {
     claim: SessionClaim;
@@ -12,5 +13,6 @@ declare module 'next-auth' {
 declare module 'next-auth/jwt' {
   interface JWT {
     sessionVersion: number;
+    sessionId?: string;
   }
 }

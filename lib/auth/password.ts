@@ -1,12 +1,10 @@
 import 'server-only';
+import { PASSWORD_LENGTH } from '@/lib/people/password-rule';
 import { type Options, hash, verify } from '@node-rs/argon2';
 
 // argon2id with 19 MiB, two passes, one lane: OWASP's password storage cheat sheet, first recommendation.
 // The package's enum of algorithms exists only for its types; 2 is argon2id.
 const COST: Options = { algorithm: 2, memoryCost: 19_456, timeCost: 2, parallelism: 1 };
-
-/** Longer ones are refused before any work: hashing cost would grow with the length. */
-export const PASSWORD_LENGTH = { min: 10, max: 200 } as const;
 
 export const hashPassword = (password: string) => hash(password, COST);
 
