@@ -1,5 +1,6 @@
 'use client';
 
+import Link from 'next/link';
 import { useRef } from 'react';
 import type { Role } from '@/lib/people/role';
 import { KeyListButton } from './keys';
@@ -21,6 +22,7 @@ export function AccountMenu({ name, role, signOutEverywhere }: AccountMenuProps)
       <summary>{name}</summary>
       <div className="panel">
         <p className="lab">Signed in as {role}</p>
+        <Link href="/profile">Your profile</Link>
         <KeyListButton />
         <SignOutButtons signOutEverywhere={signOutEverywhere} />
       </div>

@@ -20,7 +20,7 @@ export function Head({ actor, signOutEverywhere }: { actor: Actor; signOutEveryw
           Levelbook
         </Link>
         <nav className="tools" aria-label="Tools">
-          <ToolList />
+          <ToolList role={actor.role} />
         </nav>
         <div className="end">
           <ThemeButton />

@@ -1,5 +1,6 @@
 'use client';
 
+import Link from 'next/link';
 import { usePathname } from 'next/navigation';
 import { useRef } from 'react';
 import type { Role } from '@/lib/people/role';
@@ -28,12 +29,13 @@ export function NarrowMenu({ name, role, signOutEverywhere }: NarrowMenuProps) {
       </summary>
       <div className="panel">
         <nav aria-label="Tools" onClick={() => menu.current?.removeAttribute('open')}>
-          <ToolList />
+          <ToolList role={role} />
         </nav>
         <ThemeButton />
         <p className="lab">
           {name}, {role}
         </p>
+        <Link href="/profile">Your profile</Link>
         <KeyListButton />
         <SignOutButtons signOutEverywhere={signOutEverywhere} />
       </div>
