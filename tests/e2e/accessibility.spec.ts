@@ -1,6 +1,8 @@
 import AxeBuilder from '@axe-core/playwright';
 import { expect, signIn, test } from './fixtures';
 
+test.setTimeout(180_000);
+
 const TAGS = ['wcag2a', 'wcag2aa', 'wcag21aa', 'wcag22aa'];
 const PAGES = [
   ['the catalog', '/'],

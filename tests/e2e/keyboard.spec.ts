@@ -1,5 +1,7 @@
 import { expect, signIn, test, untilKeysHeard } from './fixtures';
 
+test.setTimeout(180_000);
+
 test('the catalog is walked, opened and left by keys alone', async ({ page }) => {
   await signIn(page, 'maintainer');
   await untilKeysHeard(page);

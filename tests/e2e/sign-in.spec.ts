@@ -1,5 +1,7 @@
 import { DEMO_PASSWORD, expect, personOf, signIn, test } from './fixtures';
 
+test.setTimeout(180_000);
+
 test('a page that needs an account leads to sign-in and back to itself', async ({ page }) => {
   await signIn(page, 'maintainer', '/?equation=wave');
   await expect(page).toHaveURL(/\/\?equation=wave$/);

@@ -1,5 +1,7 @@
 import { expect, signIn, test } from './fixtures';
 
+test.setTimeout(180_000);
+
 test('the sheet of forward Euler with central differences says that it never works, and why', async ({ page }) => {
   await signIn(page, 'maintainer');
   await page.getByLabel('Look for').fill('forward euler central');
