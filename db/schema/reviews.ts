@@ -1,5 +1,6 @@
 import { sql } from 'drizzle-orm';
-import { type AnyPgColumn, check, index, integer, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
+import { type AnyPgColumn, check, index, integer, pgTable, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import type { KernelLanguage } from '@/lib/codegen/kernel-request';
 import { REVIEW_POINTS } from '@/lib/reviews/review-list';
 import { createdAt, id, moment } from './columns';
 import { people } from './people';
@@ -43,8 +44,14 @@ export const remarks = pgTable(
       .notNull()
       .references(() => people.id),
     answersId: uuid().references((): AnyPgColumn => remarks.id),
-    /** "readings", "bound", "kernel", … : the sheet's own names of its parts. */
+    /** "readings", "bound", "kernel", … : the list is lib/reviews/remark-part.ts. */
     part: text().notNull(),
+    /** Of a remark on a line of a kernel: its language, its number from 1, and its text as it stood then. */
+    language: text().$type<KernelLanguage>(),
+    line: integer(),
+    quote: text(),
+    /** The version of the text that was read; set by a trigger. */
+    revisionVersion: integer().notNull().default(0),
     text: text().notNull(),
     settledAt: moment(),
     settledById: uuid().references(() => people.id),
@@ -52,7 +59,17 @@ export const remarks = pgTable(
   },
   (t) => [
     check('remark_says_something', sql`length(btrim(${t.text})) > 0`),
+    check(
+      'line_of_a_kernel',
+      sql`(${t.line} is null) = (${t.language} is null) and (${t.line} is null) = (${t.quote} is null) and (${t.line} is null or (${t.part} = 'kernel' and ${t.line} >= 1))`,
+    ),
     check('settled_by_someone', sql`(${t.settledAt} is null) = (${t.settledById} is null)`),
+    // The same words at the same place, sent twice, are said once.
+    uniqueIndex('said_once').on(
+      t.revisionId,
+      t.authorId,
+      sql`md5(${t.part} || '|' || coalesce(${t.language}, '') || '|' || coalesce(${t.line}::text, '') || '|' || coalesce(${t.answersId}::text, '') || '|' || ${t.text})`,
+    ),
     index('remarks_by_revision').on(t.revisionId, t.createdAt),
   ],
 );
