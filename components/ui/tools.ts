@@ -12,6 +12,7 @@ interface Tool {
 /** The places of the book, in the order of the head; one line adds one. */
 export const TOOLS: readonly Tool[] = [
   { name: 'Catalog', href: '/', within: ['/sheets'] },
+  { name: 'Drafting table', href: '/drafts', within: ['/drafts'] },
   { name: 'People', href: '/people', within: [], minRole: 'administrator' },
   { name: 'Ledger', href: '/ledger', within: [], minRole: 'administrator' },
   { name: 'Outbox', href: '/outbox', within: ['/arrived-mail'], minRole: 'administrator' },

@@ -2,6 +2,7 @@
 import type { Facts, Problem } from '@/lib/facts/facts';
 import type { FactsSummary } from '@/lib/facts/facts-summary';
 import type { Equation } from '@/lib/numerics/equation';
+import type { Remark } from '@/lib/reviews/remark';
 import type { TrialView } from '@/lib/trials/trial';
 import type { Definition } from './definition';
 import type { RevisionState } from './revision-state';
@@ -92,7 +93,8 @@ export interface SheetView {
   references: Reference[];
   revisions: RevisionLine[];
   usedBy: { code: string; purpose: string; revision: number }[];
-  remarks: { author: string; role: string; at: string; part: string; text: string }[];
+  /** The oldest first; answers name what they answer. */
+  remarks: Remark[];
   latestTrial: TrialView | null;
   /** Why this revision cannot be vetted now, for those who may vet it; null where nothing stands in the way. */
   vettingObstacle: string | null;

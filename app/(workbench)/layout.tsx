@@ -1,0 +1,17 @@
+import { Head } from '@/components/ui/head';
+import { KeysProvider } from '@/components/ui/keys';
+import { requireActor } from '@/lib/auth/require-actor';
+import { leaveEverywhere } from '../(book)/actions';
+
+/** The frame of the drafting table: for contributors and those above them. */
+export default async function WorkbenchLayout({ children }: { children: React.ReactNode }) {
+  const actor = await requireActor('contributor');
+  return (
+    <KeysProvider>
+      <Head actor={actor} signOutEverywhere={leaveEverywhere} />
+      <main className="wrap" id="content" tabIndex={-1}>
+        {children}
+      </main>
+    </KeysProvider>
+  );
+}

@@ -1,0 +1,50 @@
+/** The browser's side of the engine's worker: the latest question counts, an earlier one under way is given up. */
+import type { Answer, Question } from './analysis-worker';
+import type { LiveAnalysis } from './live-analysis';
+
+export type Heard = { kind: 'analysis'; analysis: LiveAnalysis } | { kind: 'fault'; message: string };
+
+const openWorker = () => new Worker(new URL('./analysis-worker.ts', import.meta.url), { type: 'module' });
+
+export class AnalysisClient {
+  private worker: Worker | null = null;
+  /** Loaded beforehand, so that giving up a question costs no start. */
+  private spare: Worker | null = null;
+  private mark = 0;
+  private isBusy = false;
+
+  /** Asks about a definition; `hear` is called once, unless another question comes first. */
+  ask(definition: unknown, hear: (heard: Heard) => void): void {
+    if (this.isBusy) this.giveUp();
+    const worker = (this.worker ??= openWorker());
+    this.spare ??= openWorker();
+    const mark = ++this.mark;
+    this.isBusy = true;
+    worker.onmessage = (event: MessageEvent<Answer>) => {
+      if (event.data.mark !== mark) return;
+      this.isBusy = false;
+      if ('analysis' in event.data) hear({ kind: 'analysis', analysis: event.data.analysis });
+      else hear({ kind: 'fault', message: event.data.fault });
+    };
+    worker.onerror = (event) => {
+      event.preventDefault();
+      this.giveUp();
+      hear({ kind: 'fault', message: event.message });
+    };
+    worker.postMessage({ mark, definition } satisfies Question);
+  }
+
+  private giveUp(): void {
+    this.worker?.terminate();
+    this.worker = this.spare;
+    this.spare = null;
+    this.isBusy = false;
+  }
+
+  close(): void {
+    this.worker?.terminate();
+    this.spare?.terminate();
+    this.worker = this.spare = null;
+    this.isBusy = false;
+  }
+}
