@@ -17,7 +17,12 @@ export default defineConfig({
     projects: [
       {
         extends: true,
-        test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}', 'tests/reference/**/*.test.ts'] },
+        test: {
+          name: 'unit',
+          include: ['tests/unit/**/*.test.{ts,tsx}', 'tests/reference/**/*.test.ts'],
+          // Exact arithmetic on a machine that has other work to do.
+          testTimeout: 30_000,
+        },
       },
       {
         extends: true,
