@@ -7,7 +7,8 @@ import { none, type Planned } from './kernel-plan';
 import type { KernelInput, KernelLanguage, KernelOptions } from './kernel-request';
 import type { View } from './kernel-source';
 import { planMethod } from './method-plan';
-import { methodDriverView, methodHeader, methodView, type MethodContext } from './method-view';
+import { methodHeader } from './method-header';
+import { methodDriverView, methodView, type MethodContext } from './method-view';
 import { PythonSchemeView } from './python-scheme-view';
 import { planScheme } from './scheme-plan';
 import { kernelPrefix, schemeCalling, schemeNotes, type SchemeContext } from './scheme-words';
@@ -80,14 +81,17 @@ function printableStencil(context: StencilContext): Printable {
 
 function printableMethod(context: MethodContext): Printable {
   const { input, prefix, plan, facts } = context;
+  const reach = facts.imaginaryLimit === null ? null : Number(Number(facts.imaginaryLimit).toPrecision(6));
   const limit =
-    facts.imaginaryLimit === null
-      ? 'no limit'
-      : `|y| <= ${String(Number(Number(facts.imaginaryLimit).toPrecision(6)))}`;
+    reach === null
+      ? 'the whole imaginary axis'
+      : reach === 0
+        ? 'nothing of the imaginary axis'
+        : `the imaginary axis to ${reach}`;
   return {
     kernel: (language) => ({
       prefix,
-      firstLine: `${input.callNumber} r${input.revision}   order ${facts.orderLinear}; on the imaginary axis ${limit}   no halo`,
+      firstLine: `${input.callNumber} r${input.revision}   order ${facts.orderLinear}; stable on ${limit}   no halo`,
       header: methodHeader(context, language),
       template: plan.shape,
       view: methodView(context, language),

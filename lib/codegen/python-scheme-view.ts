@@ -17,6 +17,7 @@ import {
   taylorNode,
   type SchemeContext,
 } from './scheme-words';
+import { wrapStatement } from './wrap-text';
 
 /** Slices of whole arrays, for the start-up that is called once. */
 const SLICED: Dialect = { literal: PYTHON.literal, element: (array, offset) => `at(${array}, ${offset})` };
@@ -171,7 +172,7 @@ export class PythonSchemeView {
       bounded: condition
         ? [
             {
-              outside: `not (${condition})`,
+              outside: wrapStatement(`not (${condition})`, 90),
               message: `f"${this.symbols.map((name) => `${name} = {${name}}`).join(', ')} is outside the stable range ${boundText(bound)}"`,
             },
           ]

@@ -28,7 +28,7 @@ export function wrapStatement(text: string, width: number, more = ''): string {
   while (rest.length > width) {
     const part = rest.slice(0, width);
     const at = Math.max(
-      ...[' + ', ' - ', ' = ', ' / ', ' && ', ' || '].map((b) => part.lastIndexOf(b)),
+      ...[' + ', ' - ', ' = ', ' && ', ' || ', ' .and. ', ' .or. ', ' and ', ' or '].map((b) => part.lastIndexOf(b)),
       part.lastIndexOf(', ') + 1,
     );
     if (at <= 4) break;

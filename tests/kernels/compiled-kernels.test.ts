@@ -23,6 +23,8 @@ const MARCHED: [KernelCase, number[], number][] = [
   ['ssp3c2', [0.8], 1],
   ['ab2c2', [0.05], 2],
   ['ab3c2', [0.3], 3],
+  ['upwindBiased3', [0.7], 1],
+  ['airy', [0.3], 2],
   ['advectionDiffusion', [0.3, 0.2], 1],
 ];
 const METHODS: [KernelCase, number[], number][] = [
@@ -50,7 +52,7 @@ const march = (steps: number, parameters: number[], levels: number): DriverTask 
 beforeAll(() => {
   for (const name of ALL)
     for (const language of KERNEL_LANGUAGES) built.set(`${name} ${language}`, buildKernel(kernelInput(name), language));
-}, 240_000);
+}, 600_000);
 afterAll(() => built.forEach((b) => b.remove()));
 
 describe('a generated kernel', () => {
@@ -174,6 +176,8 @@ describe('bad arguments', () => {
       expect(status('advectionDiffusion', language, task(8, [0.3, 0.6], 1))).toBe(3);
       expect(status('advectionDiffusion', language, task(8, [0.9, 0.4], 1))).toBe(3);
       expect(status('advectionDiffusion', language, task(8, [0.8, NaN], 1))).toBe(2);
+      expect(status('upwindBiased3', language, task(8, [2], 1))).toBe(0);
+      expect(status('upwindBiased3', language, task(8, [1.5], 1))).toBe(3);
       expect(status('forwardCentral', language, task(8, [5], 1))).toBe(0);
       expect(
         status('firstCentral4', language, { kind: 'apply', id: 'a', n: 1, spacing: 1, values: randomField(1, 1) }),

@@ -94,6 +94,22 @@ const DEFINITIONS = {
   ssp3c2: ['AD 011', 'SSP Runge-Kutta 3, central 2', lines('advection', [central2], ssp3)],
   ab2c2: ['AD 012', 'Adams-Bashforth 2, central 2', lines('advection', [central2], ab2)],
   ab3c2: ['AD 013', 'Adams-Bashforth 3, central 2', lines('advection', [central2], ab3)],
+  upwindBiased3: [
+    'AD 015',
+    'Third-order upwind-biased, one step',
+    table('advection', [
+      [1, 0, '1'],
+      [0, -2, '-lambda^3/6 + lambda/6'],
+      [0, -1, 'lambda^3/2 - lambda^2/2 - lambda'],
+      [0, 0, '-lambda^3/2 + lambda^2 + lambda/2 - 1'],
+      [0, 1, 'lambda^3/6 - lambda^2/2 + lambda/3'],
+    ]),
+  ],
+  airy: [
+    'AI 001',
+    'Leapfrog for the Airy equation',
+    lines('airy', [{ kind: 'stencil', derivative: 3, offsets: ['-2', '-1', '0', '1', '2'], weights: null }], leapfrog),
+  ],
   advectionDiffusion: ['AX 001', 'Forward Euler, central 2', lines('advection-diffusion', [central2, second2], euler)],
   firstCentral4: ['ST 004', 'First derivative, central 4', central4],
   firstStaggered4: [

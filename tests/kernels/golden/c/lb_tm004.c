@@ -1,4 +1,4 @@
-/* TM 004 r2   order 4; on the imaginary axis |y| <= 2.82843   no halo */
+/* TM 004 r2   order 4; stable on the imaginary axis to 2.82843   no halo */
 /* levelbook:classical-runge-kutta/2/c/double,periodic:5077f29da812d321b753481db38163ca32f399e725f7e1eca910600a1b683495 */
 /*
  * Entry       TM 004, revision 2: Classical Runge-Kutta (double precision).

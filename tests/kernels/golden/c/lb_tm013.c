@@ -1,4 +1,4 @@
-/* TM 013 r2   order 3; on the imaginary axis |y| <= 0.723627   no halo */
+/* TM 013 r2   order 3; stable on the imaginary axis to 0.723627   no halo */
 /* levelbook:adams-bashforth-3/2/c/double,periodic:b15435a17bf4c87413930f57bea4fbb0022db6109d2a3f9a498e6896a36595fb */
 /*
  * Entry       TM 013, revision 2: Adams-Bashforth 3 (double precision).

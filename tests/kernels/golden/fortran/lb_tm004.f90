@@ -1,4 +1,4 @@
-! TM 004 r2   order 4; on the imaginary axis |y| <= 2.82843   no halo
+! TM 004 r2   order 4; stable on the imaginary axis to 2.82843   no halo
 ! levelbook:classical-runge-kutta/2/fortran/double,periodic:b43f8bfb34d7ca7ac8388f3d1e671f0c738751ee7131e96174125178948870c8
 !
 ! Entry       TM 004, revision 2: Classical Runge-Kutta (double precision).

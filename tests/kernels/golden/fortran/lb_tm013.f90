@@ -1,4 +1,4 @@
-! TM 013 r2   order 3; on the imaginary axis |y| <= 0.723627   no halo
+! TM 013 r2   order 3; stable on the imaginary axis to 0.723627   no halo
 ! levelbook:adams-bashforth-3/2/fortran/double,periodic:ded00c696ae2c68be776aabd4abbfa0b896a48210edb0503f5915a24b52e0d33
 !
 ! Entry       TM 013, revision 2: Adams-Bashforth 3 (double precision).

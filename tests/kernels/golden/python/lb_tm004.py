@@ -1,4 +1,4 @@
-# TM 004 r2   order 4; on the imaginary axis |y| <= 2.82843   no halo
+# TM 004 r2   order 4; stable on the imaginary axis to 2.82843   no halo
 # levelbook:classical-runge-kutta/2/python/double,periodic:da70e5bc78127011b38ac1b6c956ad4c0bc50f62f5fa5903531af4469f45e551
 #
 # Entry       TM 004, revision 2: Classical Runge-Kutta (double precision).

@@ -1,4 +1,4 @@
-# TM 013 r2   order 3; on the imaginary axis |y| <= 0.723627   no halo
+# TM 013 r2   order 3; stable on the imaginary axis to 0.723627   no halo
 # levelbook:adams-bashforth-3/2/python/double,periodic:0636e5213c68ce1634ce2a8763bb151975ddff0cce7e0123bf1106b853522451
 #
 # Entry       TM 013, revision 2: Adams-Bashforth 3 (double precision).
