@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import Link from 'next/link';
 import { redirect } from 'next/navigation';
 import { BrandMark } from '@/components/marks/brand-mark';
 import { safeCallbackUrl } from '@/lib/auth/callback-url';
@@ -33,7 +34,9 @@ export default async function SignInPage({ searchParams }: PageProps<'/sign-in'>
             </h1>
             <SignInForm goTo={goTo} code={one(error) ?? null} demo={await demoAccounts()} />
           </div>
-          <p className="small q foot">New here? Ask the keeper of the book for an account.</p>
+          <p className="small q foot">
+            <Link href="/reset">Forgotten your password?</Link> New here? Ask the keeper of the book for an account.
+          </p>
         </section>
         <section className="art">
           <Cover />

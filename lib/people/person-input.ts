@@ -31,3 +31,6 @@ export const Profile = z.object({
   name: PersonName,
   letterWish: z.enum(LETTER_WISHES, { error: `accepted: ${LETTER_WISHES.join(', ')}` }),
 });
+
+/** The rules of a password ask for the person; here it is only kept from being endless. */
+export const LinkUse = z.object({ secret: z.string().max(100), password: z.string().max(1000) });
