@@ -11,10 +11,10 @@ import { people } from '../schema/people';
 import { revisions } from '../schema/revisions';
 import { trials } from '../schema/trials';
 import { findLatestTrial } from './latest-trial';
+import { listRemarks } from './remarks';
 import { findReview } from './revisions';
 import {
   findReplacement,
-  listRemarks,
   listSignatures,
   listUses,
   listVisibleRevisions,

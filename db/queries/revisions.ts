@@ -120,6 +120,11 @@ export async function lockVettedRevision(tx: Database, entryId: string) {
   return row ?? null;
 }
 
+/** Keeps a revision as it is until the transaction ends: nobody else decides on it or changes its text. */
+export async function lockReview(tx: Database, id: string): Promise<void> {
+  await tx.select({ id: revisions.id }).from(revisions).where(eq(revisions.id, id)).for('update');
+}
+
 /** What the rules of lib/reviews ask, with trial and signatures of the present text. */
 export async function findReview(db: Database, id: string) {
   const [row] = await db

@@ -7,7 +7,7 @@ import type { Database } from '../client';
 import { adoptions } from '../schema/adoptions';
 import { entries } from '../schema/entries';
 import { people } from '../schema/people';
-import { remarks, signatures } from '../schema/reviews';
+import { signatures } from '../schema/reviews';
 import { revisions } from '../schema/revisions';
 import { type Viewer, visibleTo } from './visible-to';
 
@@ -68,22 +68,6 @@ export async function listUses(db: Database, entryId: string) {
     .innerJoin(revisions, eq(revisions.id, adoptions.revisionId))
     .where(and(eq(revisions.entryId, entryId), isNull(adoptions.endedAt)))
     .orderBy(asc(adoptions.code), desc(revisions.number));
-}
-
-export async function listRemarks(db: Database, revisionId: string) {
-  const rows = await db
-    .select({
-      author: people.name,
-      role: people.role,
-      at: remarks.createdAt,
-      part: remarks.part,
-      text: remarks.text,
-    })
-    .from(remarks)
-    .innerJoin(people, eq(people.id, remarks.authorId))
-    .where(eq(remarks.revisionId, revisionId))
-    .orderBy(asc(remarks.createdAt));
-  return rows.map((remark) => ({ ...remark, at: remark.at.toISOString() }));
 }
 
 export async function findReplacement(db: Database, revisionId: string): Promise<SheetView['replacement']> {

@@ -1,11 +1,11 @@
 import 'server-only';
 import { db } from '@/db/client';
-import { insertEvent, insertLetters } from '@/db/queries/house';
-import { findReview, listAdopters, lockVettedRevision, moveRevision } from '@/db/queries/revisions';
+import { findReview } from '@/db/queries/revisions';
 import type { Actor } from '@/lib/people/actor';
 import { Refusal } from '@/lib/refusal';
 import { decisionSentence } from './decision-sentence';
-import { changedMeanwhile, refuseBrokenRule } from './refuse-broken-rule';
+import { putInForce } from './put-in-force';
+import { refuseBrokenRule } from './refuse-broken-rule';
 import { vettingObstacle } from './review-rules';
 
 /**
@@ -18,42 +18,5 @@ export async function vetRevision(actor: Actor, revisionId: string, text: string
   const obstacle = vettingObstacle(actor, review);
   if (obstacle) throw new Refusal('not-allowed', obstacle);
   const sentence = decisionSentence(text);
-  const { slug, number, title, version } = review;
-  const letter = { revisionId, slug, number, title, sentence };
-
-  await refuseBrokenRule(() =>
-    db.transaction(async (tx) => {
-      const before = await lockVettedRevision(tx, review.entryId);
-      if (before) {
-        if (before.number > number)
-          throw new Refusal('not-allowed', `Revision ${before.number} is in force; an earlier one cannot replace it.`);
-        const superseded = await moveRevision(tx, before.id, {
-          from: 'vetted',
-          to: 'superseded',
-          reason: sentence,
-          replacedById: revisionId,
-        });
-        if (!superseded) throw changedMeanwhile();
-        await insertEvent(tx, {
-          kind: 'revision.superseded',
-          actorId: actor.id,
-          subjectId: before.id,
-          reason: sentence,
-          data: { replacedById: revisionId },
-        });
-        const adopters = await listAdopters(tx, before.id);
-        const recalled = { ...letter, revisionId: before.id, number: before.number, replacedByNumber: number };
-        await insertLetters(
-          tx,
-          'recall',
-          adopters.map(({ personId }) => personId),
-          { ...recalled, kind: 'superseded', codes: adopters.map(({ code }) => code) },
-        );
-      }
-      const moved = await moveRevision(tx, revisionId, { from: 'in-review', to: 'vetted', version, reason: sentence });
-      if (!moved) throw changedMeanwhile();
-      await insertEvent(tx, { kind: 'revision.vetted', actorId: actor.id, subjectId: revisionId, reason: sentence });
-      await insertLetters(tx, 'vetted', [review.authorId], letter);
-    }),
-  );
+  await refuseBrokenRule(() => db.transaction((tx) => putInForce(tx, actor, review, sentence)));
 }

@@ -7,17 +7,22 @@ import { Refusal } from '@/lib/refusal';
 import { decisionSentence } from './decision-sentence';
 import { changedMeanwhile } from './refuse-broken-rule';
 import { withdrawalObstacle } from './review-rules';
+import { changeSince } from './review-stamp';
 
 export interface Withdrawal {
   reason: string;
   /** Slug of the entry that stands in its place, where there is one. */
   useInstead?: string | null;
+  /** What the maintainer saw (lib/reviews/review-stamp). */
+  seen?: string;
 }
 
 /** Takes a vetted revision out of use for a reason; every adopter is told in the same transaction. */
 export async function withdrawRevision(actor: Actor, revisionId: string, input: Withdrawal): Promise<void> {
   const review = await findReview(db, revisionId);
   if (!review) throw new Refusal('not-found', 'There is no such revision.');
+  const change = input.seen === undefined ? null : changeSince(input.seen, review);
+  if (change) throw new Refusal('conflict', change);
   const obstacle = withdrawalObstacle(actor, review);
   if (obstacle) throw new Refusal('not-allowed', obstacle);
   const reason = decisionSentence(input.reason);

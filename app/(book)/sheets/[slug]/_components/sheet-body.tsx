@@ -6,9 +6,7 @@ import { Prose } from '@/components/ui/prose';
 import { longDate } from '@/lib/entries/dates';
 import type { SheetView } from '@/lib/entries/entry';
 import { type Drawing, drawingOf } from '@/lib/facts/drawing';
-import type { Reading } from '@/lib/facts/readings';
-import { schemeReadings } from '@/lib/facts/scheme-readings';
-import { stencilReadings, timeMethodReadings } from '@/lib/facts/stencil-readings';
+import { entryReadings } from '@/lib/facts/entry-readings';
 import type { Actor } from '@/lib/people/actor';
 import { Banners } from './banners';
 import { BoundPart } from './bound-part';
@@ -31,13 +29,6 @@ interface SheetBodyProps {
   sheet: SheetView;
   kernel: ShownKernel;
   origin: string;
-}
-
-function readingsOf(sheet: SheetView): readonly Reading[] {
-  const { facts, summary } = sheet;
-  if (!facts || !summary) return [];
-  if (facts.kind === 'scheme') return schemeReadings(facts, summary, observedOrder(sheet.latestTrial));
-  return facts.kind === 'stencil' ? stencilReadings(facts) : timeMethodReadings(facts);
 }
 
 /** The parts that this kind of entry has, in order; their place is their figure on the rod. */
@@ -148,7 +139,7 @@ export function SheetBody({ actor, sheet, kernel, origin }: SheetBodyProps) {
         <Title sheet={sheet} />
         <section id="readings" tabIndex={-1} aria-label="Readings and sketch">
           <div className="spread keep">
-            <Readings rule={drawing.rule} sheet={sheet} readings={readingsOf(sheet)} />
+            <Readings rule={drawing.rule} sheet={sheet} readings={entryReadings(facts, summary, observedOrder(sheet.latestTrial))} />
             <SketchLeaf sheet={sheet} drawing={drawing} kernel={kernel} />
           </div>
         </section>
