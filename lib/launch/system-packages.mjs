@@ -27,6 +27,7 @@ const FOR_TESTS = [
   { name: 'chromium', isInstalled: () => isThere('/usr/bin/chromium') },
   { name: 'python3-sympy', isInstalled: () => canImport('sympy') },
   { name: 'python3-scipy', isInstalled: () => canImport('scipy') },
+  { name: 'valgrind', isInstalled: () => isThere('/usr/bin/valgrind') },
 ];
 
 /** An own PostgreSQL elsewhere needs no server here. */
