@@ -1,18 +1,20 @@
 /**
  * What happens at one special value of the parameter itself: waves with a multiple root on the unit circle, and
  * waves for which the newest level cannot be solved for. The candidate waves come from the exact curve at a
- * rational value within 2^−160 of the special one; the roots there are looked at in double precision, where
- * a double root splits by about 1e-8.
+ * rational value within 2^−160 of the special one. Roots that doubles cannot part (a double root splits by about
+ * 1e-8) are looked at exactly or with many digits.
  */
 import type { AlgebraicNumber } from '../algebraic-number';
 import { atInner } from '../bivariate-polynomial';
 import { derivative, type IntegerPolynomial, squareFreePart } from '../integer-polynomial';
 import { complexArray, polynomialRoots } from '../roots';
+import { rational, type Rational, toNumber } from '../rational';
 import { isolateRealRoots, halved } from '../real-roots';
 import type { CurveComponents } from './critical-values';
+import { type ExactPlace, exactMultiplicity, isMultipleUnitRoot } from './unit-root-multiplicity';
 import { sampled, type WavePolynomial } from './wave-polynomial';
 
-/** Distance at which computed roots count as one, and as being on the circle. */
+/** Distance at which computed roots may be one, and may be on the circle. */
 const CLUSTER = 2e-5;
 
 export interface LimitBehaviour {
@@ -24,32 +26,43 @@ export interface LimitBehaviour {
   readonly modulus: number;
 }
 
-function candidateWaves(curve: CurveComponents, at: AlgebraicNumber, both: boolean, check: () => void): number[] {
+interface Candidate {
+  readonly theta: number;
+  readonly place: ExactPlace;
+}
+
+function candidateWaves(curve: CurveComponents, at: AlgebraicNumber, both: boolean, check: () => void): Candidate[] {
   at.refine(160);
   const { num, den } = at.lo;
   const polynomials: IntegerPolynomial[] = [...curve.waves];
   for (const component of curve.mixed) {
     const f = atInner(component, num, den);
-    if (f.length > 1) polynomials.push(f);
+    // Touching waves first as zeros of the derivative: beside the special value they move by 2^−160, those of f by its root.
     if (f.length > 2) polynomials.push(derivative(f));
+    if (f.length > 1) polynomials.push(f);
   }
-  const places: number[] = [];
+  const places: Rational[] = [];
   for (const polynomial of polynomials) {
     check();
     const f = squareFreePart(polynomial);
     for (let root of isolateRealRoots(f, curve.variable === 'cosine' ? [-1n, 1n] : undefined, check)) {
-      while (root.lo < root.hi && (root.hi - root.lo) << 60n > root.den) root = halved(f, root);
-      places.push(Number((root.lo << 80n) / root.den) / 2 ** 80);
+      while (root.lo < root.hi && (root.hi - root.lo) << 150n > root.den) root = halved(f, root);
+      places.push(rational(root.lo, root.den));
     }
   }
-  const thetas =
-    curve.variable === 'tangent'
-      ? places.map((x) => 2 * Math.atan(x))
-      : places
-          .map((c) => Math.acos(Math.max(-1, Math.min(1, c))))
-          .flatMap((theta) => (both ? [theta, -theta] : [theta]));
-  return [0, Math.PI, ...thetas].filter(
-    (theta, k, all) => all.findIndex((other) => Math.abs(other - theta) < 1e-9) === k,
+  const found = places.flatMap((x): Candidate[] => {
+    const value = toNumber(x);
+    if (curve.variable === 'tangent') return [{ theta: 2 * Math.atan(value), place: { tangent: x } }];
+    const theta = Math.acos(Math.max(-1, Math.min(1, value)));
+    const sides = both ? ([1, -1] as const) : ([1] as const);
+    return sides.map((side) => ({ theta: side * theta, place: { cosine: x, side } }));
+  });
+  const ends: Candidate[] = [
+    { theta: 0, place: { cosine: rational(1n), side: 1 } },
+    { theta: Math.PI, place: { cosine: rational(-1n), side: 1 } },
+  ];
+  return [...ends, ...found].filter(
+    ({ theta }, k, all) => all.findIndex((other) => Math.abs(other.theta - theta) < 1e-9) === k,
   );
 }
 
@@ -64,7 +77,7 @@ export function behaviourAt(
   let modulus = 0;
   const parameter = at.toNumber();
   const levelsAt = sampled(wave)(parameter);
-  for (const theta of candidateWaves(curve, at, !wave.real, check)) {
+  for (const { theta, place } of candidateWaves(curve, at, !wave.real, check)) {
     const levels = levelsAt(theta);
     const scale = Math.max(...levels.map(([re, im]) => Math.hypot(re, im)));
     const [re, im] = levels.at(-1)!;
@@ -74,9 +87,16 @@ export function behaviourAt(
     }
     const roots = rootsOf(levels);
     modulus = Math.max(modulus, ...roots.map(([a, b]) => Math.hypot(a, b)));
-    const repeats = multiplicityOnCircle(roots);
-    const owned = wave.timeOrder === 2 && Math.abs(theta) < 1e-9 && repeats.atOne === 2 && repeats.most === 2;
-    if (repeats.most >= 2 && !owned) multiple.push(theta);
+    const clusters = clustersOnCircle(roots);
+    if (clusters.length === 0) continue;
+    const owned = wave.timeOrder === 2 && Math.abs(theta) < 1e-9 && clusters.every(isDoubleRootAtOne);
+    if (owned) continue;
+    const exactly = at.exact ? exactMultiplicity(wave, at.exact, theta) : null;
+    const isMultiple =
+      exactly === null
+        ? clusters.some(({ at: near, count }) => isMultipleUnitRoot(wave, at.lo, place, near, count))
+        : exactly === 'multiple';
+    if (isMultiple) multiple.push(theta);
   }
   return { multiple, unsolvable, modulus };
 }
@@ -102,16 +122,25 @@ export function rootsOf(levels: readonly (readonly [number, number])[]): [number
   return Array.from(roots.re, (re, k): [number, number] => [re, roots.im[k]!]);
 }
 
-function multiplicityOnCircle(roots: readonly (readonly [number, number])[]): { most: number; atOne: number } {
-  let most = 0;
-  let atOne = 0;
+interface Cluster {
+  readonly at: readonly [number, number];
+  readonly count: number;
+}
+
+const isDoubleRootAtOne = ({ at: [re, im], count }: Cluster) => count === 2 && Math.hypot(re - 1, im) < CLUSTER;
+
+/** Groups of two roots and more on the circle that stand too close to be told apart in doubles, at their means. */
+function clustersOnCircle(roots: readonly (readonly [number, number])[]): Cluster[] {
+  const clusters: Cluster[] = [];
   for (const [re, im] of roots) {
     if (Math.abs(Math.hypot(re, im) - 1) > CLUSTER) continue;
-    const count = roots.filter(([a, b]) => Math.hypot(a - re, b - im) < CLUSTER).length;
-    most = Math.max(most, count);
-    if (Math.hypot(re - 1, im) < CLUSTER) atOne = count;
+    const near = roots.filter(([a, b]) => Math.hypot(a - re, b - im) < CLUSTER);
+    const mean = [0, 1].map((part) => near.reduce((sum, root) => sum + root[part as 0 | 1], 0) / near.length);
+    const at: [number, number] = [mean[0]!, mean[1]!];
+    const isKnown = clusters.some(({ at: [a, b] }) => Math.hypot(a - at[0], b - at[1]) < CLUSTER);
+    if (near.length > 1 && !isKnown) clusters.push({ at, count: near.length });
   }
-  return { most, atOne };
+  return clusters;
 }
 
 /** The wave with the largest root at a value, by sampling and golden-section refinement: told to readers, decides nothing. */

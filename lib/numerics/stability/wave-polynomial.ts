@@ -13,7 +13,7 @@ import {
   trimmed,
   withoutRoot,
 } from '../integer-polynomial';
-import { gcd } from '../rational';
+import { add, compare, gcd, mul, type Rational, rational, sub, ZERO } from '../rational';
 
 export interface GaussianInteger {
   readonly re: bigint;
@@ -53,19 +53,19 @@ export function wavePolynomial(scheme: ScalarScheme): WavePolynomial | string {
     for (const { re, im } of coefficient)
       for (const den of [re.den, im.den]) common = (common / gcd(common, den)) * den;
 
-  const origin = first.offset[0]!;
-  const oldest = terms.reduce((low, { level }) => (level.num < low ? level.num : low), first.level.num);
+  const oldest = terms.reduce((low, { level }) => (compare(level, low) < 0 ? level : low), first.level);
+  const twist = staggering(terms, oldest, first);
+  if (!twist)
+    return 'Exact bounds are computed for whole levels, and for offsets that differ by whole grid spacings within each level and are staggered evenly from level to level.';
   const levels: WaveTerm[][] = [];
   for (const { level, offset, coefficient } of terms) {
-    const shift = offset[0]!.num * origin.den - origin.num * offset[0]!.den;
-    const den = offset[0]!.den * origin.den;
-    if (level.den !== 1n || shift % den !== 0n)
-      return 'Exact bounds are computed for whole levels and for offsets that differ by whole grid spacings.';
-    const at = Number(level.num - oldest);
+    const at = Number(sub(level, oldest).num);
+    // z stands for z e^(i twist θ): staggered levels come onto one grid, and no modulus changes.
+    const shift = sub(sub(offset[0]!, first.offset[0]!), mul(twist, sub(level, first.level)));
     while (levels.length <= at) levels.push([]);
     for (const { powers, re, im } of coefficient)
       levels[at]!.push({
-        wave: Number(shift / den),
+        wave: Number(shift.num),
         power: powers[0]!,
         re: re.num * (common / re.den),
         im: im.num * (common / im.den),
@@ -73,6 +73,30 @@ export function wavePolynomial(scheme: ScalarScheme): WavePolynomial | string {
   }
   return normalized(withoutCommonWaves(levels), scheme.timeOrder);
 }
+
+/**
+ * How far the grid moves from level to level, in grid spacings: the least s for which offset − s · level is the same
+ * up to whole spacings for all terms; null where levels are not whole or there is no such s.
+ */
+function staggering(terms: ScalarScheme['terms'], oldest: Rational, first: ScalarScheme['terms'][number]) {
+  const steps = terms.map(({ level, offset }) => ({
+    levels: sub(level, first.level),
+    shift: sub(offset[0]!, first.offset[0]!),
+  }));
+  if (sub(first.level, oldest).den !== 1n || steps.some(({ levels }) => levels.den !== 1n)) return null;
+  const other = steps.find(({ levels }) => levels.num !== 0n);
+  if (!other) return ZERO;
+  const height = other.levels.num < 0n ? -other.levels.num : other.levels.num;
+  for (let whole = 0n; whole < height; whole++) {
+    const sum = add(other.shift, rational(whole));
+    const twist = mul(sum, rational(1n, other.levels.num));
+    if (steps.every(({ levels, shift }) => sub(shift, mul(twist, levels)).den === 1n))
+      return sub(twist, rational(floorOf(twist)));
+  }
+  return null;
+}
+
+const floorOf = ({ num, den }: Rational) => (num >= 0n ? num / den : -((-num + den - 1n) / den));
 
 /**
  * Without a factor in w that all coefficients share: for its waves the scheme says nothing at all, for the others it

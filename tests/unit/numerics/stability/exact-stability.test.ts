@@ -27,6 +27,33 @@ const LEAPFROG: Row[] = [
   [-1, 0, ['-1']],
 ];
 
+describe('levels staggered by half a grid spacing', () => {
+  it('have exact bounds: Lax-Friedrichs on a staggered grid, |lambda| <= 1/2', () => {
+    const { method, intervals } = bounds(
+      scalarScheme([
+        [1, 0, ['1']],
+        [0, '-1/2', ['-1/2', '-1']],
+        [0, '1/2', ['-1/2', '1']],
+      ]),
+    );
+    expect(method).toBe('exact');
+    expect(intervals.map(({ loExact, hiExact }) => [loExact, hiExact])).toEqual([['-1/2', '1/2']]);
+  });
+
+  it('have exact bounds over two steps: leapfrog between staggered points, a double root at the bound', () => {
+    const [interval] = bounds(
+      scalarScheme([
+        [1, 0, ['1']],
+        [0, '-1/2', ['0', '-2']],
+        [0, '1/2', ['0', '2']],
+        [-1, 0, ['-1']],
+      ]),
+    ).intervals;
+    expect([interval!.loExact, interval!.hiExact, interval!.hiIncluded]).toEqual(['-1/2', '1/2', false]);
+    expect(interval!.hiBehaviour?.theta).toEqual([Math.PI]);
+  });
+});
+
 describe('pitfalls of stability bounds', () => {
   it('finds conservative schemes stable, not degenerate: leapfrog up to its double root', () => {
     const result = bounds(scalarScheme(LEAPFROG));
