@@ -1,11 +1,12 @@
 /**
  * Closed forms of algebraic numbers: a rational, a root of one, (a + b√n)/c or the square root of it, else the
  * minimal polynomial. A factor is looked for by lattice reduction on many digits and then proved to vanish at the
- * number by exact division; the printed form must reproduce 15 digits of a decimal refined independently.
+ * number by exact division; the printed form, read back, must reproduce 25 digits of the number's own bracket.
  */
 import { type AlgebraicNumber } from '../algebraic-number';
 import { degree, gcd, type IntegerPolynomial, polynomialText, primitivePart, trimmed } from '../integer-polynomial';
 import { possibleFactorDegrees } from '../factor-degrees';
+import { agrees, inPrintedUnits, printedValue } from './printed-value';
 import { reducedLattice } from '../lattice-reduction';
 import { formatRational, gcd as gcdOfIntegers, type Rational, rational, toNumber } from '../rational';
 
@@ -141,14 +142,16 @@ function radicalText(minimal: IntegerPolynomial, value: AlgebraicNumber): { text
   return signed(`sqrt(${inner.text})`, Math.sqrt(inner.value));
 }
 
+/** The number to 40 digits, from its bracket. */
+export const refinedValue = (value: AlgebraicNumber): bigint => inPrintedUnits(value.refine(140).lo);
+
 /** @param symbol name of the parameter, for the minimal polynomial */
 export function closedForm(value: AlgebraicNumber, symbol: string, check: () => void = () => undefined): ClosedForm {
   const known = value.exact;
   if (known) return { text: formatRational(known), minimalPolynomial: null };
   const minimal = minimalCandidate(value, check);
   const radical = radicalText(minimal, value);
-  const decimal = Number(value.toDecimal(20));
-  const text = radical && Math.abs(radical.value - decimal) <= 1e-14 * Math.abs(decimal) ? radical.text : null;
+  const text = radical && agrees(printedValue(radical.text), refinedValue(value)) ? radical.text : null;
   const isRational = text !== null && /^-?\d+(\/\d+)?$/.test(text);
   if (isRational) return { text, minimalPolynomial: null };
   const polynomial = polynomialText(minimal, symbol);

@@ -72,7 +72,7 @@ function endAt(context: Context, value: AlgebraicNumber): End {
   return {
     text: value.toDecimal(DIGITS),
     included: behaviour.stableAtLimit,
-    exact: form.text ?? wavenumberMultiple(context.wave, value.toNumber()),
+    exact: form.text ?? wavenumberMultiple(context.wave, value),
     minimalPolynomial: form.minimalPolynomial,
     behaviour,
   };

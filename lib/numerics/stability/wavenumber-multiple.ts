@@ -4,12 +4,18 @@
  */
 import { type PrimeField, primeField } from '../prime-field';
 import { type Rational, rational } from '../rational';
-import { squareRootParts } from './closed-form';
+import { AlgebraicNumber } from '../algebraic-number';
+import { type IntegerPolynomial, multiply, squareFreePart, subtract } from '../integer-polynomial';
+import { refinedValue, squareRootParts } from './closed-form';
+import { agrees, inPrintedUnits, printedValue } from './printed-value';
 import type { WavePolynomial, WaveTerm } from './wave-polynomial';
 
 /** Squares of time-method limits have short denominators; longer ones would be met by chance. */
 const DENOMINATOR_MAX = 3000n;
+/** Of the fraction looked for in double precision; the form that comes of it is then checked to 25 digits. */
 const AGREEMENT = 2e-14;
+/** printedValue counts in units of this. */
+const PRINTED_UNIT = 1e-40;
 
 const PLACES = [1_234_577, 7_654_319, 2_718_281] as const;
 
@@ -41,23 +47,43 @@ function commonDifference(wave: WavePolynomial): { difference: readonly WaveTerm
   return { difference, origin };
 }
 
-/** max κ(θ) of an antisymmetric difference with κ(θ) ~ θ, or null where it is not one. */
-function largestWavenumber(difference: readonly WaveTerm[], origin: number): number | null {
-  const weights = difference.map(({ re, wave }) => ({ k: wave - origin, weight: Number(re) }));
+/** k and w_k of an antisymmetric difference Σ w_k sin kθ · 2i with a slope at θ = 0, k > 0; null where it is not one. */
+function sineWeights(difference: readonly WaveTerm[], origin: number): { k: number; weight: bigint }[] | null {
+  const weights = difference.map(({ re, wave }) => ({ k: wave - origin, weight: re }));
   const isOdd = weights.every(({ k, weight }) => weights.some((other) => other.k === -k && other.weight === -weight));
-  const slope = weights.reduce((sum, { k, weight }) => sum + k * weight, 0);
-  if (!isOdd || slope === 0) return null;
-  const kappa = (theta: number) =>
-    weights.reduce((sum, { k, weight }) => sum + (weight * Math.sin(k * theta)) / slope, 0);
-  const sizes = Array.from({ length: 1025 }, (_, j) => Math.abs(kappa((Math.PI * j) / 1024)));
-  const best = sizes.indexOf(Math.max(...sizes));
-  let [lo, hi] = [(Math.PI * (best - 1)) / 1024, (Math.PI * (best + 1)) / 1024];
-  for (let round = 0; round < 60; round++) {
-    const [left, right] = [lo + (hi - lo) / 3, hi - (hi - lo) / 3];
-    if (Math.abs(kappa(left)) < Math.abs(kappa(right))) lo = left;
-    else hi = right;
+  const slope = weights.reduce((sum, { k, weight }) => sum + BigInt(k) * weight, 0n);
+  return isOdd && slope !== 0n ? weights.filter(({ k }) => k > 0) : null;
+}
+
+/** max |κ(θ)| of κ(θ) = Σ w_k sin kθ / Σ k w_k, squared, to 40 decimals: its waves are roots of Σ k w_k T_k(cos θ). */
+function largestWavenumberSquared(weights: readonly { k: number; weight: bigint }[]): bigint {
+  const reach = Math.max(...weights.map(({ k }) => k));
+  const first: IntegerPolynomial[] = [[1n], [0n, 1n]];
+  const second: IntegerPolynomial[] = [[1n], [0n, 2n]];
+  for (const family of [first, second])
+    while (family.length <= reach)
+      family.push(subtract(multiply([0n, 2n], family.at(-1)!), family.at(-2)!));
+  const sum = (term: (w: { k: number; weight: bigint }) => IntegerPolynomial) =>
+    weights.reduce<IntegerPolynomial>((total, w) => subtract(total, term(w).map((c) => -c)), []);
+  const rate = sum(({ k, weight }) => first[k]!.map((c) => c * weight * BigInt(k)));
+  const shape = sum(({ k, weight }) => second[k - 1]!.map((c) => c * weight));
+  const slope = weights.reduce((total, { k, weight }) => total + BigInt(k) * weight, 0n);
+  let largest = 0n;
+  for (const cosine of AlgebraicNumber.rootsOf(squareFreePart(rate))) {
+    // κ is flat there: an error of 2^−100 in the cosine is one of 2^−200 in κ.
+    const { num, den } = cosine.refine(100).lo;
+    if (num * num > den * den) continue;
+    const height = shape.reduceRight<{ num: bigint; den: bigint }>(
+      (value, c) => ({ num: value.num * num + c * value.den * den, den: value.den * den }),
+      { num: 0n, den: 1n },
+    );
+    const value = inPrintedUnits({
+      num: (den * den - num * num) * height.num ** 2n,
+      den: den * den * height.den ** 2n * slope ** 2n,
+    });
+    if (value > largest) largest = value;
   }
-  return Math.abs(kappa((lo + hi) / 2));
+  return largest;
 }
 
 /** The fraction with the smallest denominator that agrees with a positive number; null where none is short. */
@@ -73,15 +99,19 @@ function shortFraction(x: number): Rational | null {
   return null;
 }
 
-/** @param bound an end of a stable interval, to the precision of a double */
-export function wavenumberMultiple(wave: WavePolynomial, bound: number): string | null {
+/** @param bound an end of a stable interval */
+export function wavenumberMultiple(wave: WavePolynomial, bound: AlgebraicNumber): string | null {
   const common = commonDifference(wave);
-  const largest = common && largestWavenumber(common.difference, common.origin);
-  if (!largest || !Number.isFinite(bound)) return null;
-  const square = shortFraction((bound * largest) ** 2);
-  if (!square) return null;
-  const { outside, inside } = squareRootParts(square);
+  const weights = common && sineWeights(common.difference, common.origin);
+  if (!weights) return null;
+  const square = largestWavenumberSquared(weights);
+  const largest = printedValue('sqrt(square)', { square });
+  const near = bound.toNumber();
+  const fraction = shortFraction((near * Number(largest) * PRINTED_UNIT) ** 2);
+  if (!fraction) return null;
+  const { outside, inside } = squareRootParts(fraction);
   const head = inside === 1n ? String(outside.num) : `${outside.num === 1n ? '' : `${outside.num}*`}sqrt(${inside})`;
   const foot = outside.den === 1n ? 'kappa_max' : `(${outside.den}*kappa_max)`;
-  return `${bound < 0 ? '-' : ''}${head}/${foot}`;
+  const text = `${near < 0 ? '-' : ''}${head}/${foot}`;
+  return agrees(printedValue(text, { kappa_max: largest }), refinedValue(bound)) ? text : null;
 }
