@@ -150,7 +150,12 @@ export const Growth = z.object({
   factor: z.number().nullable(),
   /** At a chosen value: growth a step, and steps until amplification by ten. */
   at: z.object({ parameter: z.number(), growthPerStep: z.number(), stepsToTenfold: z.number().nullable() }).nullable(),
+  /** How the factor K was obtained. */
   method: Method,
+  /** Relative tolerance of K; null where it is read off the growth at a small value. */
+  tolerance: z.string().nullable().optional(),
+  /** How the exponent q was obtained. */
+  exponentMethod: Method.optional(),
 });
 
 export const VERDICTS = [
@@ -180,8 +185,24 @@ export const StabilityFacts = z.object({
     z.object({
       fixed: z.record(z.string(), z.string()),
       intervals: z.array(z.tuple([z.string().nullable(), z.string().nullable()])),
+      method: Method.optional(),
     }),
   ),
+  /** Advection with diffusion: the cuts as decimals, r held fixed. */
+  lambdaLimitAtR: z
+    .array(
+      z.object({
+        r: z.string(),
+        /** Stable intervals of lambda within the range examined; an end null where it goes on. */
+        intervalsLambda: z.array(z.tuple([z.number().nullable(), z.number().nullable()])),
+        examined: z.tuple([z.number(), z.number()]),
+        /** Largest stable lambda of the interval at 0; null where there is no end. */
+        lambdaMaxExact: z.number().nullable(),
+        /** The same in closed form where one is recognised. */
+        lambdaMaxClosedForm: z.string().nullable(),
+      }),
+    )
+    .optional(),
   /** Several dimensions: bounds along single directions. */
   singleDirection: z.array(z.object({ parameter: z.string(), lo: z.string().nullable(), hi: z.string().nullable() })),
   method: Method,

@@ -143,7 +143,9 @@ export function schemeFacts(
   const { stability, meant } = stabilityOf(definition, scheme, budget);
   budget.progress(0.8, 'dissipation');
   const values = representativeValues(scheme, stability, order.specialValues);
-  const dissipation = order.consistent && !budget.isSpent() ? schemeDissipationFacts(meant, values) : null;
+  // A region without a stable pair on its cuts has no inside at which to judge damping.
+  const isInside = stability.kind === 'one-parameter' || stability.lambdaLimitAtR !== undefined;
+  const dissipation = order.consistent && isInside && !budget.isSpent() ? schemeDissipationFacts(meant, values) : null;
   const at = scheme.parameters.map((name, k) => `${name} = ${formatRational(values[k]!)}`).join(', ');
   const axes = scheme.dims === 1 ? 0 : scheme.dims;
   budget.progress(1, 'done');

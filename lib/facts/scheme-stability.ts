@@ -3,7 +3,7 @@ import type { Budget } from '@/lib/numerics/budget';
 import type { CanonicalScheme } from '@/lib/numerics/canonical-scheme';
 import { CONVENTIONS } from '@/lib/numerics/equation';
 import { schemeDissipation } from '@/lib/numerics/dissipation';
-import { formatRational, rational, type Rational } from '@/lib/numerics/rational';
+import { formatRational, parseRational, rational, toNumber, type Rational } from '@/lib/numerics/rational';
 import { withParameters } from '@/lib/numerics/restricted-scheme';
 import { analyseStability } from '@/lib/numerics/stability/analyse-stability';
 import type { WorkBudget } from '@/lib/numerics/stability/stability-result';
@@ -28,10 +28,22 @@ function nearbyFraction(value: number): Rational {
 
 const numberOf = (text: string | null) => (text === null ? null : Number(text));
 
+/** A stable pair [lambda, r] on one of the cuts, half way to its end; null without one. */
+function stablePair({ lambdaLimitAtR = [] }: StabilityFacts): Rational[] | null {
+  const stretches = lambdaLimitAtR.flatMap(({ r, intervalsLambda }) =>
+    intervalsLambda.map(([lo, hi]) => ({ r: parseRational(r), lo: Math.max(0, lo ?? 0), hi })),
+  );
+  const usable = stretches.filter(({ lo, hi }) => hi === null || hi > lo);
+  const chosen = usable.find(({ r }) => toNumber(r) >= 0.25) ?? usable.at(-1);
+  if (!chosen) return null;
+  const { r, lo, hi } = chosen;
+  return [nearbyFraction(hi === null ? lo + 0.5 : (lo + hi) / 2), r];
+}
+
 /**
  * Half the bound of the interval that reaches furthest from 0, as a simple fraction; ten where there is no bound and
  * one half where nothing is stable. Two fifths where half the bound is an exact shift, and for waves in several
- * dimensions. All parameters share one value.
+ * dimensions. All parameters share one value, but for advection with diffusion.
  */
 export function representativeValues(
   scheme: CanonicalScheme,
@@ -42,6 +54,8 @@ export function representativeValues(
   const large = isTransport ? 10 : scheme.dims === 1 ? 30 : 20;
   const isRadial = scheme.timeOrder === 2 && scheme.dims > 1;
   const share = (value: Rational) => scheme.parameters.map(() => value);
+  const pair = stability.kind === 'two-parameter' ? stablePair(stability) : null;
+  if (pair) return pair;
   const [first] = stability.intervals.filter((i) => i.hi === null || Number(i.hi) > 0).concat(stability.intervals);
   if (!first) return share(rational(1, 2));
   const [lo, hi] = [numberOf(first.lo), numberOf(first.hi)];

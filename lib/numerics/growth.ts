@@ -4,9 +4,12 @@
  * ln|z| of every unit root at p = 0 is expanded as a double series in p and in the distance t of the wave from one
  * where the growth is decided. On the scale t = tau p^a the terms on one edge of the Newton polygon dominate; the
  * exponent is the smallest j + a k over edges whose sum is positive for some tau, K its maximum over tau. At a
- * fixed wave (a = 0) the leading power of p is maximised over all waves directly. Where roots coincide at p = 0
+ * fixed wave (a = 0) the leading power of p is maximised over all waves directly. Which terms are there at all is
+ * decided exactly in one dimension, and the exponent with it; K is a double. Where roots coincide at p = 0
  * the series do not exist, and the exponent is fitted to the growth at 0.08, 0.04, …, 0.0025.
  */
+import type { ScalarScheme } from './canonical-scheme';
+import { type PatternBase, vanishingPattern } from './growth-pattern';
 import type { NumericScheme } from './numeric-scheme';
 import { coefficientsAt } from './numeric-scheme';
 import { complexArray, polynomialRoots } from './roots';
@@ -19,7 +22,12 @@ export interface GrowthAsymptotics {
   /** K of max|z| − 1 ~ K |p|^q; null where only the exponent was found. */
   factor: number | null;
   at: { parameter: number; growthPerStep: number; stepsToTenfold: number | null } | null;
-  method: 'exact' | 'numeric';
+  /** How K was obtained. */
+  method: 'numeric';
+  /** Relative tolerance of K where the series give it; null where it is read off the growth at the smallest value tried. */
+  tolerance: string | null;
+  /** 'exact': the terms of the series that decide q are known to be there, and those before them to be absent. */
+  exponentMethod: 'exact' | 'numeric';
 }
 
 /** The value at which growth per step is shown. */
@@ -29,9 +37,28 @@ const K_MAX = 12;
 const UNIT = 1e-7;
 const NEGLIGIBLE = 1e-9;
 
+/** Of K, from series in double precision refined over tau or over the waves. */
+const FACTOR_TOLERANCE = '1e-8';
+
 interface Leading {
   exponent: number;
   factor: number;
+  /** False where a term was taken for absent because it is small. */
+  isExact: boolean;
+}
+type Root = { readonly re: number; readonly im: number };
+
+/** k where a root is i^k to rounding; null for other points of the circle. */
+function quarterOf({ re, im }: Root): number | null {
+  const k = ((Math.round((2 * Math.atan2(im, re)) / Math.PI) % 4) + 4) % 4;
+  return Math.hypot(re - [1, 0, -1, 0][k]!, im - [0, 1, 0, -1][k]!) < 1e-9 ? k : null;
+}
+
+/** Exactly vanishing terms in one dimension; null elsewhere. */
+function patternAt(scalar: ScalarScheme | null, base: PatternBase, root: Root, kMax: number): boolean[] | null {
+  const quarter = quarterOf(root);
+  if (!scalar || scalar.dims !== 1 || scalar.parameters.length !== 1 || quarter === null) return null;
+  return vanishingPattern(scalar, base, quarter, { jMax: J_MAX, kMax });
 }
 
 /** Unit roots at p = 0 for one wave; null where one is outside the circle or two coincide on it. */
@@ -136,14 +163,15 @@ function largestOverScale(terms: readonly { c: number; k: number }[]): number {
 }
 
 /** Smallest exponent with growth among the edges of the Newton polygon of Σ c p^j t^k. */
-function polygonGrowth(series: DoubleSeries, side: 1 | -1): Leading | null {
+function polygonGrowth(series: DoubleSeries, side: 1 | -1, absent: readonly boolean[] | null): Leading | null {
   const width = series.kMax + 1;
   const scale = Math.max(...Array.from(series.re, Math.abs));
   const points: { j: number; k: number; c: number }[] = [];
   for (let j = 0; j <= series.jMax; j++)
     for (let k = 0; k <= series.kMax; k++) {
       const c = series.re[j * width + k]! * (side < 0 && j % 2 === 1 ? -1 : 1);
-      if (Math.abs(c) > NEGLIGIBLE * Math.min(1, scale)) points.push({ j, k, c });
+      const isThere = absent ? !absent[j * width + k] : Math.abs(c) > NEGLIGIBLE * Math.min(1, scale);
+      if (isThere) points.push({ j, k, c });
     }
   const slopes = new Set<number>();
   for (const x of points)
@@ -154,7 +182,7 @@ function polygonGrowth(series: DoubleSeries, side: 1 | -1): Leading | null {
     if (best && exponent >= best.exponent - 1e-9) continue;
     const edge = points.filter((p) => p.j + a * p.k < exponent + 1e-9);
     const factor = largestOverScale(edge);
-    if (factor > 1e-12) best = { exponent, factor };
+    if (factor > 1e-12) best = { exponent, factor, isExact: absent !== null };
   }
   return best;
 }
@@ -176,7 +204,7 @@ function fixedWaveGrowth(scheme: NumericScheme, side: 1 | -1, perPi: number): Le
         const c = series.re[j]! * (side < 0 && j % 2 === 1 ? -1 : 1);
         if (Math.abs(c) < NEGLIGIBLE) continue;
         if (c > 0 && (!own || j < own.exponent || (j === own.exponent && c > own.factor)))
-          own = { exponent: j, factor: c };
+          own = { exponent: j, factor: c, isExact: false };
         break;
       }
     }
@@ -227,10 +255,21 @@ function corners(dims: number): number[][] {
   );
 }
 
-function seriesGrowth(scheme: NumericScheme, side: 1 | -1): Leading | null | 'undefined' {
+/** Whether no unit root at p = 0 has a term of a lower power than the one that grows, at any wave. */
+function isLowestPower(scheme: NumericScheme, scalar: ScalarScheme | null, exponent: number): boolean {
+  if (exponent <= 1) return true;
+  const roots = unitRootsAtZero(scheme, new Array<number>(scheme.dims).fill(1));
+  return (roots ?? []).every((root) => {
+    const absent = patternAt(scalar, 'any wave', root, 0);
+    return absent !== null && absent.slice(1, exponent).every((isAbsent) => isAbsent);
+  });
+}
+
+function seriesGrowth(scheme: NumericScheme, scalar: ScalarScheme | null, side: 1 | -1): Leading | null | 'undefined' {
   const perPi = { 1: 48, 2: 12, 3: 6 }[scheme.dims];
-  const fixed = fixedWaveGrowth(scheme, side, perPi);
-  if (fixed === 'undefined') return fixed;
+  const found = fixedWaveGrowth(scheme, side, perPi);
+  if (found === 'undefined') return found;
+  const fixed = found && { ...found, isExact: isLowestPower(scheme, scalar, found.exponent) };
   // No scale of waves can grow with a lower power of p than a wave held fixed at power 1.
   if (fixed?.exponent === 1) return fixed;
   let best: Leading | null = fixed;
@@ -241,7 +280,8 @@ function seriesGrowth(scheme: NumericScheme, side: 1 | -1): Leading | null | 'un
       for (const direction of RAYS[scheme.dims]) {
         const series = rootLogarithm(scheme, base, direction, root, J_MAX, K_MAX);
         if (!series) return 'undefined';
-        const local = polygonGrowth(series, side);
+        const absent = patternAt(scalar, base[0] === 0 ? 'zero' : 'pi', root, K_MAX);
+        const local = polygonGrowth(series, side, absent);
         if (
           local &&
           (!best ||
@@ -262,10 +302,12 @@ function rationalText(value: number): string | null {
   return null;
 }
 
+const FITTED = { method: 'numeric', tolerance: null, exponentMethod: 'numeric' } as const;
+
 /** Exponent from the growth at halved parameters, for roots that split like a fractional power of p. */
 function fittedGrowth(scheme: NumericScheme, side: 1 | -1): GrowthAsymptotics | null {
   const atZero = spectralRadius(scheme, [side * 1e-9]).modulus - 1;
-  if (atZero > 1e-3) return { q: '0', factor: atZero, at: null, method: 'numeric' };
+  if (atZero > 1e-3) return { q: '0', factor: atZero, at: null, ...FITTED };
   const growth = [0.08, 0.04, 0.02, 0.01, 0.005, 0.0025].map((p) => spectralRadius(scheme, [side * p]).modulus - 1);
   if (growth.some((g) => g < 1e-11)) return null;
   const slopes = growth.slice(1).map((g, k) => Math.log2(growth[k]! / g));
@@ -279,20 +321,32 @@ function fittedGrowth(scheme: NumericScheme, side: 1 | -1): GrowthAsymptotics | 
       q = { text: den === 1 ? String(num) : `${num}/${den}`, value: num / den };
   }
   if (!q) return null;
-  return { q: q.text, factor: growth[growth.length - 1]! / 0.0025 ** q.value, at: null, method: 'numeric' };
+  return { q: q.text, factor: growth[growth.length - 1]! / 0.0025 ** q.value, at: null, ...FITTED };
 }
 
 /**
  * Growth of a scheme of one parameter that is unstable for all small values on one side.
  * @param side 1 for p > 0, −1 for p < 0
+ * @param scalar the exact form of the scheme, by which the exponent can be exact
  * @returns null where no growth is found
  */
-export function growthAsymptotics(scheme: NumericScheme, side: 1 | -1): GrowthAsymptotics | null {
-  const leading = seriesGrowth(scheme, side);
+export function growthAsymptotics(
+  scheme: NumericScheme,
+  side: 1 | -1,
+  scalar: ScalarScheme | null = null,
+): GrowthAsymptotics | null {
+  const leading = seriesGrowth(scheme, scalar, side);
   const text = leading && leading !== 'undefined' ? rationalText(leading.exponent) : null;
   const found: GrowthAsymptotics | null =
     leading && leading !== 'undefined' && text
-      ? { q: text, factor: leading.factor, at: null, method: 'exact' }
+      ? {
+          q: text,
+          factor: leading.factor,
+          at: null,
+          method: 'numeric',
+          tolerance: FACTOR_TOLERANCE,
+          exponentMethod: leading.isExact ? 'exact' : 'numeric',
+        }
       : leading === null
         ? null
         : fittedGrowth(scheme, side);

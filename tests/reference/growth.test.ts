@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { growthAsymptotics } from '@/lib/numerics/growth';
-import { compileScheme } from '@/lib/numerics/numeric-scheme';
+import { characteristicOf, compileScheme } from '@/lib/numerics/numeric-scheme';
 import { variable } from '@/lib/numerics/polynomial';
 import { withParameters } from '@/lib/numerics/restricted-scheme';
 import { CASES, schemeFrom } from './amplification-case';
@@ -37,16 +37,16 @@ const thirdCoefficientEighth = {
   b: ['0', '0', '1'],
 };
 
-const numeric = (definition: unknown) => {
+const withOneNumber = (definition: unknown) => {
   const scheme = schemeFrom(definition);
-  return compileScheme(
-    withParameters(
-      scheme,
-      ['p'],
-      scheme.parameters.map(() => variable(1, 0)),
-    ),
+  return withParameters(
+    scheme,
+    ['p'],
+    scheme.parameters.map(() => variable(1, 0)),
   );
 };
+const numeric = (definition: unknown) => compileScheme(withOneNumber(definition));
+const scalarOf = (definition: unknown) => characteristicOf(withOneNumber(definition)).scalar;
 
 describe('growth exponents', () => {
   it.each([
@@ -77,6 +77,10 @@ describe('growth exponents', () => {
     const growth = growthAsymptotics(numeric(definition), 1)!;
     expect(growth.q).toBe(q);
     expect(growth.factor).toBeCloseTo(factor, 9);
+    expect(growth).toMatchObject({ method: 'numeric', tolerance: '1e-8', exponentMethod: 'numeric' });
+    const known = growthAsymptotics(numeric(definition), 1, scalarOf(definition))!;
+    expect([known.q, known.exponentMethod]).toEqual([q, 'exact']);
+    expect(known.factor).toBeCloseTo(factor, 9);
   });
 
   it('finds the square root by which a double root of rho on the unit circle splits', () => {

@@ -33,19 +33,25 @@ export interface StabilityAnalysis {
   verdict: StabilityVerdict;
   intervals: StableInterval[];
   isolatedStablePoints: string[];
-  growth: { positive: Growth | null; negative: Growth | null } | null;
+  growth: { positive: GrowthAsymptotics | null; negative: GrowthAsymptotics | null } | null;
   lostAt: StabilityLoss | null;
   region: string | null;
-  cuts: { fixed: Record<string, string>; intervals: [string | null, string | null][] }[];
+  cuts: { fixed: Record<string, string>; intervals: [string | null, string | null][]; method: StabilityMethod }[];
+  /** Advection with diffusion only. */
+  lambdaLimitAtR?: LambdaLimit[];
   singleDirection: { parameter: string; lo: string | null; hi: string | null }[];
   method: StabilityMethod;
   note: string | null;
 }
-export interface Growth {
-  q: string;
-  factor: number | null;
-  at: { parameter: number; growthPerStep: number; stepsToTenfold: number | null } | null;
-  method: StabilityMethod;
+/** Stable speeds at one diffusion number, as decimals. */
+export interface LambdaLimit {
+  r: string;
+  /** Within the range examined; an end null where the interval goes on beyond it. */
+  intervalsLambda: [number | null, number | null][];
+  examined: [number, number];
+  /** End of the interval that holds 0; null where it has none. */
+  lambdaMaxExact: number | null;
+  lambdaMaxClosedForm: string | null;
 }
 
 const DEFAULT_BUDGET: WorkBudget = { timeLimitMs: 20_000 };
@@ -173,8 +179,9 @@ const UNDECIDED: StabilityResult = {
 
 function growthOf(scheme: CanonicalScheme, sides: readonly (1 | -1)[]): StabilityAnalysis['growth'] {
   const numeric = compileScheme(scheme);
+  const { scalar } = characteristicOf(scheme);
   const on = (side: 1 | -1): GrowthAsymptotics | null =>
-    sides.includes(side) ? growthAsymptotics(numeric, side) : null;
+    sides.includes(side) ? growthAsymptotics(numeric, side, scalar) : null;
   const positive = on(1);
   const negative = on(-1);
   return positive || negative ? { positive, negative } : null;
@@ -288,12 +295,38 @@ function equalParameters(scheme: CanonicalScheme, budget: WorkBudget): Stability
   };
 }
 
+const STRENGTH: readonly StabilityMethod[] = ['exact', 'certified', 'numeric'];
+/** Several answers together are as strong as the weakest of them. */
+const weakestOf = (methods: readonly StabilityMethod[]): StabilityMethod =>
+  STRENGTH.findLast((method) => methods.includes(method)) ?? 'numeric';
+
+/** Range of speeds in which limits at fixed diffusion numbers are listed. */
+const LAMBDA_EXAMINED: [number, number] = [0, 8];
+
+function lambdaLimit(r: string, intervals: readonly StableInterval[]): LambdaLimit {
+  const [from, to] = LAMBDA_EXAMINED;
+  const inside = intervals.filter(
+    ({ lo, hi }) => (hi === null || Number(hi) >= from) && (lo === null || Number(lo) <= to),
+  );
+  const main = inside.find(({ lo }) => lo === null || Number(lo) <= 0);
+  return {
+    r,
+    intervalsLambda: inside.map(({ lo, hi }) => [
+      lo === null ? null : Math.max(from, Number(lo)),
+      hi === null || Number(hi) > to ? null : Number(hi),
+    ]),
+    examined: [from, to],
+    lambdaMaxExact: main?.hi ? Number(main.hi) : null,
+    lambdaMaxClosedForm: main?.hiExact ?? null,
+  };
+}
+
 /** Advection with diffusion: intervals of the first number at chosen values of the second, and the region if known. */
 function twoParameters(scheme: CanonicalScheme, budget: WorkBudget): StabilityAnalysis {
   const started = performance.now();
   const [first, second] = scheme.parameters as [string, string];
-  let method: StabilityMethod = 'exact';
   let isComplete = true;
+  const limits: LambdaLimit[] = [];
   const cuts = CUTS.flatMap((value) => {
     const cut = withParameters(scheme, [first], [variable(1, 0), constant(1, parseRational(value))]);
     const outcome = oneParameter(cut, {
@@ -304,12 +337,12 @@ function twoParameters(scheme: CanonicalScheme, budget: WorkBudget): StabilityAn
       isComplete = false;
       return [];
     }
-    if (outcome.result.method !== 'exact') method = 'numeric';
+    if (second === 'r') limits.push(lambdaLimit(value, outcome.result.intervals));
     const intervals = outcome.result.intervals.map((i): [string | null, string | null] => [
       i.loExact ?? i.lo,
       i.hiExact ?? i.hi,
     ]);
-    return [{ fixed: { [second]: value }, intervals }];
+    return [{ fixed: { [second]: value }, intervals, method: outcome.result.method }];
   });
   const { scalar } = characteristicOf(scheme);
   const until = performance.now() + remaining(budget, started).timeLimitMs;
@@ -325,8 +358,9 @@ function twoParameters(scheme: CanonicalScheme, budget: WorkBudget): StabilityAn
     lostAt: null,
     region: region?.text ?? null,
     cuts,
+    ...(limits.length > 0 && { lambdaLimitAtR: limits }),
     singleDirection: [],
-    method,
+    method: weakestOf(cuts.map((cut) => cut.method)),
     note: isComplete ? null : 'Some cuts were not decided within the time budget.',
   };
 }
