@@ -28,10 +28,7 @@ export function CatalogBook({ lines, formulas }: CatalogBookProps) {
   const { asked, conditions: inForce, sorting, ask, setCondition, clearConditions, sortBy } = useCatalogAddress();
   const [text, setText] = useState(asked);
   const wanted = useDeferredValue(text);
-  useEffect(() => {
-    const timer = setTimeout(() => ask(text), ADDRESS_PAUSE_MS);
-    return () => clearTimeout(timer);
-  }, [text, ask]);
+  const keepText = useTextInAddress(text, asked, ask);
 
   const conditions = useMemo(() => conditionsOf(lines), [lines]);
   const search = useMemo(() => catalogSearch(lines), [lines]);
@@ -47,7 +44,7 @@ export function CatalogBook({ lines, formulas }: CatalogBookProps) {
   const [slug, setSlug] = useState<string | null>(null);
   const chosen = shown.find((line) => line.slug === slug) ?? shown[0] ?? null;
   const field = useRef<HTMLInputElement>(null);
-  useListKeys(shown, chosen, setSlug, field);
+  useListKeys(shown, chosen, setSlug, field, keepText);
 
   return (
     <>
@@ -58,7 +55,7 @@ export function CatalogBook({ lines, formulas }: CatalogBookProps) {
         onCondition={setCondition}
         onClear={clearConditions}
       />
-      <div className="book">
+      <div className="book" onClickCapture={keepText}>
         <section className="lines" aria-label="Entries">
           {shown.length > 0 ? (
             <LineList
@@ -89,12 +86,29 @@ export function CatalogBook({ lines, formulas }: CatalogBookProps) {
   );
 }
 
+/**
+ * Writes the text to the address once typing pauses.
+ * @returns writes it at once: a pending change of the address would cancel a page that is being opened
+ */
+function useTextInAddress(text: string, asked: string, ask: (text: string) => void): () => void {
+  const timer = useRef<ReturnType<typeof setTimeout>>(undefined);
+  useEffect(() => {
+    if (text !== asked) timer.current = setTimeout(() => ask(text), ADDRESS_PAUSE_MS);
+    return () => clearTimeout(timer.current);
+  }, [text, asked, ask]);
+  return useCallback(() => {
+    clearTimeout(timer.current);
+    if (text !== asked) ask(text);
+  }, [text, asked, ask]);
+}
+
 /** The keys of the list: `/`, j and k or arrows, Enter, c. */
 function useListKeys(
   shown: readonly CatalogLine[],
   chosen: CatalogLine | null,
   choose: (slug: string) => void,
   field: React.RefObject<HTMLInputElement | null>,
+  keepText: () => void,
 ) {
   const router = useRouter();
   const move = useCallback(
@@ -114,10 +128,17 @@ function useListKeys(
       { keys: ['/'], label: 'Look for something', run: () => field.current?.focus() },
       { keys: ['j', 'ArrowDown'], label: 'Next line', run: () => move(1) },
       { keys: ['k', 'ArrowUp'], label: 'Line before', run: () => move(-1) },
-      { keys: ['Enter'], label: 'Open the sheet', run: () => chosen && router.push(`/sheets/${chosen.slug}`) },
+      {
+        keys: ['Enter'],
+        label: 'Open the sheet',
+        run: () => {
+          keepText();
+          if (chosen) router.push(`/sheets/${chosen.slug}`);
+        },
+      },
       { keys: ['c'], label: 'Copy the C kernel', run: () => document.getElementById('copy-chosen')?.click() },
     ],
-    [move, chosen, router, field],
+    [move, chosen, router, field, keepText],
   );
   useKeys(deeds);
 }
