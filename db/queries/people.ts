@@ -64,12 +64,11 @@ export async function listPeople(db: Database) {
       demo: people.demo,
       createdAt: people.createdAt,
       hasPassword: sql<boolean>`${people.passwordHash} is not null`,
-      seenAt: sql`(select max(seen_at) from ${sessions} where ${sessions.personId} = ${people.id})`.mapWith(
-        sessions.seenAt,
-      ),
+      // Written out: in the columns of a single table the name of that table is left out, and `id` would be theirs.
+      seenAt: sql`(select max(s.seen_at) from sessions s where s.person_id = people.id)`.mapWith(sessions.seenAt),
       /** Until when an invitation that was sent can be taken up. */
-      invitedUntil: sql`(select max(expires_at) from ${links} where ${links.personId} = ${people.id}
-        and ${links.purpose} = 'invitation' and ${links.endedAt} is null)`.mapWith(links.expiresAt),
+      invitedUntil: sql`(select max(l.expires_at) from links l where l.person_id = people.id
+        and l.purpose = 'invitation' and l.ended_at is null)`.mapWith(links.expiresAt),
     })
     .from(people)
     .orderBy(asc(sql`lower(${people.name})`), asc(people.id));

@@ -11,7 +11,9 @@ const WHAT: readonly string[] = [...EVENT_NOUNS, ...EVENT_KINDS];
 
 const FIELDS = {
   /** Id of a person, or "house" where the house itself acted. */
-  who: z.union([z.uuid(), z.literal('house')], { error: 'accepted: somebody of this house' }),
+  who: z
+    .string()
+    .refine((text) => text === 'house' || z.uuid().safeParse(text).success, 'accepted: somebody of this house'),
   /** A noun or a kind. */
   what: z.string().refine((text) => WHAT.includes(text), 'accepted: one of the list'),
   /** Address of an entry. */
