@@ -29,7 +29,7 @@ function conditions({ who, what, about, why, from, to, before }: LedgerFilter): 
  * one before whatever is written meanwhile.
  */
 export async function listEvents(db: Database, filter: LedgerFilter, limit: number) {
-  return db
+  const rows = await db
     .select({
       id: events.id,
       kind: events.kind,
@@ -38,7 +38,8 @@ export async function listEvents(db: Database, filter: LedgerFilter, limit: numb
       data: events.data,
       actor: actors.name,
       subjectId: events.subjectId,
-      revision: { number: revisions.number, title: revisions.title, slug: entries.slug },
+      revision: { number: revisions.number, title: revisions.title },
+      slug: entries.slug,
       person: { name: subjects.name, email: subjects.email },
     })
     .from(events)
@@ -49,6 +50,10 @@ export async function listEvents(db: Database, filter: LedgerFilter, limit: numb
     .where(conditions(filter))
     .orderBy(desc(events.id))
     .limit(limit);
+  return rows.map(({ revision, slug, ...event }) => ({
+    ...event,
+    revision: revision && slug !== null ? { ...revision, slug } : null,
+  }));
 }
 export type ListedEvent = Awaited<ReturnType<typeof listEvents>>[number];
 

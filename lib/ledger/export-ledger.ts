@@ -8,9 +8,9 @@ const BATCH = 500;
 const COLUMNS = ['number', 'when', 'who', 'what', 'about', 'address', 'why', 'particulars'];
 
 const subjectOf = ({ revision, person }: ListedEvent): [string, string] => {
-  if (revision?.title !== undefined && revision.slug)
+  if (revision)
     return [`${revision.title}, revision ${revision.number}`, `/sheets/${revision.slug}/${revision.number}`];
-  return person?.name ? [person.name, person.email] : ['', ''];
+  return person ? [person.name, person.email] : ['', ''];
 };
 
 /** The ledger as CSV, the latest first, read in portions: however long it is, little of it is in memory. */
