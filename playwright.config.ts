@@ -7,8 +7,9 @@ export default defineConfig({
   testDir: 'tests/e2e',
   outputDir: 'test-results',
   workers: 1,
-  timeout: 60_000,
-  expect: { timeout: 10_000 },
+  // A page may be shown while the worker compiles on the same two cores.
+  timeout: 180_000,
+  expect: { timeout: 20_000 },
   use: {
     baseURL: process.env.LEVELBOOK_URL ?? 'http://127.0.0.1:3000',
     browserName: 'chromium',
