@@ -30,6 +30,7 @@ export async function proxy(request: NextRequest) {
 }
 
 export const config = {
-  // Files of the build and of public/ need no policy.
-  matcher: ['/((?!_next/static|_next/image|favicon.ico|icon.svg|robots.txt).*)'],
+  // Files of the build and of public/ need no policy. Attachments have their own, and a body that passed through here
+  // would be cut at 10 MB without a word.
+  matcher: ['/((?!_next/static|_next/image|favicon.ico|icon.svg|robots.txt|attachments(?:/|$)).*)'],
 };

@@ -1,6 +1,7 @@
 import { Head } from '@/components/ui/head';
 import { KeysProvider } from '@/components/ui/keys';
 import { requireActor } from '@/lib/auth/require-actor';
+import { countWaiting } from '@/lib/reviews/count-waiting';
 import { leaveEverywhere } from '../(book)/actions';
 
 /** The frame of the drafting table: for contributors and those above them. */
@@ -8,7 +9,7 @@ export default async function WorkbenchLayout({ children }: { children: React.Re
   const actor = await requireActor('contributor');
   return (
     <KeysProvider>
-      <Head actor={actor} signOutEverywhere={leaveEverywhere} />
+      <Head actor={actor} waiting={await countWaiting(actor)} signOutEverywhere={leaveEverywhere} />
       <main className="wrap" id="content" tabIndex={-1}>
         {children}
       </main>

@@ -102,7 +102,10 @@ export async function listVettedEntries(db: Database) {
     .innerJoin(entries, eq(entries.id, revisions.entryId))
     .where(eq(revisions.state, 'vetted'))
     .orderBy(asc(entries.letters), asc(entries.number));
-  return rows.map(({ letters, entryNumber, ...row }) => ({ ...row, callNumber: formatCallNumber(letters, entryNumber) }));
+  return rows.map(({ letters, entryNumber, ...row }) => ({
+    ...row,
+    callNumber: formatCallNumber(letters, entryNumber),
+  }));
 }
 export type VettedEntry = Awaited<ReturnType<typeof listVettedEntries>>[number];
 
@@ -127,5 +130,8 @@ export async function listBuildingBlocks(db: Database): Promise<BuildingBlock[]>
     .innerJoin(entries, eq(entries.id, revisions.entryId))
     .where(and(eq(revisions.state, 'vetted'), ne(entries.kind, 'scheme')))
     .orderBy(asc(entries.letters), asc(entries.number));
-  return rows.map(({ letters, entryNumber, ...row }) => ({ ...row, callNumber: formatCallNumber(letters, entryNumber) }));
+  return rows.map(({ letters, entryNumber, ...row }) => ({
+    ...row,
+    callNumber: formatCallNumber(letters, entryNumber),
+  }));
 }

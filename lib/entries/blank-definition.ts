@@ -45,8 +45,7 @@ const central = (derivative: number): StencilDefinition => {
 /** Staggered velocity and pressure by leapfrog: p at whole, v at half places and levels. */
 const blankSystem = (equation: Equation): Definition => {
   const axes = ['x', 'y', 'z'].slice(0, CONVENTIONS[equation].dims);
-  const at = (axis: number, by: string) =>
-    axes.length === 1 ? by : axes.map((_, k) => (k === axis ? by : '0'));
+  const at = (axis: number, by: string) => (axes.length === 1 ? by : axes.map((_, k) => (k === axis ? by : '0')));
   const velocity = (k: number) => (axes.length === 1 ? 'v' : `v${axes[k]}`);
   return {
     kind: 'scheme',

@@ -15,6 +15,8 @@ export const CONDITION_KEYS = [
   'kind',
   'stable',
   'damping',
+  'levels',
+  'language',
 ] as const;
 export type ConditionKey = (typeof CONDITION_KEYS)[number];
 
@@ -60,7 +62,15 @@ const orders = (reading: (line: CatalogLine) => number | null): ConditionOption[
   }));
 
 const haloReach = ({ summary }: CatalogLine) => (summary.halo ? Math.max(...summary.halo) : null);
-const isNeverStable = ({ summary }: CatalogLine) => summary.verdict?.includes('unstable') ?? false;
+const hasVerdict =
+  (...verdicts: readonly string[]) =>
+  ({ summary }: CatalogLine) =>
+    summary.verdict !== null && verdicts.includes(summary.verdict);
+const LANGUAGES = [
+  ['c', 'C'],
+  ['fortran', 'Fortran'],
+  ['python', 'Python'],
+] as const;
 
 const FIXED: readonly Condition[] = [
   {
@@ -131,10 +141,17 @@ const FIXED: readonly Condition[] = [
       {
         value: 'bounded',
         label: 'up to a bound',
-        fits: ({ summary }) => summary.verdict === 'conditionally stable',
+        fits: hasVerdict('conditionally stable'),
       },
-      { value: 'always', label: 'at any step', fits: ({ summary }) => summary.verdict === 'unconditionally stable' },
-      { value: 'never', label: 'at no step', fits: isNeverStable },
+      { value: 'always', label: 'at any step', fits: hasVerdict('unconditionally stable') },
+      { value: 'region', label: 'in a region', fits: hasVerdict('two-parameter region') },
+      { value: 'weak', label: 'weakly unstable', fits: hasVerdict('weakly unstable for all nonzero values') },
+      {
+        value: 'never',
+        label: 'at no step',
+        fits: hasVerdict('unstable for all nonzero values', 'degenerate newest level'),
+      },
+      { value: 'undecided', label: 'not decided', fits: hasVerdict('not decided within the time budget') },
     ],
   },
   {
@@ -144,6 +161,24 @@ const FIXED: readonly Condition[] = [
       { value: 'none', label: 'not of every wave', fits: ({ summary }) => summary.dissipative === false },
       { value: 'some', label: 'of every wave', fits: ({ summary }) => summary.dissipative === true },
     ],
+  },
+  {
+    key: 'levels',
+    title: 'Time levels',
+    options: [
+      { value: '2', label: '2', fits: ({ summary }) => summary.levels === 2 },
+      { value: '3', label: '3', fits: ({ summary }) => summary.levels === 3 },
+      { value: '4', label: '4 or more', fits: ({ summary }) => atLeast(4, summary.levels) },
+    ],
+  },
+  {
+    key: 'language',
+    title: 'Kernel in',
+    options: LANGUAGES.map(([value, label]) => ({
+      value,
+      label,
+      fits: ({ languages }) => languages.some((language) => language.toLowerCase() === value),
+    })),
   },
 ];
 

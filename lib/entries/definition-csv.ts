@@ -72,7 +72,9 @@ const expression = (text: string): Check => {
   const parsed = ExpressionText.safeParse(text);
   return parsed.success
     ? { ok: parsed.data }
-    : { error: `the coefficient ${text === '' ? 'is missing' : 'is too long'}; accepted: 1 to ${LIMITS.expression} characters` };
+    : {
+        error: `the coefficient ${text === '' ? 'is missing' : 'is too long'}; accepted: 1 to ${LIMITS.expression} characters`,
+      };
 };
 
 /** Reads rows below a heading that must be there, each field by its own check; every fault is told with its line. */
@@ -84,11 +86,17 @@ function readRows(
   const [head, ...body] = rows;
   const errors: LineError[] = [];
   if (!head || head.fields.join().toLowerCase() !== heading.join())
-    return { values: [], errors: [{ line: head?.line ?? 0, message: `the first line must read ${heading.join(',')}` }] };
+    return {
+      values: [],
+      errors: [{ line: head?.line ?? 0, message: `the first line must read ${heading.join(',')}` }],
+    };
   if (body.length === 0) errors.push({ line: head.line, message: 'nothing stands below the heading' });
   const values = body.flatMap(({ line, fields }) => {
     if (fields.length !== heading.length) {
-      errors.push({ line, message: `${fields.length} columns; accepted: ${heading.length}, as in ${heading.join(',')}` });
+      errors.push({
+        line,
+        message: `${fields.length} columns; accepted: ${heading.length}, as in ${heading.join(',')}`,
+      });
       return [];
     }
     const read = fields.map((field, k) => checks[k]!(field));
@@ -107,7 +115,12 @@ function readTableau(rows: readonly CsvRow[]): { time?: TimeMethod; errors: Line
   const stages = body.length - 1;
   if (!head || !last || last.fields[0]?.toLowerCase() !== 'b' || stages < 1)
     return {
-      errors: [{ line: last?.line ?? 0, message: 'the last line must be b,b1,…,bs; accepted: a heading c,a1,…,as, a line a stage, then b' }],
+      errors: [
+        {
+          line: last?.line ?? 0,
+          message: 'the last line must be b,b1,…,bs; accepted: a heading c,a1,…,as, a line a stage, then b',
+        },
+      ],
     };
   const heading = ['c', ...Array.from({ length: stages }, (_, k) => `a${k + 1}`)];
   const isEmptyC = body.slice(0, -1).every(({ fields }) => fields[0] === '');
@@ -142,10 +155,16 @@ function readMethod(rows: readonly CsvRow[]): { time?: TimeMethod; errors: LineE
   sorted.forEach((row, k) => {
     const due = String(k + 2 - sorted.length);
     if (row[0] !== due && errors.length === 0)
-      errors.push({ line: 0, message: `level ${row[0]} stands where ${due} was due; accepted: whole levels without gaps up to 1` });
+      errors.push({
+        line: 0,
+        message: `level ${row[0]} stands where ${due} was due; accepted: whole levels without gaps up to 1`,
+      });
   });
   if (errors.length > 0) return { errors };
-  return { time: { kind: 'multistep', alpha: sorted.map((row) => row[1]!), beta: sorted.map((row) => row[2]!) }, errors };
+  return {
+    time: { kind: 'multistep', alpha: sorted.map((row) => row[1]!), beta: sorted.map((row) => row[2]!) },
+    errors,
+  };
 }
 
 const answer = (definition: Definition, errors: readonly LineError[]): FileOutcome =>
@@ -157,7 +176,11 @@ const answer = (definition: Definition, errors: readonly LineError[]): FileOutco
  */
 export function readDefinitionCsv(text: string, into: Definition): FileOutcome {
   if (text.length > FILE_CHARACTERS_MAX)
-    return { errors: [{ line: 0, message: `the file has ${text.length} characters; accepted: at most ${FILE_CHARACTERS_MAX}` }] };
+    return {
+      errors: [
+        { line: 0, message: `the file has ${text.length} characters; accepted: at most ${FILE_CHARACTERS_MAX}` },
+      ],
+    };
   if (text.includes('\0')) return { errors: [{ line: 0, message: 'this is not text; accepted: a CSV file in UTF-8' }] };
   const rows = csvRows(text);
   const place = (what: string) => (field: string) => rational(field, what);
@@ -168,11 +191,17 @@ export function readDefinitionCsv(text: string, into: Definition): FileOutcome {
   if (into.kind === 'stencil') {
     const heading = [...offsetNames(into.dims), 'weight'];
     const weight = (field: string): Check => (field === '' ? { ok: '' } : rational(field, 'the weight'));
-    const { values, errors } = readRows(rows, heading, [...Array.from({ length: into.dims }, () => place('the offset')), weight]);
+    const { values, errors } = readRows(rows, heading, [
+      ...Array.from({ length: into.dims }, () => place('the offset')),
+      weight,
+    ]);
     const weights = values.map((row) => row.at(-1) ?? '');
     const given = weights.filter((one) => one !== '').length;
     if (given > 0 && given < weights.length)
-      errors.push({ line: 0, message: `${given} of ${weights.length} weights are given; accepted: all of them, or none` });
+      errors.push({
+        line: 0,
+        message: `${given} of ${weights.length} weights are given; accepted: all of them, or none`,
+      });
     errors.push(...tooMany(values.length, LIMITS.nodes, 'points'));
     return answer(
       { ...into, offsets: values.map((row) => joined(row.slice(0, -1))), weights: given > 0 ? weights : null },

@@ -59,7 +59,11 @@ function elementAt(text: string, from: number, k: number): number {
 /** @param into the definition in whose place it comes: one under other letters is refused */
 export function readDefinitionJson(text: string, into: Definition): FileOutcome {
   if (text.length > FILE_CHARACTERS_MAX)
-    return { errors: [{ line: 0, message: `the file has ${text.length} characters; accepted: at most ${FILE_CHARACTERS_MAX}` }] };
+    return {
+      errors: [
+        { line: 0, message: `the file has ${text.length} characters; accepted: at most ${FILE_CHARACTERS_MAX}` },
+      ],
+    };
   let input: unknown;
   try {
     input = JSON.parse(text.replace(/^\uFEFF/, ''));
@@ -78,7 +82,12 @@ export function readDefinitionJson(text: string, into: Definition): FileOutcome 
   const equations = [definition, into].map((one) => (one.kind === 'scheme' ? one.equation : ''));
   if (letters !== due || equations[0] !== equations[1])
     return {
-      errors: [{ line: 1, message: `this is booked under ${letters}${equations[0] && `, ${equations[0]}`}; accepted in this draft: ${due}${equations[1] && `, ${equations[1]}`}` }],
+      errors: [
+        {
+          line: 1,
+          message: `this is booked under ${letters}${equations[0] && `, ${equations[0]}`}; accepted in this draft: ${due}${equations[1] && `, ${equations[1]}`}`,
+        },
+      ],
     };
   return { definition };
 }

@@ -82,6 +82,7 @@ export interface SheetView {
   stateReason: string | null;
   /** The entry that replaces a superseded or withdrawn one. */
   replacement: { slug: string; callNumber: string; title: string; revision: number } | null;
+  authorId: string;
   author: string;
   signatures: { name: string; at: string; sentence: string }[];
   vettedAt: string | null;

@@ -4,7 +4,7 @@
  */
 import { CONVENTIONS, type Equation } from '@/lib/numerics/equation';
 import { readExpression } from '@/lib/numerics/expression';
-import { type Polynomial, variable } from '@/lib/numerics/polynomial';
+import { neg, type Polynomial, variable } from '@/lib/numerics/polynomial';
 import { quotientText } from '@/lib/numerics/polynomial-text';
 import { addF, fromPolynomial, negF, type RationalFunction } from '@/lib/numerics/rational-function';
 import { formatRational, parseRational } from '@/lib/numerics/rational';
@@ -77,7 +77,10 @@ const fail = (column: number, message: string): never => {
 function readIndex(text: string, letter: string, column: number): string {
   const match = new RegExp(`^\\s*${letter}\\s*(?:([+-])\\s*(\\d+(?:/2|\\.5)?))?\\s*$`).exec(text);
   if (!match)
-    return fail(column, `'${text.trim()}' cannot be read; accepted: ${letter}, or ${letter} with a step such as ${letter}-1`);
+    return fail(
+      column,
+      `'${text.trim()}' cannot be read; accepted: ${letter}, or ${letter} with a step such as ${letter}-1`,
+    );
   if (match[2] === undefined) return '0';
   return formatRational(parseRational(`${match[1] === '-' ? '-' : ''}${match[2]}`));
 }
@@ -91,7 +94,9 @@ function withNames(text: string, dims: number, sites: Site[]): string {
       fail(at + 1, `${whole} has ${parts.length} indices; accepted: ${siteText('0', Array<string>(dims).fill('0'))}`);
     const start = at + whole.indexOf('[') + 2;
     const level = readIndex(parts[0] ?? '', 'n', start);
-    const offset = parts.slice(1).map((part, axis) => readIndex(part, AXES[axis] ?? 'i', start + (parts[0]?.length ?? 0) + 1));
+    const offset = parts
+      .slice(1)
+      .map((part, axis) => readIndex(part, AXES[axis] ?? 'i', start + (parts[0]?.length ?? 0) + 1));
     const known = sites.find((site) => site.level === level && site.offset.join() === offset.join());
     const name = known?.name ?? `u_${sites.length}`;
     if (!known) sites.push({ level, offset, name });
@@ -99,11 +104,7 @@ function withNames(text: string, dims: number, sites: Site[]): string {
   });
 }
 
-function read(
-  side: string,
-  from: number,
-  vocabulary: Parameters<typeof readExpression>[1],
-): RationalFunction | null {
+function read(side: string, from: number, vocabulary: Parameters<typeof readExpression>[1]): RationalFunction | null {
   let sum: RationalFunction | null = null;
   for (const { sign, body, at } of additiveTerms(side)) {
     if (body === '') fail(from + at + 1, 'a term is missing here; accepted: a product such as lambda*u[n,i]');
@@ -123,6 +124,34 @@ function partOf(polynomial: Polynomial, index: number): Polynomial {
     .map((m) => ({ ...m, powers: m.powers.map((power, k) => (k === index ? 0 : power)) }));
 }
 
+/** Monomials up to this many are written one after the other, more of them in factors. */
+const PLAIN_TERMS = 2;
+
+function plainText(polynomial: Polynomial, names: readonly string[]): string | null {
+  if (polynomial.length > PLAIN_TERMS || polynomial.some(({ im }) => im.num !== 0n)) return null;
+  const degree = (powers: readonly number[]) => powers.reduce((sum, power) => sum + power, 0);
+  return [...polynomial]
+    .sort((a, b) => degree(a.powers) - degree(b.powers))
+    .map(({ powers, re }, k) => {
+      const size = re.num < 0n ? -re.num : re.num;
+      const letters = powers.flatMap((power, n) =>
+        power === 0 ? [] : [`${names[n]}${power === 1 ? '' : `^${power}`}`],
+      );
+      const factors = size === 1n && letters.length > 0 ? letters : [String(size), ...letters];
+      const text = `${factors.join('*')}${re.den === 1n ? '' : `/${re.den}`}`;
+      return k === 0 ? `${re.num < 0n ? '-' : ''}${text}` : `${re.num < 0n ? ' - ' : ' + '}${text}`;
+    })
+    .join('');
+}
+
+const isUnit = (den: Polynomial) => den.length === 1 && den[0]!.powers.every((power) => power === 0);
+
+/** A weight as an author would write it. */
+function coefficientOf(part: Polynomial, den: Polynomial, names: readonly string[]): string {
+  if (part.length === 0) return '0';
+  return (isUnit(den) ? plainText(part, names) : null) ?? asWritten(quotientText(part, den, names));
+}
+
 const asWritten = (text: string) => text.replaceAll('**', '^').replace(/\bI\b/g, 'i');
 
 /**
@@ -135,7 +164,8 @@ export function readFormula(text: string, equation: Equation, fixed: readonly st
     const sites: Site[] = [];
     const plain = withNames(text, dims, sites);
     if (sites.length === 0) return fail(1, 'there is no point in this line; accepted: u[n+1,i] = u[n,i] and the like');
-    if (sites.length > LIMITS.terms) return fail(1, `${sites.length} points are too many; accepted: at most ${LIMITS.terms}`);
+    if (sites.length > LIMITS.terms)
+      return fail(1, `${sites.length} points are too many; accepted: at most ${LIMITS.terms}`);
     const names = [...new Set([...parameters, ...(common ? [common] : []), ...fixed])];
     const all = [...names, ...sites.map(({ name }) => name)];
     const symbols = new Map(all.map((name, k) => [name, fromPolynomial(variable(all.length, k), all.length)]));
@@ -155,10 +185,15 @@ export function readFormula(text: string, equation: Equation, fixed: readonly st
     }
     if (difference.den.some(({ powers }) => powers.slice(names.length).some((power) => power > 0)))
       return fail(1, 'a point stands below a fraction line; accepted: schemes that are linear in u');
+    const newest = String(Math.max(...sites.map(({ level }) => Number(level))));
     const terms = sites
       .map(({ level, offset }, k) => {
         const part = partOf(difference.num, names.length + k);
-        const coefficient = asWritten(quotientText(part, difference.den, all));
+        // On the right of the equals sign the text of the weight is what is read, so that is what is made readable.
+        const coefficient =
+          level === newest
+            ? coefficientOf(part, difference.den, all)
+            : negatedExpression(coefficientOf(neg(part), difference.den, all));
         return { level, offset: dims === 1 ? (offset[0] ?? '0') : offset, coefficient };
       })
       .filter(({ coefficient }) => coefficient !== '0');
@@ -169,4 +204,3 @@ export function readFormula(text: string, equation: Equation, fixed: readonly st
     throw error;
   }
 }
-

@@ -29,6 +29,8 @@ export interface LiveAnalysis {
   readonly summary: FactsSummary | null;
   /** MathML of each line of the rule. */
   readonly rule: readonly string[];
+  /** Weights of a stencil, given or found. */
+  readonly weights: readonly string[] | null;
   readonly sketch: SketchModel | null;
   readonly numeric: NumericScheme | null;
   readonly limit: number | null;
@@ -43,7 +45,10 @@ function momentsOf(scheme: ScalarScheme): LiveMoment[] {
     ...moment,
     terms: residual.map(({ powers, re, im }) => ({
       powers,
-      factor: evaluate([{ powers: powers.map(() => 0), re, im }], powers.map(() => 1))[0],
+      factor: evaluate(
+        [{ powers: powers.map(() => 0), re, im }],
+        powers.map(() => 1),
+      )[0],
     })),
   }));
 }
@@ -60,7 +65,18 @@ export function liveAnalysis(input: unknown): LiveAnalysis {
   const analysis = analyseDefinition(input, { budget: createBudget({ timeLimitMs: TIME_LIMIT_MS }) });
   const { definition } = readDefinition(input);
   const { verdict, problems } = analysis;
-  const nothing = { verdict, problems, readings: [], summary: null, rule: [], sketch: null, numeric: null, limit: null, moments: [] };
+  const nothing = {
+    verdict,
+    problems,
+    readings: [],
+    summary: null,
+    rule: [],
+    weights: null,
+    sketch: null,
+    numeric: null,
+    limit: null,
+    moments: [],
+  };
   if (!definition) return nothing;
   const facts = verdict === 'invalid' ? null : analysis.facts;
   const summary = facts && summarise(definition, facts);
@@ -72,6 +88,7 @@ export function liveAnalysis(input: unknown): LiveAnalysis {
     readings: readingsOf(analysis, summary),
     summary,
     rule: rule.map((latex) => temml.renderToString(latex, { displayMode: false, throwOnError: false, trust: false })),
+    weights: facts?.kind === 'stencil' ? facts.weights : null,
     sketch,
     numeric: verdict === 'invalid' ? null : numeric,
     limit,

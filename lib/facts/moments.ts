@@ -47,7 +47,8 @@ function exponentOf(scheme: ScalarScheme): Polynomial[] {
     exponent[1] = neg(equationNumbers(scheme).get('lambda')!);
     return exponent;
   }
-  for (const { powers, coefficient } of symbolTerms(scheme)) exponent[powers[0]!] = add(exponent[powers[0]!] ?? zero, coefficient);
+  for (const { powers, coefficient } of symbolTerms(scheme))
+    exponent[powers[0]!] = add(exponent[powers[0]!] ?? zero, coefficient);
   return exponent;
 }
 

@@ -1,12 +1,18 @@
 'use client';
 
 import { useState } from 'react';
+import { LargeSketch } from '@/components/marks/large-sketch';
 import { Options } from '@/components/ui/options';
 import type { BuildingBlock } from '@/db/queries/drafts';
 import type { Definition } from '@/lib/entries/definition';
 import type { DraftContent } from '@/lib/entries/draft-content';
 import type { LiveAnalysis } from '@/lib/facts/live-analysis';
+import { FileExchange } from './file-exchange';
 import { JsonEditor } from './json-editor';
+import { LinesEditor } from './lines-editor';
+import { MethodEditor } from './method-editor';
+import { RuleLines } from './rule-lines';
+import { StencilEditor } from './stencil-editor';
 import { TableEditor } from './table-editor';
 
 export interface DefinitionEditorProps {
@@ -20,14 +26,76 @@ export interface DefinitionEditorProps {
   onChange: (definition: Definition, more?: Partial<DraftContent>) => void;
 }
 
-const VIEWS = { drawn: 'drawn', json: 'JSON' };
+const VIEWS = { drawn: 'by hand', json: 'as JSON' };
 
-/** The editor that belongs to the kind of the draft, or its JSON. */
-export function DefinitionEditor(props: DefinitionEditorProps) {
-  const { definition, analysis, at, isReadOnly, onChange } = props;
-  const [view, setView] = useState('drawn');
+/** A note of what was taken from the book, once for each part. */
+const withTaken = (notes: string, taken: string) => {
+  const line = `Taken from the book: ${taken}.`;
+  return notes.includes(line) ? notes : `${notes.trimEnd()}${notes.trim() === '' ? '' : '\n\n'}${line}\n`;
+};
+
+function ByHand({ definition, analysis, at, blocks, notes, isReadOnly, onChange }: DefinitionEditorProps) {
   const problems = analysis?.problems ?? [];
-  const hasForm = definition.kind === 'scheme' && definition.form === 'table';
+  const rule = analysis?.rule ?? [];
+  if (definition.kind === 'stencil')
+    return (
+      <>
+        <RuleLines rule={rule} />
+        {analysis?.sketch && <LargeSketch model={analysis.sketch} />}
+        <StencilEditor
+          definition={definition}
+          problems={problems}
+          found={analysis?.weights ?? null}
+          isReadOnly={isReadOnly}
+          onChange={onChange}
+        />
+      </>
+    );
+  if (definition.kind === 'time-method')
+    return (
+      <>
+        <RuleLines rule={rule} />
+        <MethodEditor
+          time={definition.time}
+          isReadOnly={isReadOnly}
+          onChange={(time) => onChange({ ...definition, time })}
+        />
+      </>
+    );
+  if (definition.form === 'lines')
+    return (
+      <>
+        <RuleLines rule={rule} />
+        {analysis?.sketch && <LargeSketch model={analysis.sketch} />}
+        <LinesEditor
+          definition={definition}
+          blocks={blocks}
+          problems={problems}
+          isReadOnly={isReadOnly}
+          onChange={(next, taken) => onChange(next, taken === undefined ? {} : { notes: withTaken(notes, taken) })}
+        />
+      </>
+    );
+  if (definition.form === 'table')
+    return (
+      <TableEditor
+        definition={definition}
+        problems={problems}
+        model={analysis?.sketch ?? null}
+        rule={rule}
+        at={at}
+        isReadOnly={isReadOnly}
+        onChange={onChange}
+      />
+    );
+  return null;
+}
+
+/** The editor that belongs to the kind of the draft, its JSON, and files both ways. */
+export function DefinitionEditor(props: DefinitionEditorProps) {
+  const { definition, analysis, slug, isReadOnly, onChange } = props;
+  const [view, setView] = useState('drawn');
+  const hasForm = !(definition.kind === 'scheme' && definition.form === 'system');
   return (
     <>
       {hasForm && (
@@ -36,18 +104,14 @@ export function DefinitionEditor(props: DefinitionEditorProps) {
         </p>
       )}
       {hasForm && view === 'drawn' ? (
-        <TableEditor
-          definition={definition}
-          problems={problems}
-          model={analysis?.sketch ?? null}
-          rule={analysis?.rule ?? []}
-          at={at}
-          isReadOnly={isReadOnly}
-          onChange={onChange}
-        />
+        <ByHand {...props} />
       ) : (
-        <JsonEditor definition={definition} isReadOnly={isReadOnly} onChange={onChange} />
+        <>
+          {analysis?.sketch && <LargeSketch model={analysis.sketch} />}
+          <JsonEditor definition={definition} isReadOnly={isReadOnly} onChange={onChange} />
+        </>
       )}
+      <FileExchange definition={definition} slug={slug} isReadOnly={isReadOnly} onChange={onChange} />
     </>
   );
 }

@@ -12,12 +12,14 @@ import { EQUATION_NAMES } from '@/lib/entries/catalog-conditions';
 import { submissionObstacles } from '@/lib/entries/submission-obstacles';
 import { symbolText } from '@/lib/facts/reading-texts';
 import type { TrialView } from '@/lib/trials/trial';
+import { AttachmentsPart } from './attachments-part';
 import { DefinitionEditor } from './definition-editor';
 import { DraftTrial } from './draft-trial';
 import { KeepingBanner, KeepingLine } from './keeping-line';
 import { LiveLeaf } from './live-leaf';
 import { NotesPart } from './notes-part';
 import { PulsePlot } from './pulse-plot';
+import { ReferencesPart } from './references-part';
 import { SendPart } from './send-part';
 import { useKeptDraft } from './use-kept-draft';
 import { useLiveAnalysis } from './use-live-analysis';
@@ -57,7 +59,7 @@ function staffOf(limit: number | null): { max: number; start: number } {
   return { max: Math.max(0.02, Number((limit * 1.25).toPrecision(2))), start: Number((limit * 0.75).toPrecision(2)) };
 }
 
-function Desk({ draft, blocks, latestTrial, obstacle, isAuthor }: DraftDeskProps) {
+function Desk({ draft, blocks, attachments, latestTrial, obstacle, isAuthor }: DraftDeskProps) {
   const isReadOnly = obstacle !== null;
   const kept = useKeptDraft(draft, isReadOnly);
   const { content, keeping, change } = kept;
@@ -80,7 +82,9 @@ function Desk({ draft, blocks, latestTrial, obstacle, isAuthor }: DraftDeskProps
             <span>
               {draft.callNumber}, revision {draft.number}
             </span>
-            <span>{draft.equation ? EQUATION_NAMES[draft.equation] : draft.kind === 'stencil' ? 'Stencil' : 'Time method'}</span>
+            <span>
+              {draft.equation ? EQUATION_NAMES[draft.equation] : draft.kind === 'stencil' ? 'Stencil' : 'Time method'}
+            </span>
             <span>{isAuthor ? 'yours' : `by ${draft.author}`}</span>
             <KeepingLine keeping={keeping} updatedAt={draft.updatedAt} />
           </div>
@@ -147,6 +151,14 @@ function Desk({ draft, blocks, latestTrial, obstacle, isAuthor }: DraftDeskProps
       </DraftPart>
       <DraftPart id="notes" name="Notes and references" aside="one of the two is needed">
         <NotesPart notes={content.notes} isReadOnly={isReadOnly} onChange={(notes) => change({ notes })} />
+        <ReferencesPart
+          references={content.references}
+          isReadOnly={isReadOnly}
+          onChange={(references) => change({ references })}
+        />
+      </DraftPart>
+      <DraftPart id="attachments" name="Attachments" aside="they go with this revision">
+        <AttachmentsPart draftId={draft.id} attachments={attachments} isReadOnly={isReadOnly} />
       </DraftPart>
       <DraftPart id="trials" name="Trials" aside="before and after submission; the latest counts">
         <DraftTrial draftId={draft.id} latest={latestTrial} flush={kept.flush} />
@@ -155,7 +167,17 @@ function Desk({ draft, blocks, latestTrial, obstacle, isAuthor }: DraftDeskProps
   );
 }
 
-const DraftPart = ({ id, name, aside, children }: { id: string; name: string; aside: string; children: React.ReactNode }) => (
+const DraftPart = ({
+  id,
+  name,
+  aside,
+  children,
+}: {
+  id: string;
+  name: string;
+  aside: string;
+  children: React.ReactNode;
+}) => (
   <section className="sec" id={id} tabIndex={-1} aria-labelledby={`${id}-head`}>
     <header>
       <h2 id={`${id}-head`}>{name}</h2>

@@ -1,5 +1,5 @@
 /** What the browser itself keeps of a draft until the server has it: one place for each window. */
-import { DraftContent } from '@/lib/entries/draft-content';
+import { type DraftContent } from '@/lib/entries/draft-content';
 
 export interface StoredText {
   /** The version that the text began from. */

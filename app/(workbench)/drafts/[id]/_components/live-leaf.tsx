@@ -57,7 +57,13 @@ function growthPlot(numeric: NumericScheme, symbol: string, value: number): Thet
     curves: [
       { name, look: 'c1', values: points.map(({ modulus }) => modulus) },
       ...(others
-        ? [{ name: 'other roots', look: 'cg' as const, values: points.map(({ computational }) => computational[0] ?? null) }]
+        ? [
+            {
+              name: 'other roots',
+              look: 'cg' as const,
+              values: points.map(({ computational }) => computational[0] ?? null),
+            },
+          ]
         : []),
     ],
     range: [0, 1.5],
@@ -70,10 +76,7 @@ export function LiveLeaf({ live, at }: LiveLeafProps) {
   const { analysis, isBehind, fault } = live;
   const numeric = analysis?.numeric ?? null;
   const plots = useMemo(
-    () =>
-      numeric && at
-        ? [speedPlot(numeric, at.symbol, at.value), growthPlot(numeric, at.symbol, at.value)]
-        : [],
+    () => (numeric && at ? [speedPlot(numeric, at.symbol, at.value), growthPlot(numeric, at.symbol, at.value)] : []),
     [numeric, at],
   );
   const problems = analysis?.problems ?? [];
@@ -133,21 +136,28 @@ export function LiveLeaf({ live, at }: LiveLeafProps) {
           <CurveTable data={plots[0]} />
         </figure>
       )}
-      {numeric && at && plots[1] && (
-        <div className="liveplots">
-          <figure>
-            <ThetaPlot data={plots[1]} id="draft-growth" />
-            <CurveTable data={plots[1]} />
-          </figure>
-          <RootsCircle
-            numeric={numeric}
-            parameters={numeric.parameters.map(() => at.value)}
-            caption={`${at.symbol} = ${decimalText(at.value, 3)}`}
-          />
-        </div>
+      {plots[1] && (
+        <figure>
+          <ThetaPlot data={plots[1]} id="draft-growth" />
+          <CurveTable data={plots[1]} />
+        </figure>
       )}
-      {analysis && analysis.moments.length > 0 && (
-        <MomentsTable moments={analysis.moments} parameters={at && numeric ? numeric.parameters.map(() => at.value) : []} />
+      {analysis && (
+        <div className="liveplots">
+          {numeric && at && (
+            <RootsCircle
+              numeric={numeric}
+              parameters={numeric.parameters.map(() => at.value)}
+              caption={`${at.symbol} = ${decimalText(at.value, 3)}`}
+            />
+          )}
+          {analysis.moments.length > 0 && (
+            <MomentsTable
+              moments={analysis.moments}
+              parameters={at && numeric ? numeric.parameters.map(() => at.value) : []}
+            />
+          )}
+        </div>
       )}
     </div>
   );

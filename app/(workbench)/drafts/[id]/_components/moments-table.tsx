@@ -4,10 +4,19 @@ import { decimalText } from '@/lib/facts/reading-texts';
 const RAISED = ['', '', '²', '³', '⁴', '⁵', '⁶', '⁷', '⁸', '⁹', '¹⁰'];
 
 const valueAt = ({ terms }: LiveMoment, parameters: readonly number[]) =>
-  terms.reduce((sum, { powers, factor }) => sum + factor * powers.reduce((all, p, k) => all * (parameters[k] ?? 0) ** p, 1), 0);
+  terms.reduce(
+    (sum, { powers, factor }) => sum + factor * powers.reduce((all, p, k) => all * (parameters[k] ?? 0) ** p, 1),
+    0,
+  );
 
 /** What the draft makes of 1, x, x² … as solutions of its equation, and what is left over. */
-export const MomentsTable = ({ moments, parameters }: { moments: readonly LiveMoment[]; parameters: readonly number[] }) => (
+export const MomentsTable = ({
+  moments,
+  parameters,
+}: {
+  moments: readonly LiveMoment[];
+  parameters: readonly number[];
+}) => (
   <div className="scrolls" role="region" aria-label="Moments" tabIndex={0}>
     <table className="moments">
       <caption className="sr">Moments of the scheme</caption>

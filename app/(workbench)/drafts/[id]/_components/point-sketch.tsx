@@ -1,6 +1,6 @@
 'use client';
 
-import { useRef, useState, type KeyboardEvent } from 'react';
+import { useState, type KeyboardEvent } from 'react';
 import type { SketchModel } from '@/lib/facts/sketch-model';
 import { isComputed, prettyWeight, siteKey, siteName, spokenSite, type Site } from './table-model';
 import { useNarrow } from './use-narrow';
@@ -29,7 +29,6 @@ export function PointSketch({ sites, levels, reach, slice, model, isReadOnly, on
   const m = useNarrow() ? NARROW : WIDE;
   const [active, setActive] = useState<readonly [number, number]>([0, 0]);
   const [spoken, setSpoken] = useState('');
-  const svg = useRef<SVGSVGElement>(null);
   const byKey = new Map(sites.map((site) => [siteKey(site.level, site.offset), site]));
   const column = (m.right - m.left) / (2 * reach + 1);
   const rise = Math.min(m.level, LEVELS_HEIGHT_MAX / Math.max(1, levels - 1));
@@ -48,10 +47,10 @@ export function PointSketch({ sites, levels, reach, slice, model, isReadOnly, on
     const what = isComputed(level, [by, ...slice]) ? 'the point computed' : site ? `weight ${site.weight}` : 'not read';
     setSpoken(`${spokenSite(level, [by, ...slice])}, ${after ?? what}`);
   };
-  const goTo = (level: number, by: number) => {
+  const goTo = (from: Element, level: number, by: number) => {
     setActive([level, by]);
     say(level, by);
-    svg.current?.querySelector<SVGGElement>(`[data-site="${level}:${by}"]`)?.focus();
+    from.closest('svg')?.querySelector<SVGGElement>(`[data-site="${level}:${by}"]`)?.focus();
   };
   const turn = (level: number, by: number) => {
     if (isReadOnly) return;
@@ -60,7 +59,7 @@ export function PointSketch({ sites, levels, reach, slice, model, isReadOnly, on
     onTurn(level, offset);
     say(level, by, isComputed(level, offset) ? 'the point computed' : isRead ? 'let go' : 'read, weight 0');
   };
-  const onKeyDown = (event: KeyboardEvent, level: number, by: number) => {
+  const onKeyDown = (event: KeyboardEvent<Element>, level: number, by: number) => {
     const moves: Record<string, readonly [number, number]> = {
       ArrowLeft: [level, Math.max(-reach, by - 1)],
       ArrowRight: [level, Math.min(reach, by + 1)],
@@ -70,7 +69,7 @@ export function PointSketch({ sites, levels, reach, slice, model, isReadOnly, on
       End: [level, reach],
     };
     const move = moves[event.key];
-    if (move) goTo(...move);
+    if (move) goTo(event.currentTarget, ...move);
     else if (event.key === ' ') turn(level, by);
     else if (event.key === 'Enter') onEdit(siteKey(level, [by, ...slice]));
     else return;
@@ -81,7 +80,6 @@ export function PointSketch({ sites, levels, reach, slice, model, isReadOnly, on
   return (
     <>
       <svg
-        ref={svg}
         className="sten draftsten"
         viewBox={`0 0 ${m.width} ${bottom + 60}`}
         style={{ maxWidth: m.width * 1.1 }}
@@ -143,7 +141,12 @@ export function PointSketch({ sites, levels, reach, slice, model, isReadOnly, on
                   height={Math.min(rise, 68)}
                   className="draftgoal"
                 />
-                <SiteMark x={xOf(by)} y={yOf(level)} r={r} kind={computed ? 'computed' : site ? (level === 1 ? 'coupled' : 'known') : 'free'} />
+                <SiteMark
+                  x={xOf(by)}
+                  y={yOf(level)}
+                  r={r}
+                  kind={computed ? 'computed' : site ? (level === 1 ? 'coupled' : 'known') : 'free'}
+                />
                 {site && !computed && prettyWeight(site.weight).length * 8 < column * 1.7 && (
                   <text
                     x={xOf(by) + Math.max(r + 4, 10)}
@@ -166,7 +169,17 @@ export function PointSketch({ sites, levels, reach, slice, model, isReadOnly, on
   );
 }
 
-function SiteMark({ x, y, r, kind }: { x: number; y: number; r: number; kind: 'computed' | 'coupled' | 'known' | 'free' }) {
+function SiteMark({
+  x,
+  y,
+  r,
+  kind,
+}: {
+  x: number;
+  y: number;
+  r: number;
+  kind: 'computed' | 'coupled' | 'known' | 'free';
+}) {
   if (kind === 'known') return <circle cx={x} cy={y} r={r} className="s-known" />;
   if (kind === 'coupled')
     return <rect x={x - r * 1.5} y={y - r * 1.05} width={r * 3} height={r * 2.1} rx={r * 1.05} className="s-coup" />;
@@ -174,7 +187,10 @@ function SiteMark({ x, y, r, kind }: { x: number; y: number; r: number; kind: 'c
     return (
       <>
         <rect x={x - r * 1.5} y={y - r * 1.05} width={r * 3} height={r * 2.1} rx={r * 1.05} className="s-new" />
-        <path d={`M${x - r * 2.3} ${y - r * 1.7}v${r * 3.4}M${x + r * 2.3} ${y - r * 1.7}v${r * 3.4}`} className="s-tick" />
+        <path
+          d={`M${x - r * 2.3} ${y - r * 1.7}v${r * 3.4}M${x + r * 2.3} ${y - r * 1.7}v${r * 3.4}`}
+          className="s-tick"
+        />
       </>
     );
   return (

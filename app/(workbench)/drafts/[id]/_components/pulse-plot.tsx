@@ -10,7 +10,15 @@ const RANGE = [-0.5, 1.1] as const;
 const TICKS = [0, 24, 48, 72, 95];
 
 /** A pulse after some steps, marched by the draft, beside where it should be. */
-export function PulsePlot({ numeric, parameters, steps }: { numeric: NumericScheme; parameters: readonly number[]; steps: number }) {
+export function PulsePlot({
+  numeric,
+  parameters,
+  steps,
+}: {
+  numeric: NumericScheme;
+  parameters: readonly number[];
+  steps: number;
+}) {
   const m = useNarrow() ? NARROW : WIDE;
   const pulse = marchPulse(numeric, parameters, { cells: CELLS, steps });
   const travel = pulseTravel(numeric, parameters, steps);
@@ -18,7 +26,9 @@ export function PulsePlot({ numeric, parameters, steps }: { numeric: NumericSche
   const y = (value: number) => m.bottom - ((value - RANGE[0]) / (RANGE[1] - RANGE[0])) * (m.bottom - m.top);
   const line = (values: readonly (number | null)[]) =>
     values
-      .map((value, cell) => (value === null ? null : `${x(cell).toFixed(1)},${y(Math.max(-3, Math.min(4, value))).toFixed(1)}`))
+      .map((value, cell) =>
+        value === null ? null : `${x(cell).toFixed(1)},${y(Math.max(-3, Math.min(4, value))).toFixed(1)}`,
+      )
       .filter((point) => point !== null)
       .join(' ');
   const highest = (values: readonly (number | null)[]) =>
@@ -31,7 +41,13 @@ export function PulsePlot({ numeric, parameters, steps }: { numeric: NumericSche
     : `Highest at cell ${mine} with ${decimalText(pulse.computed[mine] ?? 0, 3)}; exact at cell ${due} with ${decimalText(pulse.exact[due] ?? 0, 3)}.`;
   return (
     <figure className="pulse">
-      <svg viewBox={`0 0 ${m.width} ${m.height}`} className="plot" style={{ maxWidth: m.width * 1.1 }} role="img" aria-label={`${title}. ${sentence}`}>
+      <svg
+        viewBox={`0 0 ${m.width} ${m.height}`}
+        className="plot"
+        style={{ maxWidth: m.width * 1.1 }}
+        role="img"
+        aria-label={`${title}. ${sentence}`}
+      >
         {[0, 0.5, 1].map((value) => (
           <g key={value}>
             <path d={`M${m.left} ${y(value)}H${m.right}`} className="p-grid" />

@@ -39,14 +39,22 @@ export function RootsCircle({ numeric, parameters, caption }: RootsCircleProps) 
       <div className="p-yh">
         Roots <span className="m">g</span>(<span className="m">θ</span>)
       </div>
-      <svg viewBox={`0 0 ${SIZE} ${SIZE}`} className="plot" style={{ maxWidth: SIZE }} role="img" aria-label={`${sentence}, ${caption}`}>
+      <svg
+        viewBox={`0 0 ${SIZE} ${SIZE}`}
+        className="plot"
+        style={{ maxWidth: SIZE }}
+        role="img"
+        aria-label={`${sentence}, ${caption}`}
+      >
         <path d={`M8 ${CENTRE}H${SIZE - 8}M${CENTRE} 8V${SIZE - 8}`} className="p-grid" />
         <circle cx={CENTRE} cy={CENTRE} r={RADIUS} className="p-ax" fill="none" />
         {roots.flatMap((set, k) =>
           set.map((root, j) => {
             const [x, y] = at(root);
             const isOut = Math.hypot(...root) > 1 + 1e-9;
-            return <circle key={`${k}:${j}`} cx={x} cy={y} r={isOut ? 3 : 2.2} className={isOut ? 'rootout' : 'rootin'} />;
+            return (
+              <circle key={`${k}:${j}`} cx={x} cy={y} r={isOut ? 3 : 2.2} className={isOut ? 'rootout' : 'rootin'} />
+            );
           }),
         )}
         <text x={CENTRE + RADIUS + 8} y={CENTRE - 6} className="p-t">

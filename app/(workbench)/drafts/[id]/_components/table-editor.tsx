@@ -10,6 +10,7 @@ import { weightValues } from '@/lib/facts/weight-value';
 import { CONVENTIONS } from '@/lib/numerics/equation';
 import { FormulaLine } from './formula-line';
 import { HeldInput } from './held-input';
+import { RuleLines } from './rule-lines';
 import { PointSketch } from './point-sketch';
 import { Stepper } from './stepper';
 import { isComputed, siteKey, siteName, type Site, sitesOf, withSiteTurned, withWeight } from './table-model';
@@ -40,7 +41,13 @@ export function TableEditor({ definition, problems, model, rule, at, isReadOnly,
   const levels = Math.max(shown.levels, needed.levels);
   const reach = Math.max(shown.reach, needed.reach);
   const table = useRef<HTMLTableElement>(null);
-  const values = at && weightValues(definition, sites.map(({ weight }) => weight), at.value);
+  const values =
+    at &&
+    weightValues(
+      definition,
+      sites.map(({ weight }) => weight),
+      at.value,
+    );
 
   return (
     <>
@@ -89,6 +96,7 @@ export function TableEditor({ definition, problems, model, rule, at, isReadOnly,
         onTurn={(level, offset) => onChange(withSiteTurned(definition, level, offset))}
         onEdit={(key) => table.current?.querySelector<HTMLInputElement>(`[data-weight="${key}"]`)?.focus()}
       />
+      <RuleLines rule={rule} />
       <div className="wrow">
         <table ref={table}>
           <thead>
@@ -120,16 +128,14 @@ export function TableEditor({ definition, problems, model, rule, at, isReadOnly,
           </tbody>
         </table>
         <div>
-          {rule.map((html) => (
-            <div key={html} className="eqn" dangerouslySetInnerHTML={{ __html: html }} />
-          ))}
           <FormulaLine
             definition={definition}
             isReadOnly={isReadOnly}
             onTerms={(terms) => onChange({ ...definition, terms })}
           />
           <p className="cap">
-            Accepted in weights: numbers, {[...parameters, ...(common ? [common] : [])].map((name) => `${name} (${symbolText(name)})`).join(', ')}
+            Accepted in weights: numbers,{' '}
+            {[...parameters, ...(common ? [common] : [])].map((name) => `${name} (${symbolText(name)})`).join(', ')}
             {Object.keys(definition.fixed ?? {}).map((name) => `, ${name}`)}, + − * / ^ and brackets
             {CONVENTIONS[definition.equation].complex ? ', and i' : ''}.
           </p>

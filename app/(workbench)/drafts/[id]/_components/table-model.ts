@@ -81,7 +81,8 @@ export function withSiteTurned(definition: TableScheme, level: number, offset: r
 export const isComputed = (level: number, offset: readonly number[]) => level === 1 && offset.every((by) => by === 0);
 
 const half = (size: number) => (Number.isInteger(size) ? String(size) : `${Math.floor(size) || ''}½`);
-const step = (letter: string, by: number) => (by === 0 ? letter : `${letter} ${by > 0 ? '+' : '−'} ${half(Math.abs(by))}`);
+const step = (letter: string, by: number) =>
+  by === 0 ? letter : `${letter} ${by > 0 ? '+' : '−'} ${half(Math.abs(by))}`;
 const AXES = ['i', 'j', 'k'];
 
 /** "n − 1, i + 1" */

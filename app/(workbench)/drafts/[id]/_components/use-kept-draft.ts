@@ -43,7 +43,8 @@ const CUT = 'The line to the server is cut. It is tried again every few seconds.
 function firstText(server: Server): { content: DraftContent; keeping: Keeping } {
   const stored = takeStoredText(server.id);
   const content = stored && asContent(stored.content, server.content);
-  if (!stored || !content || isSameText(content, server.content)) return { content: server.content, keeping: { kind: 'kept' } };
+  if (!stored || !content || isSameText(content, server.content))
+    return { content: server.content, keeping: { kind: 'kept' } };
   if (stored.version === server.version)
     return { content, keeping: { kind: 'unsaved', why: 'This text had not reached the server.', isAgain: true } };
   const theirs = { version: server.version, at: server.updatedAt, content: server.content };
@@ -76,6 +77,8 @@ export function useKeptDraft(server: Server, isReadOnly: boolean): KeptDraft {
   const now = useRef({ content: first.content, version: server.version, kept: server.content });
   const timer = useRef<ReturnType<typeof setTimeout> | undefined>(undefined);
   const flight = useRef<Promise<boolean> | null>(null);
+  /** The newest `send`, for timers that outlive a drawing of the page. */
+  const sendLater = useRef<() => Promise<boolean>>(() => Promise.resolve(false));
   const isStopped = useRef(first.keeping.kind === 'conflict');
 
   const send = useCallback(async (): Promise<boolean> => {
@@ -122,7 +125,6 @@ export function useKeptDraft(server: Server, isReadOnly: boolean): KeptDraft {
     if (flight.current === work) flight.current = null;
     return done;
   }, [server.id]);
-  const sendLater = useRef(send);
 
   useEffect(() => {
     sendLater.current = send;
