@@ -2,14 +2,20 @@
 import { CONVENTIONS } from '@/lib/numerics/equation';
 import type { NumericScheme } from '@/lib/numerics/numeric-scheme';
 import type { SchemeFacts } from '@/lib/facts/facts';
-import { pointsPerWave } from './points-per-wave';
+import { fewestPoints, worstError } from './points-per-wave';
 import { decays } from './run-error';
 import type { Requirement } from './requirement';
 
 /** Where a scheme has no bound, speeds are parts of this value: one cell a step. */
 export const UNBOUNDED_REFERENCE = 1;
 /** Parts of the fastest admissible parameter that are tried: a shorter step may allow a coarser grid. */
-const PARTS = [1, 0.85, 0.7, 0.5, 0.35, 0.25, 0.15, 0.1, 0.06, 0.03];
+const PARTS = Array.from({ length: 26 }, (_, k) => 0.84 ** k);
+const CURVE_SAMPLES = 49;
+const CURVE_START = 8;
+/** Where there is no bound, steps beyond one cell are tried too. */
+const LONG_PARTS = [256, 64, 16, 8, 4, 2, ...PARTS];
+/** A bound that is not itself stable (a double root stands there) is kept this far away from. */
+const SHORT_OF_BOUND = 0.999;
 
 export interface RunCost {
   readonly pointsPerWave: number;
@@ -24,14 +30,16 @@ export interface RunCost {
   readonly memory: number;
 }
 
-/** Largest stable parameter with the sign asked; null where nothing is stable, Infinity where there is no end. */
+/** Largest stable parameter with a positive speed; null where no step is stable, Infinity where there is no end. */
 export function largestAdmissible({ stability }: SchemeFacts): number | null {
   if (stability.verdict === 'unconditionally stable') return Infinity;
   const reach = stability.intervals
-    .filter(({ lo }) => lo === null || Number(lo) <= 1e-12)
-    .map(({ hi }) => (hi === null ? Infinity : Number(hi)));
-  const largest = Math.max(0, ...reach);
-  return largest > 0 ? largest : null;
+    .filter(({ lo, hi }) => (lo === null || Number(lo) <= 1e-12) && (hi === null || Number(hi) > 0))
+    .map(({ hi, hiIncluded }) => {
+      if (hi === null) return Infinity;
+      return hiIncluded === false ? Number(hi) * SHORT_OF_BOUND : Number(hi);
+    });
+  return reach.length > 0 ? Math.max(...reach) : null;
 }
 
 /** Whether the bound is the same for both signs of the speed. */
@@ -64,6 +72,13 @@ function costAt(scheme: NumericScheme, facts: SchemeFacts, points: number, param
   };
 }
 
+/** Parameter values worth trying for the fastest speed, longest step first. */
+export function parametersToTry(bound: number, fastest: number): number[] {
+  const isBounded = Number.isFinite(bound);
+  const reference = (isBounded ? bound : UNBOUNDED_REFERENCE) * fastest;
+  return (isBounded ? PARTS : LONG_PARTS).map((part) => reference * part);
+}
+
 /**
  * The cheapest run that keeps the error asked, over the admissible parameters.
  * @returns null where the scheme is stable nowhere or no grid up to the limit reaches the tolerance
@@ -75,15 +90,41 @@ export function cheapestRun(
 ): RunCost | null {
   const bound = largestAdmissible(facts);
   if (bound === null) return null;
-  const reference = Number.isFinite(bound) ? bound : UNBOUNDED_REFERENCE;
   const ratio = asked.slowest / asked.fastest;
+  const measure = MEASURES[asked.rank];
+  const tolerance = asked.errorPercent / 100;
   let best: RunCost | null = null;
-  for (const part of PARTS) {
-    const parameter = reference * asked.fastest * part;
-    const points = pointsPerWave(scheme, parameter * ratio, parameter, asked.errorPercent / 100, asked.duration);
+  for (const parameter of parametersToTry(bound, asked.fastest)) {
+    const holds = (points: number) =>
+      worstError(scheme, parameter * ratio, parameter, points, asked.duration) <= tolerance;
+    // Points at which this step would cost as much as the best so far: where they do not hold, it cannot be cheaper.
+    if (best && !holds(best.pointsPerWave * equalCostRatio(scheme, asked.rank, parameter / best.parameter))) continue;
+    const points = fewestPoints(holds);
     if (points === null) continue;
     const cost = costAt(scheme, facts, points, parameter);
-    if (!best || MEASURES[asked.rank](cost) < MEASURES[asked.rank](best)) best = cost;
+    if (!best || measure(cost) < measure(best)) best = cost;
   }
   return best;
+}
+
+/** Error of the worst speed against points a wave, at the step of `parameter`; both ends included. */
+export function errorCurve(
+  scheme: NumericScheme,
+  parameter: number,
+  ratio: number,
+  duration: number,
+  pointsMax: number,
+): { points: number; error: number }[] {
+  return Array.from({ length: CURVE_SAMPLES }, (_, k) => {
+    const points = CURVE_START * (pointsMax / CURVE_START) ** (k / (CURVE_SAMPLES - 1));
+    return { points, error: worstError(scheme, parameter * ratio, parameter, points, duration) };
+  });
+}
+
+/** How many times the points may grow when the parameter is multiplied by `longer`, at the same measure. */
+function equalCostRatio(scheme: NumericScheme, rank: Requirement['rank'], longer: number): number {
+  if (rank === 'memory') return 1;
+  const { dims, spaceOrder, timeOrder } = CONVENTIONS[scheme.equation];
+  const stepsPower = spaceOrder / timeOrder;
+  return longer ** (1 / (rank === 'steps' ? stepsPower : dims + stepsPower));
 }

@@ -27,17 +27,10 @@ export function worstError(
 }
 
 /**
- * @param tolerance error allowed, > 0
- * @returns N such that every finer grid tried (by doublings) also holds the tolerance; null where even `POINTS_MAX` does not
+ * The fewest points a wavelength for which `holds` is true, and stays true on the finer grids tried (by doublings).
+ * @returns null where even `POINTS_MAX` does not hold
  */
-export function pointsPerWave(
-  scheme: NumericScheme,
-  slowest: number,
-  fastest: number,
-  tolerance: number,
-  duration: number,
-): number | null {
-  const holds = (n: number) => worstError(scheme, slowest, fastest, n, duration) <= tolerance;
+export function fewestPoints(holds: (pointsPerWave: number) => boolean): number | null {
   let enough = 8;
   while (!(holds(enough) && holds(enough * 2) && holds(enough * 1.5))) {
     enough *= 2;
@@ -56,3 +49,12 @@ export function pointsPerWave(
   }
   return enough;
 }
+
+/** @param tolerance error allowed, part of the wave, > 0 */
+export const pointsPerWave = (
+  scheme: NumericScheme,
+  slowest: number,
+  fastest: number,
+  tolerance: number,
+  duration: number,
+): number | null => fewestPoints((n) => worstError(scheme, slowest, fastest, n, duration) <= tolerance);

@@ -4,8 +4,9 @@
  */
 import { CONVENTIONS, type Equation } from '@/lib/numerics/equation';
 import { equationNumbersAt, exactExponent } from '@/lib/numerics/exact-wave';
-import type { NumericScheme } from '@/lib/numerics/numeric-scheme';
+import { polynomialAt, type NumericScheme } from '@/lib/numerics/numeric-scheme';
 import { trackPrincipalRoot } from '@/lib/numerics/principal-root';
+import { polynomialRoots } from '@/lib/numerics/roots';
 
 /** How long a run lasts is counted in periods of the wave, or in e-foldings where the equation only decays. */
 export const decays = (equation: Equation) => equation.startsWith('diffusion') || equation === 'hyperdiffusion';
@@ -36,6 +37,45 @@ export interface RunError {
 
 const LOST: RunError = { total: Infinity, phase: 0, amplitude: 0, steps: Infinity };
 
+interface Factor {
+  readonly re: number;
+  readonly im: number;
+  readonly argument: number;
+}
+
+/** From this many points a wave on, a root much nearer to the exact factor than any other is the principal one. */
+const TOLD_AT_ONCE = 12;
+const MUCH_NEARER = 0.02;
+
+/**
+ * The amplification factor of the principal root at one wave. Tracking it from long waves costs tens of polynomials;
+ * it is left for the few waves at which nearness does not settle which root is meant.
+ */
+function principalFactor(
+  scheme: NumericScheme,
+  parameters: readonly number[],
+  direction: readonly number[],
+  t: number,
+  [logGain, turn]: readonly [number, number],
+): Factor | null {
+  const [re, im] = [Math.exp(logGain) * Math.cos(turn), Math.exp(logGain) * Math.sin(turn)];
+  const theta = direction.map((component) => component * t);
+  if (scheme.degree === 1 || t <= (2 * Math.PI) / TOLD_AT_ONCE) {
+    const roots = polynomialRoots(polynomialAt(scheme, parameters, theta));
+    const order = Array.from(roots.re, (x, k) => ({ k, away: Math.hypot(x - re, roots.im[k]! - im) })).sort(
+      (a, b) => a.away - b.away,
+    );
+    const [own, other] = order;
+    if (own && (!other || own.away < MUCH_NEARER * other.away)) {
+      const argument = Math.atan2(roots.im[own.k]!, roots.re[own.k]!);
+      const turns = Math.round((turn - argument) / (2 * Math.PI));
+      return { re: roots.re[own.k]!, im: roots.im[own.k]!, argument: argument + turns * 2 * Math.PI };
+    }
+  }
+  const tracked = trackPrincipalRoot(scheme, parameters, direction, [t])[0];
+  return tracked && tracked.index >= 0 ? tracked : null;
+}
+
 /**
  * @param parameter       common value of the scheme's parameters, not 0
  * @param pointsPerWave   N ≥ 2, along the wave's own direction
@@ -56,8 +96,8 @@ export function runErrorAlong(
   const perStep = decays(scheme.equation) ? Math.abs(re) : Math.abs(im) / (2 * Math.PI);
   if (!(perStep > 0)) return LOST;
   const steps = duration / perStep;
-  const tracked = trackPrincipalRoot(scheme, parameters, direction, [t])[0];
-  if (!tracked || tracked.index < 0) return LOST;
+  const tracked = principalFactor(scheme, parameters, direction, t, [re, im]);
+  if (!tracked) return LOST;
   const modulus = Math.hypot(tracked.re, tracked.im);
   if (modulus === 0) return { total: 1, phase: 0, amplitude: 0, steps };
   const logGain = steps * (Math.log(modulus) - re);

@@ -69,6 +69,25 @@ export const CONDITION_NAMES: Readonly<Record<Condition, string>> = {
   state: 'the states offered',
 };
 
+/** One field asks for both orders: letting one go lets the other go. */
+const LET_GO_WITH: Readonly<Partial<Record<Condition, readonly Condition[]>>> = {
+  orderTime: ['orderTime', 'orderSpace'],
+  orderSpace: ['orderTime', 'orderSpace'],
+};
+
+/** What the field of a condition must say for the condition to be let go. */
+export const LET_GO_CHANGE: Readonly<Partial<Record<Condition, Partial<Record<keyof Requirement, string>>>>> = {
+  orderTime: { orderAtLeast: '0' },
+  orderSpace: { orderAtLeast: '0' },
+  arrays: { arraysAtMost: '0' },
+  halo: { haloAtMost: '0' },
+  bothSigns: { bothSigns: 'no' },
+  coupling: { coupling: 'any' },
+  damping: { damping: 'any' },
+  language: { language: 'any' },
+  state: { offer: 'all-open' },
+};
+
 /** Conditions that no reader may let go. */
 const FIRM: readonly Condition[] = ['stable', 'accuracy'];
 
@@ -94,35 +113,57 @@ function failing(candidate: Candidate, cost: RunCost | null, asked: Requirement)
   return CONDITIONS.filter((condition) => fails[condition]);
 }
 
-const rounded = (points: number) =>
-  points < 100 ? String(Math.ceil(points)) : Math.ceil(points).toLocaleString('en').replace(/,/g, ' ');
+/** "25", "1 234" */
+export const pointsText = (points: number) =>
+  Math.ceil(points - 1e-6)
+    .toLocaleString('en')
+    .replace(/,/g, '\u202f');
 
-function reasonFor({ candidate, cost, fails }: Omit<Placed, 'reason' | 'relative'>): string {
+function reasonFor({ candidate, cost, fails }: Omit<Placed, 'reason' | 'relative'>, asked: Requirement): string {
   const { facts } = candidate;
-  if (fails.includes('stable'))
-    return facts.stability.verdict.startsWith('weakly')
-      ? 'Weakly unstable for every step: noise grows slowly, but it grows.'
-      : 'Grows for every step.';
+  if (fails.includes('stable')) {
+    if (facts.stability.verdict.startsWith('weakly'))
+      return 'Weakly unstable at every step: noise grows slowly, but it grows.';
+    if (facts.stability.verdict.startsWith('unstable')) return 'Grows at every step.';
+    return facts.stability.intervals.length > 0
+      ? 'Stable for the other sign of the speed only.'
+      : 'No stable step is known.';
+  }
   if (cost === null) return 'No grid up to four million points a wave reaches this error.';
-  if (fails.length > 0)
-    return `Fails on ${fails.map((condition) => CONDITION_NAMES[condition]).join(' and ')}. Otherwise it would need ${rounded(cost.pointsPerWave)} points a wave.`;
+  const needs = `${pointsText(cost.pointsPerWave)} points a wave`;
+  if (fails.length > 0) {
+    const others = fails.filter((condition) => condition !== 'stable');
+    return `Does not meet ${others.map((condition) => CONDITION_NAMES[condition]).join(' and ')}. It would need ${needs}.`;
+  }
   const stages = facts.timeMethod?.stages ?? 1;
-  const parts = [`Carries the wave on ${rounded(cost.pointsPerWave)} points`];
-  if (stages > 1) parts.push(`the step pays for its ${stages} stages`);
+  const parts = [`Carries the wave on ${pointsText(cost.pointsPerWave)} points`];
+  if (stages > 1) parts.push(`each step pays for ${stages} stages and as many halo exchanges`);
   if (facts.startUpSteps > 0)
-    parts.push(`needs ${facts.startUpSteps} start-up ${facts.startUpSteps === 1 ? 'step' : 'steps'}`);
-  if (facts.dissipation?.conservative) parts.push('nothing is damped');
+    parts.push(`needs ${facts.startUpSteps} starting ${facts.startUpSteps === 1 ? 'step' : 'steps'}`);
+  if (facts.computationalModes > 0) parts.push('has a second mode');
+  if (facts.dissipation?.conservative) parts.push('damps nothing');
+  const bound = largestAdmissible(facts);
+  if (bound !== null && Number.isFinite(bound) && cost.parameter < bound * asked.fastest * 0.99)
+    parts.push('a step shorter than allowed pays, since its error in time rules');
   return `${parts.join('; ')}.`;
 }
 
+/** A candidate with the cheapest run it is good for, before it is set against others. */
+export interface Measured {
+  readonly candidate: Candidate;
+  readonly cost: RunCost | null;
+}
+
+export const measure = (candidate: Candidate, asked: Requirement): Measured => ({
+  candidate,
+  cost: cheapestRun(candidate.numeric, candidate.facts, asked),
+});
+
 /** Unstable schemes can never be ranked: without a stable step they have no cost. */
-export function shortlist(candidates: readonly Candidate[], asked: Requirement): Shortlist {
-  const measured = candidates.map((candidate) => {
-    const cost = cheapestRun(candidate.numeric, candidate.facts, asked);
-    return { candidate, cost, fails: failing(candidate, cost, asked) };
-  });
-  const measure = MEASURES[asked.rank];
-  const sizeOf = (cost: RunCost | null) => (cost === null ? Infinity : measure(cost));
+export function rank(candidates: readonly Measured[], asked: Requirement): Shortlist {
+  const measured = candidates.map((one) => ({ ...one, fails: failing(one.candidate, one.cost, asked) }));
+  const sizeBy = MEASURES[asked.rank];
+  const sizeOf = (cost: RunCost | null) => (cost === null ? Infinity : sizeBy(cost));
   const ordered = measured.sort(
     (a, b) => sizeOf(a.cost) - sizeOf(b.cost) || a.candidate.callNumber.localeCompare(b.candidate.callNumber),
   );
@@ -130,8 +171,8 @@ export function shortlist(candidates: readonly Candidate[], asked: Requirement):
     ordered.find(({ fails }) => fails.length === 0)?.cost ?? ordered.find(({ cost }) => cost !== null)?.cost ?? null;
   const placed = ordered.map((entry): Placed => ({
     ...entry,
-    relative: entry.cost && best ? measure(entry.cost) / measure(best) : null,
-    reason: reasonFor(entry),
+    relative: entry.cost && best ? sizeBy(entry.cost) / sizeBy(best) : null,
+    reason: reasonFor(entry, asked),
   }));
   const fits = placed.filter(({ fails }) => fails.length === 0);
   return {
@@ -143,7 +184,9 @@ export function shortlist(candidates: readonly Candidate[], asked: Requirement):
 
 function letGoOf(placed: readonly Placed[]): Shortlist['letGo'] {
   const gains = CONDITIONS.filter((condition) => !FIRM.includes(condition)).map((condition) => {
-    const brought = placed.filter(({ fails }) => fails.length === 1 && fails[0] === condition);
+    const brought = placed.filter(({ fails }) =>
+      fails.every((one) => LET_GO_WITH[condition]?.includes(one) ?? one === condition),
+    );
     return { condition, brings: brought.length, best: brought[0]?.candidate.title ?? '' };
   });
   const most = gains.reduce((a, b) => (b.brings > a.brings ? b : a));
