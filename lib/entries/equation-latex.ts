@@ -10,7 +10,9 @@ interface EquationLatex {
 }
 
 const d = (of: string, by: string, power = 1) =>
-  power === 1 ? `\\frac{\\partial ${of}}{\\partial ${by}}` : `\\frac{\\partial^{${power}} ${of}}{\\partial ${by}^{${power}}}`;
+  power === 1
+    ? `\\frac{\\partial ${of}}{\\partial ${by}}`
+    : `\\frac{\\partial^{${power}} ${of}}{\\partial ${by}^{${power}}}`;
 const ratio = (symbol: string, factor: string, power: number, axis = 'x') =>
   `${symbol} = ${factor}\\,\\mathrm{\\Delta} t / \\mathrm{\\Delta} ${axis}${power === 1 ? '' : `^{${power}}`}`;
 const laplacian = (factor: string, axes: readonly string[], left: string): string =>

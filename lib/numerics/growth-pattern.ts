@@ -150,7 +150,12 @@ export function vanishingPattern(
     const series = new Truncated(field, size);
     const minus = field.sub(0, field.imaginary);
     const halfBack = field.inverse(PLACE);
-    const sides = ([[field.imaginary, PLACE], [minus, halfBack]] as const).map(([unit, half]) => {
+    const sides = (
+      [
+        [field.imaginary, PLACE],
+        [minus, halfBack],
+      ] as const
+    ).map(([unit, half]) => {
       const levels = coefficientSeries(series, scheme, base, unit, half);
       return levels && rootLogarithm(series, levels, field.power(unit, quarter));
     });

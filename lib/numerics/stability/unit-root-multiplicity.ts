@@ -114,9 +114,14 @@ export function exactMultiplicity(
   parameter: Rational,
   theta: number,
 ): 'multiple' | 'not multiple' | null {
-  const corner = ([[0, 1n, 0n], [Math.PI, 0n, 1n], [Math.PI / 2, 1n, 1n], [-Math.PI / 2, 1n, -1n]] as const).find(
-    ([angle]) => Math.abs(Math.abs(angle) === Math.PI ? Math.abs(theta) - Math.PI : theta - angle) < 1e-12,
-  );
+  const corner = (
+    [
+      [0, 1n, 0n],
+      [Math.PI, 0n, 1n],
+      [Math.PI / 2, 1n, 1n],
+      [-Math.PI / 2, 1n, -1n],
+    ] as const
+  ).find(([angle]) => Math.abs(Math.abs(angle) === Math.PI ? Math.abs(theta) - Math.PI : theta - angle) < 1e-12);
   if (!corner) return null;
   const position = rootPosition(atWave(wave, parameter, corner[1], corner[2]));
   return position === 'outside' || position === 'degenerate'

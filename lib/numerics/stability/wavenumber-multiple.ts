@@ -61,10 +61,16 @@ function largestWavenumberSquared(weights: readonly { k: number; weight: bigint 
   const first: IntegerPolynomial[] = [[1n], [0n, 1n]];
   const second: IntegerPolynomial[] = [[1n], [0n, 2n]];
   for (const family of [first, second])
-    while (family.length <= reach)
-      family.push(subtract(multiply([0n, 2n], family.at(-1)!), family.at(-2)!));
+    while (family.length <= reach) family.push(subtract(multiply([0n, 2n], family.at(-1)!), family.at(-2)!));
   const sum = (term: (w: { k: number; weight: bigint }) => IntegerPolynomial) =>
-    weights.reduce<IntegerPolynomial>((total, w) => subtract(total, term(w).map((c) => -c)), []);
+    weights.reduce<IntegerPolynomial>(
+      (total, w) =>
+        subtract(
+          total,
+          term(w).map((c) => -c),
+        ),
+      [],
+    );
   const rate = sum(({ k, weight }) => first[k]!.map((c) => c * weight * BigInt(k)));
   const shape = sum(({ k, weight }) => second[k - 1]!.map((c) => c * weight));
   const slope = weights.reduce((total, { k, weight }) => total + BigInt(k) * weight, 0n);
