@@ -55,9 +55,9 @@ const escaped = (text: string) => text.replace(/&/g, '&amp;').replace(/</g, '&lt
 /**
  * @param source   the kernel's text
  * @param language its language
- * @returns one `<span class="cl">` a line, numbered from 1; all text is escaped
+ * @returns the marked-up content of each line; all text is escaped
  */
-export async function codeLines(source: string, language: KernelLanguage): Promise<string> {
+export async function markedLines(source: string, language: KernelLanguage): Promise<string[]> {
   const { codeToTokensBase } = await highlighter();
   // No time limit: on a cold engine a slow first line would give the rest of the block the state it ended in.
   const lines = codeToTokensBase(source.replace(/\n$/, ''), {
@@ -65,13 +65,18 @@ export async function codeLines(source: string, language: KernelLanguage): Promi
     theme: THEME.name ?? '',
     tokenizeTimeLimit: 0,
   });
-  return lines
-    .map((tokens, index) => {
-      const marked = tokens.map(({ content, color }) => {
+  return lines.map((tokens) =>
+    tokens
+      .map(({ content, color }) => {
         const look = CLASS_OF_COLOUR[color?.toLowerCase() ?? ''];
         return look ? `<span class="${look}">${escaped(content)}</span>` : escaped(content);
-      });
-      return `<span class="cl" data-n="${index + 1}">${marked.join('')}</span>`;
-    })
-    .join('');
+      })
+      .join(''),
+  );
+}
+
+/** @returns one `<span class="cl">` a line, numbered from 1 */
+export async function codeLines(source: string, language: KernelLanguage): Promise<string> {
+  const lines = await markedLines(source, language);
+  return lines.map((line, index) => `<span class="cl" data-n="${index + 1}">${line}</span>`).join('');
 }

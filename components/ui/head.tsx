@@ -7,8 +7,15 @@ import type { SignOutEverywhere } from './sign-out-buttons';
 import { ThemeButton } from './theme-button';
 import { ToolList } from './tool-list';
 
+interface HeadProps {
+  actor: Actor;
+  /** How many things wait at a tool, by its address. */
+  waiting?: Readonly<Record<string, number>>;
+  signOutEverywhere: SignOutEverywhere;
+}
+
 /** The head of every page: words above a long tube, the bubble under the tool that is open. */
-export function Head({ actor, signOutEverywhere }: { actor: Actor; signOutEverywhere: SignOutEverywhere }) {
+export function Head({ actor, waiting, signOutEverywhere }: HeadProps) {
   return (
     <header className="head">
       <a className="skip" href="#content">
@@ -20,13 +27,13 @@ export function Head({ actor, signOutEverywhere }: { actor: Actor; signOutEveryw
           Levelbook
         </Link>
         <nav className="tools" aria-label="Tools">
-          <ToolList role={actor.role} />
+          <ToolList role={actor.role} waiting={waiting} />
         </nav>
         <div className="end">
           <ThemeButton />
           <AccountMenu name={actor.name} role={actor.role} signOutEverywhere={signOutEverywhere} />
         </div>
-        <NarrowMenu name={actor.name} role={actor.role} signOutEverywhere={signOutEverywhere} />
+        <NarrowMenu name={actor.name} role={actor.role} waiting={waiting} signOutEverywhere={signOutEverywhere} />
       </div>
       <div className="tube" />
     </header>

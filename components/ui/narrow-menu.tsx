@@ -14,11 +14,12 @@ import { useDismissal } from './use-dismissal';
 interface NarrowMenuProps {
   name: string;
   role: Role;
+  waiting?: Readonly<Record<string, number>>;
   signOutEverywhere: SignOutEverywhere;
 }
 
 /** Below 700 px the tools fold into one button that carries the name of the open one. */
-export function NarrowMenu({ name, role, signOutEverywhere }: NarrowMenuProps) {
+export function NarrowMenu({ name, role, waiting, signOutEverywhere }: NarrowMenuProps) {
   const menu = useRef<HTMLDetailsElement>(null);
   const path = usePathname();
   useDismissal(menu);
@@ -29,7 +30,7 @@ export function NarrowMenu({ name, role, signOutEverywhere }: NarrowMenuProps) {
       </summary>
       <div className="panel">
         <nav aria-label="Tools" onClick={() => menu.current?.removeAttribute('open')}>
-          <ToolList role={role} />
+          <ToolList role={role} waiting={waiting} />
         </nav>
         <ThemeButton />
         <p className="lab">

@@ -12,7 +12,11 @@ interface Tool {
 /** The places of the book, in the order of the head; one line adds one. */
 export const TOOLS: readonly Tool[] = [
   { name: 'Catalog', href: '/', within: ['/sheets'] },
+  { name: 'Shortlist', href: '/shortlist', within: [] },
+  { name: 'Run budget', href: '/budget', within: ['/budget'] },
+  { name: 'Side by side', href: '/compare', within: [] },
   { name: 'Drafting table', href: '/drafts', within: ['/drafts'] },
+  { name: 'Review desk', href: '/reviews', within: ['/reviews'], minRole: 'maintainer' },
   { name: 'People', href: '/people', within: [], minRole: 'administrator' },
   { name: 'Ledger', href: '/ledger', within: [], minRole: 'administrator' },
   { name: 'Outbox', href: '/outbox', within: ['/arrived-mail'], minRole: 'administrator' },

@@ -153,6 +153,7 @@ export async function findSheet(
       state: revisions.state,
       stateReason: revisions.stateReason,
       replacedById: revisions.replacedById,
+      authorId: revisions.authorId,
       author: people.name,
       vettedAt: revisions.vettedAt,
       definition: revisions.definition,

@@ -141,8 +141,8 @@ export async function listAllSignatures(db: Database, revisionId: string) {
 }
 export type GivenSignature = Awaited<ReturnType<typeof listAllSignatures>>[number];
 
-/** What was decided last, the newest first. */
-export async function listDecisions(db: Database, limit: number) {
+/** What was decided last on revisions that the viewer may see, the newest first. */
+export async function listDecisions(db: Database, viewer: Viewer, limit: number) {
   const rows = await db
     .select({
       id: events.id,
@@ -160,7 +160,12 @@ export async function listDecisions(db: Database, limit: number) {
     .innerJoin(revisions, eq(revisions.id, events.subjectId))
     .innerJoin(entries, eq(entries.id, revisions.entryId))
     .leftJoin(people, eq(people.id, events.actorId))
-    .where(inArray(events.kind, ['revision.signed', 'revision.vetted', 'revision.returned', 'revision.withdrawn']))
+    .where(
+      and(
+        inArray(events.kind, ['revision.signed', 'revision.vetted', 'revision.returned', 'revision.withdrawn']),
+        visibleTo(viewer),
+      ),
+    )
     .orderBy(desc(events.id))
     .limit(limit);
   return rows.map(({ letters, entryNumber, at, ...row }) => ({

@@ -3,7 +3,9 @@ import { MathText } from '@/components/math/math-text';
 import { Letters } from '@/components/math/letters';
 import type { SheetView } from '@/lib/entries/entry';
 import { EQUATION_LATEX } from '@/lib/entries/equation-latex';
+import { definitionAddress } from '@/lib/facts/definitions';
 import type { Reading } from '@/lib/facts/readings';
+import { Roofline } from './roofline';
 
 const LONG_VALUE = 9;
 const isLong = (value: Reading['value']) =>
@@ -39,7 +41,13 @@ function RuleLines({ rule, sheet }: { rule: readonly string[]; sheet: SheetView 
   );
 }
 
-/** The left leaf: figures, each with what it means. */
+/** The name of a reading, as a way to its definition. */
+function Term({ term }: { term: string }) {
+  const address = definitionAddress(term);
+  return address ? <a href={address}>{term}</a> : term;
+}
+
+/** The left leaf: figures, each with what it means and how it was obtained. */
 export const Readings = ({
   rule,
   sheet,
@@ -56,17 +64,26 @@ export const Readings = ({
     </div>
     <RuleLines rule={rule} sheet={sheet} />
     <dl>
-      {readings.map(({ term, value, how }) => (
+      {readings.map(({ term, value, how, obtained }) => (
         <div key={term} className="read">
-          <dt>{term}</dt>
+          <dt>
+            <Term term={term} />
+          </dt>
           <dd className={isLong(value) ? 'long' : undefined}>
             {typeof value === 'string' ? <Letters text={value} /> : <MathText runs={value} />}
           </dd>
           <dd>
             <Letters text={how} />
+            {obtained && (
+              <span className="obtained">
+                {how && '; '}
+                {obtained}
+              </span>
+            )}
           </dd>
         </div>
       ))}
     </dl>
+    {sheet.facts && sheet.facts.kind !== 'time-method' && <Roofline cost={sheet.facts.cost} />}
   </div>
 );

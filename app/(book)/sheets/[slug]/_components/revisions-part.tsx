@@ -1,3 +1,4 @@
+import type { Route } from 'next';
 import Link from 'next/link';
 import { StateMark } from '@/components/marks/vial';
 import { longDate } from '@/lib/entries/dates';
@@ -46,5 +47,10 @@ export const RevisionsPart = ({ sheet, figure }: { sheet: SheetView; figure: num
         ))}
       </tbody>
     </table>
+    {sheet.revisions.length > 1 && (
+      <p className="bar">
+        <Link href={`/sheets/${sheet.slug}/compare?to=${sheet.revision}` as Route}>Compare two revisions</Link>
+      </p>
+    )}
   </Part>
 );

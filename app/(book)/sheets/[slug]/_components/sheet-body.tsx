@@ -8,6 +8,9 @@ import type { SheetView } from '@/lib/entries/entry';
 import { type Drawing, drawingOf } from '@/lib/facts/drawing';
 import { entryReadings } from '@/lib/facts/entry-readings';
 import type { Actor } from '@/lib/people/actor';
+import { partsToRemarkOn } from '@/lib/reviews/remark-part';
+import { REMARK_ACTIONS } from '@/app/(desk)/reviews/_components/remark-actions';
+import { shownThreads } from '@/app/(desk)/reviews/_components/shown-threads';
 import { Banners } from './banners';
 import { BoundPart } from './bound-part';
 import { CurvesPart } from './curves-part';
@@ -139,12 +142,22 @@ export function SheetBody({ actor, sheet, kernel, origin }: SheetBodyProps) {
         <Title sheet={sheet} />
         <section id="readings" tabIndex={-1} aria-label="Readings and sketch">
           <div className="spread keep">
-            <Readings rule={drawing.rule} sheet={sheet} readings={entryReadings(facts, summary, observedOrder(sheet.latestTrial))} />
+            <Readings
+              rule={drawing.rule}
+              sheet={sheet}
+              readings={entryReadings(facts, summary, observedOrder(sheet.latestTrial))}
+            />
             <SketchLeaf sheet={sheet} drawing={drawing} kernel={kernel} />
           </div>
         </section>
         {facts?.kind === 'scheme' && summary && (
-          <BoundPart figure={figureOf('bound')} facts={facts} summary={summary} />
+          <BoundPart
+            figure={figureOf('bound')}
+            definition={definition}
+            facts={facts}
+            summary={summary}
+            drawing={drawing}
+          />
         )}
         {facts?.kind === 'scheme' && <CurvesPart figure={figureOf('curves')} sheet={sheet} drawing={drawing} />}
         {definition.kind === 'stencil' && facts?.kind === 'stencil' && (
@@ -171,7 +184,14 @@ export function SheetBody({ actor, sheet, kernel, origin }: SheetBodyProps) {
           <UsedByPart sheet={sheet} figure={figureOf('used')} />
           <ReferencesPart sheet={sheet} figure={figureOf('references')} />
         </div>
-        <RemarksPart sheet={sheet} figure={figureOf('remarks')} />
+        <RemarksPart
+          key={`remarks-${sheet.revisionId}`}
+          figure={figureOf('remarks')}
+          revisionId={sheet.revisionId}
+          parts={partsToRemarkOn(sheet.kind, facts !== null)}
+          threads={shownThreads(actor, sheet)}
+          actions={REMARK_ACTIONS}
+        />
         <p className="cap caution">
           Where results bear on safety (flood levels, structures, exposure), verification and validation under the
           applicable codes and by licensed practice remain with you.
