@@ -29,7 +29,7 @@ const rationalText = (value: number) => (Number.isInteger(value) ? String(value)
 
 export const siteKey = (level: number, offset: readonly number[]) => `${level}:${offset.join(',')}`;
 
-/** Sites in the order of the formula: newest level first, then by offset. Terms that cannot be placed are left out. */
+/** Sites as the sketch is read: newest level first, then from left to right. Terms that cannot be placed are left out. */
 export function sitesOf({ terms }: TableScheme): Site[] {
   const shift = terms.every(({ level }) => Number.isFinite(numberOf(level))) ? newestLevel(terms) - 1 : 0;
   return terms
@@ -91,7 +91,7 @@ export const siteName = (level: number, offset: readonly number[]) =>
 
 /** "n minus 1, i plus 1", for the voice. */
 export const spokenSite = (level: number, offset: readonly number[]) =>
-  siteName(level, offset).replaceAll('−', 'minus').replaceAll('+', 'plus').replaceAll('½', ' and a half');
+  siteName(level, offset).replaceAll('−', 'minus').replaceAll('+', 'plus').replace(/(\d)½/g, '$1 and a half').replace('½', 'a half');
 
 /** As it is set beside a point: "−(1 − 2λ)". */
 export const prettyWeight = (text: string) =>
