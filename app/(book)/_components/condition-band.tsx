@@ -8,7 +8,7 @@ interface ConditionsProps {
 }
 
 /** The conditions that stand in the second row, opened by a word. */
-const FURTHER: readonly ConditionKey[] = ['kind', 'stable', 'damping'];
+const FURTHER: readonly ConditionKey[] = ['kind', 'stable', 'damping', 'levels', 'language'];
 
 const OptionMark = ({ condition, option }: { condition: ConditionKey; option: CountedOption }) => {
   const state = condition === 'state' ? REVISION_STATES.find((one) => one === option.value) : undefined;
