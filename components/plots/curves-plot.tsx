@@ -18,6 +18,8 @@ interface Props {
   readonly symbol: string;
   /** Largest stable value; null without end, 0 where there is none. */
   readonly limit: number | null;
+  /** Values at which further parameters stay; null for those that the slider moves. */
+  readonly held?: readonly (number | null)[];
   /** For file names. */
   readonly slug: string;
 }
@@ -56,24 +58,41 @@ function growthPlot(
   };
 }
 
-function speedPlot(sets: readonly { name: string; points: readonly CurvePoint[] }[], decays: boolean): ThetaPlotData {
+type Quantity = 'decayRate' | 'phaseSpeed' | 'groupSpeed';
+const SPEED_TITLES: Readonly<Record<Quantity, readonly [title: string, label: string]>> = {
+  decayRate: ['Decay ÷ true decay', 'Decay'],
+  phaseSpeed: ['Phase speed ÷ true speed', 'Phase speed'],
+  groupSpeed: ['Group speed ÷ true speed', 'Group speed'],
+};
+/** Group speeds turn negative on short waves. */
+const SPEED_RANGES: Readonly<Record<Quantity, [number, number]>> = {
+  decayRate: [0, 1.5],
+  phaseSpeed: [0, 1.5],
+  groupSpeed: [-1.5, 1.5],
+};
+
+function speedPlot(
+  sets: readonly { name: string; points: readonly CurvePoint[] }[],
+  quantity: Quantity,
+): ThetaPlotData {
   const looks = ['c1', 'c2', 'c3'] as const;
+  const [title, label] = SPEED_TITLES[quantity];
   return {
-    title: decays ? 'Decay ÷ true decay' : 'Phase speed ÷ true speed',
-    label: `${decays ? 'Decay' : 'Phase speed'} relative to the true one against phase angle at ${sets.map((set) => set.name).join(', ')}`,
+    title,
+    label: `${label} relative to the true one against phase angle at ${sets.map((set) => set.name).join(', ')}`,
     theta: POSITIONS,
     curves: sets.map(({ name, points }, k) => ({
       name,
       look: looks[k]!,
-      values: column(points, (point) => (decays ? point.decayRate : point.phaseSpeed)),
+      values: column(points, (point) => point[quantity]),
     })),
-    range: [0, 1.5],
+    range: SPEED_RANGES[quantity],
     reference: 1,
   };
 }
 
 /** Damping and phase speed at a parameter value that the reader moves along the staff. */
-export function CurvesPlot({ numeric, symbol, limit, slug }: Props) {
+export function CurvesPlot({ numeric, symbol, limit, held, slug }: Props) {
   const { max, start } = sliderOf(limit);
   const [value, setValue] = useState(start);
   const curvesAt = useMemo(() => {
@@ -81,11 +100,11 @@ export function CurvesPlot({ numeric, symbol, limit, slug }: Props) {
     return (at: number) =>
       schemeCurves(
         numeric,
-        numeric.parameters.map(() => at),
+        numeric.parameters.map((_, k) => held?.[k] ?? at),
         direction,
         POSITIONS,
       );
-  }, [numeric]);
+  }, [held, numeric]);
   const decays = numeric.equation.includes('diffusion') && !numeric.equation.startsWith('advection');
   const fixed = useMemo(
     () =>
@@ -101,15 +120,14 @@ export function CurvesPlot({ numeric, symbol, limit, slug }: Props) {
   const named = (at: number) => `${symbol} = ${decimalText(at, 3)}`;
 
   const growth = growthPlot(points, past, named(value), pastAt === null ? '' : `${named(pastAt)}, past the bound`);
-  const speed = speedPlot(
-    [
-      { name: named(value), points },
-      ...fixed
-        .filter(({ at }) => Math.abs(at - value) > 1e-9)
-        .map((set) => ({ name: named(set.at), points: set.points })),
-    ],
-    decays,
-  );
+  const sets = [
+    { name: named(value), points },
+    ...fixed
+      .filter(({ at }) => Math.abs(at - value) > 1e-9)
+      .map((set) => ({ name: named(set.at), points: set.points })),
+  ];
+  const speed = speedPlot(sets, decays ? 'decayRate' : 'phaseSpeed');
+  const group = decays ? null : speedPlot(sets, 'groupSpeed');
   const largest = Math.max(...points.map((point) => point.maxModulus));
 
   return (
@@ -118,7 +136,7 @@ export function CurvesPlot({ numeric, symbol, limit, slug }: Props) {
         <StaffSlider
           label={
             <>
-              {numeric.parameters.length > 1 ? 'Common value of ' : 'Value of '}
+              {numeric.parameters.length > 1 && !held ? 'Common value of ' : 'Value of '}
               <span className="m">{symbol}</span>
             </>
           }
@@ -151,6 +169,19 @@ export function CurvesPlot({ numeric, symbol, limit, slug }: Props) {
           <SavePlot data={speed} name={`${slug}-speed`} />
         </figure>
       </div>
+      {group && (
+        <details className="numbers groupspeed">
+          <summary>Group speed</summary>
+          <figure className="lonefigure">
+            <ThetaPlot data={group} id={`${slug}-group`} />
+            <figcaption className="cap">
+              Where packets of waves travel. Below zero they run against the true direction.
+            </figcaption>
+            <CurveTable data={group} />
+            <SavePlot data={group} name={`${slug}-group-speed`} />
+          </figure>
+        </details>
+      )}
     </>
   );
 }

@@ -1,7 +1,7 @@
 /** What the stability facts mean, in sentences. Every figure in them is computed. */
 import { angleText, waveText } from './angle-text';
 import type { StabilityFacts, StableInterval } from './facts';
-import { decimalText, limitText, raised, symbolText } from './reading-texts';
+import { decimalText, limitText, raised, signed, symbolText, withSymbols } from './reading-texts';
 import { capital } from './readings';
 
 type Method = StabilityFacts['method'];
@@ -34,6 +34,41 @@ function endSentences(interval: StableInterval, symbol: string): string[] {
   return mirrored ? sentences.slice(-1) : sentences;
 }
 
+/** Single values inside and outside the intervals that behave otherwise than what surrounds them. */
+function singleValueSentences({ intervals, isolatedStablePoints }: StabilityFacts, symbol: string): string[] {
+  const inside = intervals.flatMap(({ interiorDefects = [] }) =>
+    interiorDefects.map(
+      ({ at, theta, why }) =>
+        `Inside, at ${symbol} = ${decimalText(Number(at))} and ${waveText(Math.abs(theta))}: ${why.replace(/\.$/, '')}.`,
+    ),
+  );
+  if (isolatedStablePoints.length === 0) return inside;
+  const values = isolatedStablePoints.map((value) => signed(value)).join(', ');
+  return [...inside, `Stable at ${symbol} = ${values} by itself, with unstable values on both sides.`];
+}
+
+const READABLE = 60;
+
+/** The polynomial that an end without a closed form is a root of. */
+function polynomialSentences(interval: StableInterval, symbol: string): string[] {
+  const ends = [
+    { end: interval.hi, exact: interval.hiExact, polynomial: interval.hiMinimalPolynomial },
+    { end: interval.lo, exact: interval.loExact, polynomial: interval.loMinimalPolynomial },
+  ];
+  const told = ends.flatMap(({ end, exact, polynomial }) => {
+    if (end === null || !polynomial) return [];
+    const power = polynomial.replace(/\*\*(\d+)/g, (_, digits: string) => raised(digits)).replace(/\*/g, '');
+    const text = signed(power).replace(/lambda|sigma|mu/g, (name) => symbolText(name));
+    const form = exact ? `${signed(exact.replace(/\*/g, ' '))}, ` : '';
+    return text.length <= READABLE
+      ? [`${symbol} = ${decimalText(Number(end), 12)} is ${form}a root of ${text}.`]
+      : exact
+        ? [`${symbol} = ${decimalText(Number(end), 12)} is ${form.slice(0, -2)}.`]
+        : [];
+  });
+  return told.slice(0, 1);
+}
+
 /** "2" → "²", "5/2" → "^(5/2)" */
 const powerText = (power: string) => (power === '1' ? '' : /^\d+$/.test(power) ? raised(power) : `^(${power})`);
 
@@ -42,11 +77,12 @@ function growthSentence({ growth, parameter }: StabilityFacts): string | null {
   const side = growth?.positive ?? growth?.negative;
   if (!side) return null;
   const law = `the excess over 1 a step goes as ${symbol}${powerText(side.q)} for small ${symbol}`;
-  if (!side.at) return `${capital(law)}.`;
+  const found = side.exponentMethod === 'exact' ? ' (the exponent is exact)' : ' (the exponent is numeric)';
+  if (!side.at) return `${capital(law)}${found}.`;
   const steps = side.at.stepsToTenfold;
   const tenfold =
     steps === null ? '' : `, and noise is ten times as high after ${Math.ceil(steps).toLocaleString('en-GB')} steps`;
-  return `${capital(law)}; at ${symbol} = ${decimalText(side.at.parameter)} the worst wave grows by ${decimalText(side.at.growthPerStep, 3)} a step${tenfold}.`;
+  return `${capital(law)}${found}; at ${symbol} = ${decimalText(side.at.parameter)} the worst wave grows by ${decimalText(side.at.growthPerStep, 3)} a step${tenfold}.`;
 }
 
 /** Where and how fast it is lost, for a scheme that has no stable value. */
@@ -75,10 +111,12 @@ export function boundSentences(stability: StabilityFacts): string[] {
   return [
     opening[stability.verdict] ?? null,
     ...stability.intervals.flatMap((interval) => endSentences(interval, symbol)),
+    ...stability.intervals.flatMap((interval) => polynomialSentences(interval, symbol)),
+    ...singleValueSentences(stability, symbol),
     lossSentence(stability),
     isUnstable ? growthSentence(stability) : null,
-    stability.region && `In general: ${stability.region}.`,
-    stability.note,
+    stability.region && withSymbols(`In general: ${stability.region}.`),
+    stability.note && withSymbols(stability.note),
   ].filter((sentence): sentence is string => Boolean(sentence));
 }
 

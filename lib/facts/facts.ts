@@ -204,7 +204,14 @@ export const StabilityFacts = z.object({
     )
     .optional(),
   /** Several dimensions: bounds along single directions. */
-  singleDirection: z.array(z.object({ parameter: z.string(), lo: z.string().nullable(), hi: z.string().nullable() })),
+  singleDirection: z.array(
+    z.object({
+      parameter: z.string(),
+      lo: z.string().nullable(),
+      hi: z.string().nullable(),
+      method: Method.optional(),
+    }),
+  ),
   method: Method,
   note: z.string().nullable(),
 });

@@ -25,6 +25,12 @@ export function symbolText(parameter: string): string {
   return index === undefined ? letter : `${letter}${SUBSCRIPTS[index] ?? `_${index}`}`;
 }
 
+/** Names of numbers within a sentence as letters, powers raised: "lambda^2 <= 2 r" → "λ² <= 2 r". */
+export const withSymbols = (sentence: string) =>
+  sentence
+    .replace(/\b(?:lambda|sigma|mu|theta|kappa|r|q)(?:_[xyz])?(?![a-z_])/g, (name) => symbolText(name))
+    .replace(/\^(\d)(?!\d)/g, (_, digit: string) => raised(digit));
+
 /** Signs as set in the book: U+2212 minus. */
 export const signed = (text: string) => text.replace(/-/g, '−');
 
@@ -85,11 +91,12 @@ function intervalRuns(bound: Bound, symbol: string): MathRun[] {
  */
 export function boundRuns(summary: Pick<FactsSummary, 'bounds' | 'parameter' | 'verdict'>): MathRun[] {
   const { bounds, parameter, verdict } = summary;
+  if (verdict === 'two-parameter region') return [upright('a region')];
   if (parameter === null || verdict === null) return [upright('none')];
   const symbol = symbolText(parameter);
   if (verdict === 'unconditionally stable') return [upright('no limit')];
   if (verdict.includes('unstable')) return [upright('no '), italic(symbol), upright(' ≠ 0')];
-  if (bounds.length === 0) return [upright(verdict === 'two-parameter region' ? 'a region' : 'not decided')];
+  if (bounds.length === 0) return [upright('not decided')];
   return bounds.flatMap((bound, k) =>
     k === 0 ? intervalRuns(bound, symbol) : [upright(' or '), ...intervalRuns(bound, symbol)],
   );

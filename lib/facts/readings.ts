@@ -6,6 +6,8 @@ export interface Reading {
   readonly value: string | readonly MathRun[];
   /** Plain sentence parts; symbols such as λ stand as letters. */
   readonly how: string;
+  /** "exact", "certified bracket, …", "numeric, to …", "counted"; absent where `how` says it. */
+  readonly obtained?: string;
 }
 
 const NUMBERS = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine'];

@@ -2,7 +2,7 @@
 import { boundClause } from './bound-texts';
 import type { OrderFacts, SchemeFacts } from './facts';
 import type { FactsSummary } from './facts-summary';
-import { boundRuns, signed, symbolText } from './reading-texts';
+import { boundRuns, raised, signed, symbolText, withSymbols } from './reading-texts';
 import { type Reading, counted, countWord } from './readings';
 
 export interface ObservedOrder {
@@ -12,8 +12,7 @@ export interface ObservedOrder {
   readonly refined: string;
 }
 
-const exponent = (power: number) =>
-  power === 1 ? '' : ['⁰', '¹', '²', '³', '⁴', '⁵', '⁶', '⁷', '⁸', '⁹'][Math.abs(power)];
+const exponent = (power: number) => (power === 1 ? '' : raised(String(Math.abs(power))));
 
 /** "Δx²/Δt": a term of the truncation error that has a step below the line. */
 function conditionalText({ dt, dx }: { dt: number; dx: number }): string {
@@ -34,26 +33,47 @@ function specialText({ specialValues }: OrderFacts, symbol: string): string {
 }
 
 function orderReadings(order: OrderFacts, parameter: string | null, observed: ObservedOrder | null): Reading[] {
-  const seen = observed
-    ? `observed ${observed.slope} on ${counted(observed.grids, observed.refined)}`
-    : 'exact, from the truncated series';
+  const seen = observed ? `observed ${observed.slope} on ${counted(observed.grids, observed.refined)}` : null;
   const symbol = symbolText(parameter ?? 'lambda');
+  const special = specialText(order, symbol) || null;
+  const isConditional = order.conditionalTerms.length > 0;
+  const condition = slowestOf(order.conditionalTerms).map(conditionalText).join(' and ');
+  const obtained = order.reason ? undefined : 'exact, from the truncated series';
   if (order.pT === null || order.pX === null) {
-    const condition = order.conditionalTerms.map(conditionalText).join(' and ');
-    const how = condition
-      ? `at fixed ${symbol} only: consistent while ${condition} → 0`
-      : `at fixed ${symbol}; ${seen}`;
-    const raised = order.orderAtFixedParameter;
-    return [{ term: 'Order', value: raised === null ? 'exact' : String(raised), how }];
+    const fixed = isConditional ? `at fixed ${symbol} only: consistent while ${condition} → 0` : `at fixed ${symbol}`;
+    const fixedOrder = order.orderAtFixedParameter;
+    return [
+      {
+        term: 'Order',
+        value: fixedOrder === null ? 'exact' : String(fixedOrder),
+        how: joined(fixed, seen, special, order.reason),
+        obtained,
+      },
+    ];
   }
-  const special = specialText(order, symbol);
-  const condition =
-    order.conditionalTerms.length > 0
-      ? `only while ${order.conditionalTerms.map(conditionalText).join(' and ')} → 0`
-      : null;
+  const only = isConditional ? `conditionally consistent: only while ${condition} → 0` : null;
   return [
-    { term: 'Order in time', value: String(order.pT), how: condition ?? seen },
-    { term: 'Order in space', value: String(order.pX), how: special ? `${seen}; ${special}` : seen },
+    { term: 'Order in time', value: String(order.pT), how: joined(only ?? seen, order.reason), obtained },
+    { term: 'Order in space', value: String(order.pX), how: joined(seen, special), obtained },
+  ];
+}
+
+/** Of the terms over the same power of Δt the one that tends to 0 last. */
+const slowestOf = (terms: OrderFacts['conditionalTerms']) =>
+  terms.filter(({ dt, dx }) => !terms.some((other) => other.dt === dt && other.dx < dx));
+
+const joined = (...parts: readonly (string | null)[]) => parts.filter((part) => part !== null).join('; ');
+
+/** What the leading term of the modified equation does. */
+function addsReading({ modifiedEquationLeading: leading, meaning }: OrderFacts): Reading[] {
+  if (!leading || !meaning) return [];
+  return [
+    {
+      term: 'Adds',
+      value: `(iθ)${exponent(leading.powerOfITheta)}`,
+      how: withSymbols(meaning).replace(/\.$/, ''),
+      obtained: 'exact',
+    },
   ];
 }
 
@@ -64,16 +84,17 @@ function levelReading({ levels, startUpSteps }: SchemeFacts): Reading[] {
     return by === 0 ? 'n' : `n ${by > 0 ? '+' : '−'} ${Math.abs(by)}`;
   });
   const start = startUpSteps === 0 ? 'starts by itself' : `needs ${counted(startUpSteps, 'starting step')}`;
-  return [{ term: 'Time levels', value: String(levels), how: `${names.join(', ')}; ${start}` }];
+  return [{ term: 'Time levels', value: String(levels), how: `${names.join(', ')}; ${start}`, obtained: 'counted' }];
 }
 
-function modesReading({ computationalModes }: SchemeFacts): Reading[] {
+function modesReading({ computationalModes, rootsPerWave }: SchemeFacts): Reading[] {
   if (computationalModes === 0) return [];
   return [
     {
       term: 'Other modes',
       value: String(computationalModes),
-      how: `${counted(computationalModes, 'computational mode')} beside the physical one`,
+      how: `${counted(computationalModes, 'computational mode')} beside the physical one; ${counted(rootsPerWave, 'root')} for each wave`,
+      obtained: 'counted',
     },
   ];
 }
@@ -84,14 +105,19 @@ function costReadings({ cost }: SchemeFacts): Reading[] {
       term: 'Flops a point',
       value: String(cost.operations),
       how: `${counted(cost.additions, 'sum')}, ${counted(cost.multiplications, 'product')}, coefficients outside the loop`,
+      obtained: 'counted',
     },
     {
       term: 'Bytes a point',
       value: String(cost.bytesDouble),
       how: `real64: ${counted(cost.loads, 'load')}, ${counted(cost.stores, 'store')}; ${cost.bytesSingle} in real32`,
+      obtained: 'counted',
     },
   ];
 }
+
+const ON_A_GRID = 'numeric, on a grid of waves';
+const EXPONENT = 'exponent exact, other waves on a grid';
 
 function dampingReading({ dissipation }: SchemeFacts): Reading[] {
   if (!dissipation) return [];
@@ -100,7 +126,7 @@ function dampingReading({ dissipation }: SchemeFacts): Reading[] {
     .join(', ');
   const order = dissipation.principalRootDampingOrder;
   if (dissipation.conservative) {
-    return [{ term: 'Damping', value: 'none', how: '|g| = 1 for every wave below the bound' }];
+    return [{ term: 'Damping', value: 'none', how: '|g| = 1 for every wave below the bound', obtained: ON_A_GRID }];
   }
   if (dissipation.kreissDissipative) {
     return [
@@ -108,18 +134,55 @@ function dampingReading({ dissipation }: SchemeFacts): Reading[] {
         term: 'Damping',
         value: `order ${dissipation.kreissOrder ?? order ?? ''}`.trim(),
         how: `dissipative in the sense of Kreiss: every wave but the mean is damped, at ${at}`,
+        obtained: EXPONENT,
       },
     ];
   }
   if (order !== null && order < 0)
-    return [{ term: 'Damping', value: 'growth', how: `the physical wave grows, at ${at}` }];
+    return [{ term: 'Damping', value: 'growth', how: `the physical wave grows, at ${at}`, obtained: EXPONENT }];
   return [
     {
       term: 'Damping',
       value: order === null ? 'none' : `order ${order}`,
       how: `of the physical wave; not every wave is damped, at ${at}`,
+      obtained: EXPONENT,
     },
   ];
+}
+
+/** The other form of storage, the direction of the sweep, registers of stages. */
+function storageReadings({ storage }: SchemeFacts): Reading[] {
+  const readings: Reading[] = [
+    { term: 'Arrays', value: String(storage.arraysInPlace), how: storage.reason, obtained: 'counted' },
+  ];
+  const { arraysWithRollingBuffer: buffered, rollingBufferLayers: layers, sweep } = storage;
+  if (buffered !== null && layers !== null && buffered < storage.arraysInPlace)
+    readings.push({
+      term: 'With a buffer',
+      value: String(buffered),
+      how: `and a rolling buffer of ${counted(layers, 'saved layer')}`,
+      obtained: 'counted',
+    });
+  if (sweep)
+    readings.push({
+      term: 'Sweep',
+      value: [...new Set(sweep)].join(', '),
+      how: `in place, the points are written in ${sweep.length === 1 ? 'this order' : 'this order along each axis'}`,
+      obtained: 'exact',
+    });
+  const registers = [
+    storage.registersGeneral === null ? null : `${storage.registersGeneral} in general`,
+    storage.registersAccumulating === null ? null : `${storage.registersAccumulating} when sums are accumulated`,
+    storage.registersLowStorage === null ? null : `${storage.registersLowStorage} in low-storage form`,
+  ].filter((text) => text !== null);
+  if (registers.length > 0)
+    readings.push({
+      term: 'Registers',
+      value: String(storage.arraysInPlace),
+      how: `of the stages: ${registers.join(', ')}`,
+      obtained: 'counted',
+    });
+  return readings;
 }
 
 /** Halo per dimension: "1 | 1", in several dimensions one pair an axis. */
@@ -137,10 +200,11 @@ function haloHow(facts: SchemeFacts): string {
 export function schemeReadings(facts: SchemeFacts, summary: FactsSummary, observed: ObservedOrder | null): Reading[] {
   return [
     ...orderReadings(facts.order, summary.parameter, observed),
+    ...addsReading(facts.order),
     { term: 'Bound', value: boundRuns(summary), how: boundClause(facts.stability) },
     ...levelReading(facts),
-    { term: 'Arrays', value: String(facts.storage.arraysInPlace), how: facts.storage.reason },
-    { term: 'Halo', value: haloText(facts.halo), how: haloHow(facts) },
+    ...storageReadings(facts),
+    { term: 'Halo', value: haloText(facts.halo), how: haloHow(facts), obtained: 'counted' },
     ...costReadings(facts),
     ...dampingReading(facts),
     ...modesReading(facts),

@@ -191,8 +191,19 @@ function iteratedRow(
   }
 }
 
+/** Largest modulus at one wave: without iteration up to two roots. */
+function modulusOf({ re, im }: ComplexArray, warm: ComplexArray | undefined): [number, ComplexArray | undefined] {
+  if (re.length === 2) return [Math.hypot(re[0]!, im[0]!) / Math.hypot(re[1]!, im[1]!), undefined];
+  if (re.length === 3) return [quadraticModulus(re[2]!, im[2]!, re[1]!, im[1]!, re[0]!, im[0]!), undefined];
+  const roots = polynomialRoots({ re, im }, warm);
+  return [largestModulus(roots), roots];
+}
+
+/** Moduli beyond this are not told apart: the search for the worst wave of a cell ends there. */
+const CLEARLY_UNSTABLE = 1.5;
+
 /**
- * Largest modulus over all waves on a plane of two parameters.
+ * Largest modulus over all waves of a grid on a plane of two parameters; where it passes 1.5, some modulus beyond.
  * @returns value at first[i], second[j] at j * first.length + i
  */
 export function stabilityPlane(
@@ -209,10 +220,12 @@ export function stabilityPlane(
       const coefficients = coefficientsAt(scheme, [first[i]!, second[j]!]);
       let worst = 0;
       let warm: ComplexArray | undefined;
-      for (let index = 0; index < grid.count; index++) {
+      // From the short waves down: most unstable cells are told by them.
+      for (let index = grid.count - 1; index >= 0 && !(worst > CLEARLY_UNSTABLE); index--) {
         grid.polynomial(index, coefficients, polynomial);
-        warm = polynomialRoots(polynomial, warm);
-        worst = Math.max(worst, largestModulus(warm));
+        let modulus: number;
+        [modulus, warm] = modulusOf(polynomial, warm);
+        worst = Math.max(worst, Number.isNaN(modulus) ? Infinity : modulus);
       }
       out[j * first.length + i] = worst;
     }

@@ -39,7 +39,7 @@ export interface StabilityAnalysis {
   cuts: { fixed: Record<string, string>; intervals: [string | null, string | null][]; method: StabilityMethod }[];
   /** Advection with diffusion only. */
   lambdaLimitAtR?: LambdaLimit[];
-  singleDirection: { parameter: string; lo: string | null; hi: string | null }[];
+  singleDirection: { parameter: string; lo: string | null; hi: string | null; method: StabilityMethod }[];
   method: StabilityMethod;
   note: string | null;
 }
@@ -248,13 +248,16 @@ function singleDirections(
       [name],
       scheme.parameters.map((_, j) => (j === k ? variable(1, 0) : zero)),
     );
-    const { intervals, verdict } = decided(oneParameter(alone, { ...budget, timeLimitMs: budget.timeLimitMs / 6 }));
+    const { intervals, verdict, method } = decided(
+      oneParameter(alone, { ...budget, timeLimitMs: budget.timeLimitMs / 6 }),
+    );
     if (verdict === 'not decided within the time budget') return;
     const main = mainInterval(intervals);
     listed.push({
       parameter: name,
       lo: main ? (main.loExact ?? main.lo) : '0',
       hi: main ? (main.hiExact ?? main.hi) : '0',
+      method,
     });
     bounds.push({
       name,

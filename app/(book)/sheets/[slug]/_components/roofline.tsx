@@ -7,7 +7,8 @@ import { decimalText } from '@/lib/facts/reading-texts';
 
 const START_GIGABYTES = 20;
 
-const paceText = (gigabytes: number, bytes: number) => `${decimalText((gigabytes * 1000) / bytes, 3)} million points a second`;
+const paceText = (gigabytes: number, bytes: number) =>
+  `${decimalText((gigabytes * 1000) / bytes, 3)} million points a second`;
 
 /** What the memory of a machine allows: the pace that no kernel of this scheme can pass there. */
 export function Roofline({ cost }: { cost: Cost }) {
