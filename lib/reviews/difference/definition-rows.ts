@@ -35,11 +35,10 @@ function stencilRows({ dims, derivative, operator, offsets, weights, lhs }: Sten
         .map(([word, factor]) => `${signed(factor)} u_${word}`)
         .join(' + ')
     : `derivative ${derivative ?? 0}`;
-  const side = (name: string, at: readonly Offset[], given: readonly string[] | null) =>
-    at.map((offset, k) => ({
-      place: `${name} at ${offsetText(offset)}`,
-      value: given?.[k] === undefined ? 'of highest order' : signed(given[k]),
-    }));
+  const side = (name: string, at: readonly Offset[], given: readonly string[] | null): Row[] =>
+    given === null
+      ? [{ place: `${name}s`, value: `those of highest order at ${at.map(offsetText).join('; ')}` }]
+      : at.map((offset, k) => ({ place: `${name} at ${offsetText(offset)}`, value: signed(given[k] ?? '') }));
   return [
     { place: 'Dimensions', value: String(dims) },
     { place: 'Approximates', value: of },
