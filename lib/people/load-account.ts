@@ -1,6 +1,7 @@
 import 'server-only';
 import type { Database } from '@/db/client';
 import { countAdministrators, findAccount } from '@/db/queries/people';
+import { env } from '@/lib/env';
 import { Refusal } from '@/lib/refusal';
 import type { Account } from './account-rules';
 
@@ -15,8 +16,8 @@ export async function loadAccount(db: Database, personId: string): Promise<Accou
     demo: found.demo,
     isClosed: found.disabledAt !== null,
     hasPassword: found.passwordHash !== null,
-    // The demo's administrators stand in for each other only.
-    administrators: await countAdministrators(db, found.demo),
+    // Outside demo mode the demo's administrators cannot sign in, and keep no house.
+    administrators: await countAdministrators(db, env().LEVELBOOK_DEMO),
   };
 }
 

@@ -214,7 +214,7 @@ describe('the last administrator', () => {
     });
   });
 
-  it('is not thought to be one of the demo, whose accounts work in demo mode only', async () => {
+  it('is not thought to be one of the demo, whose accounts do not work outside demo mode', async () => {
     await aPerson('administrator', { passwordHash, demo: true });
     await expect(demote(ruth, ruth)).rejects.toThrow(LAST_ADMINISTRATOR);
   });

@@ -3,6 +3,7 @@ import { db } from '@/db/client';
 import { listPeople } from '@/db/queries/people';
 import { requireActor } from '@/lib/auth/require-actor';
 import { moment } from '@/lib/entries/dates';
+import { env } from '@/lib/env';
 import { closingObstacle, roleObstacle, secondInvitationObstacle } from '@/lib/people/account-rules';
 import { ROLES } from '@/lib/people/role';
 import { standingText } from '@/lib/people/standing';
@@ -15,13 +16,16 @@ export default async function PeoplePage() {
   const actor = await requireActor('administrator');
   const people = await listPeople(db);
   const now = new Date();
-  const keepers = people.filter((one) => one.role === 'administrator' && one.hasPassword && !one.disabledAt);
+  const demoMode = env().LEVELBOOK_DEMO;
+  const keepers = people.filter(
+    (one) => one.role === 'administrator' && one.hasPassword && !one.disabledAt && (demoMode || !one.demo),
+  );
 
   const lines = people.map((one) => {
     const account = {
       ...one,
       isClosed: one.disabledAt !== null,
-      administrators: keepers.filter(({ demo }) => one.demo || !demo).length,
+      administrators: keepers.length,
     };
     const other = ROLES.find((role) => role !== one.role) ?? 'reader';
     return {
@@ -46,9 +50,10 @@ export default async function PeoplePage() {
       <header className="placehd">
         <h1>People</h1>
         <p className="q">
-          {ROLES.map((role) => `${people.filter((one) => one.role === role && !one.disabledAt).length} ${role}s`).join(
-            ', ',
-          )}
+          {ROLES.map((role) => {
+            const count = people.filter((one) => one.role === role && !one.disabledAt).length;
+            return `${count} ${role}${count === 1 ? '' : 's'}`;
+          }).join(', ')}
           ; each role includes the ones before it.
         </p>
       </header>

@@ -51,13 +51,9 @@ export default async function LetterPage({ params }: PageProps<'/arrived-mail/[i
         </pre>
       </section>
       {letter.html && (
-        <section aria-labelledby="html">
-          <h2 className="parthd" id="html">
-            As HTML
-          </h2>
-          {/* Sandboxed without any right: no script, no form, no way out of the frame. */}
-          <iframe className="mailframe" sandbox="" srcDoc={letter.html} title="The letter as HTML" />
-        </section>
+        <p className="pager">
+          <a href={`/arrived-mail/${letter.id}/html`}>The same letter as HTML</a>
+        </p>
       )}
     </>
   );
