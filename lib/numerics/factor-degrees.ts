@@ -44,8 +44,11 @@ function productOf(
   return remainder(field, product, monic);
 }
 
-/** Degrees of the irreducible factors modulo one prime; null where the image is not square-free of the full degree. */
-function degreesModulo(field: PrimeField, f: IntegerPolynomial): number[] | null {
+/**
+ * Degrees up to `most` of the irreducible factors modulo one prime; null where the image is not square-free of the
+ * full degree.
+ */
+function degreesModulo(field: PrimeField, f: IntegerPolynomial, most: number): number[] | null {
   if (field.reduce(leading(f)) === 0) return null;
   const image = f.map((c) => field.reduce(c));
   const inverse = field.inverse(image.at(-1)!);
@@ -54,7 +57,7 @@ function degreesModulo(field: PrimeField, f: IntegerPolynomial): number[] | null
   if (modularGcd(field, rest, slope).length > 1) return null;
   const found: number[] = [];
   let power: ModularPolynomial = [0, 1];
-  for (let d = 1; 2 * d < rest.length; d++) {
+  for (let d = 1; d <= most && 2 * d < rest.length; d++) {
     let next: ModularPolynomial = [1];
     const base = remainder(field, [...power], rest);
     for (const bit of field.prime.toString(2)) {
@@ -69,6 +72,7 @@ function degreesModulo(field: PrimeField, f: IntegerPolynomial): number[] | null
     for (let k = 0; k < (common.length - 1) / d; k++) found.push(d);
     if (common.length > 1) rest = quotient(field, rest, common);
   }
+  // What is left has factors of higher degree only, or is irreducible.
   if (rest.length > 1) found.push(rest.length - 1);
   return found;
 }
@@ -85,19 +89,22 @@ function quotient(field: PrimeField, a: ModularPolynomial, monic: ModularPolynom
   return result;
 }
 
-/** possible[d] is false only where no factor of degree d exists. */
-export function possibleFactorDegrees(f: IntegerPolynomial): boolean[] {
+/**
+ * possible[d] is false only where no factor of degree d exists.
+ * @param most degrees asked about; higher ones are not told apart and may be called possible
+ */
+export function possibleFactorDegrees(f: IntegerPolynomial, most = degree(f)): boolean[] {
   const n = degree(f);
   let possible = new Array<boolean>(n + 1).fill(true);
   let images = 0;
   for (const prime of PRIMES) {
-    const degrees = degreesModulo(new PrimeField(prime), f);
+    const degrees = degreesModulo(new PrimeField(prime), f, most);
     if (!degrees) continue;
     const sums = new Array<boolean>(n + 1).fill(false);
     sums[0] = true;
     for (const d of degrees) for (let k = n; k >= d; k--) if (sums[k - d]) sums[k] = true;
-    possible = possible.map((each, k) => each && sums[k]!);
-    if (++images === IMAGES || possible.slice(1, n).every((each) => !each)) break;
+    possible = possible.map((each, k) => k > most || (each && sums[k]!));
+    if (++images === IMAGES || possible.slice(1, Math.min(n, most + 1)).every((each) => !each)) break;
   }
   return possible;
 }

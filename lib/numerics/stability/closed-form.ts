@@ -22,6 +22,8 @@ const POLYNOMIAL_TEXT_MAX = 1200;
 const SEARCH_DEGREE_MAX = 6;
 /** Digits of the number, in bits per coefficient of the relation looked for. */
 const SEARCH_BITS = 64;
+/** Largest coefficient of a relation that is taken for one. */
+const RELATION_MAX = 1n << 52n;
 
 /** An integer polynomial of degree ≤ n that vanishes at the number, proved; null where none is found. */
 function smallRelation(value: AlgebraicNumber, n: number, check: () => void): IntegerPolynomial | null {
@@ -37,6 +39,8 @@ function smallRelation(value: AlgebraicNumber, n: number, check: () => void): In
     rows.push(row);
   }
   const shortest = reducedLattice(rows, check)[0]!;
+  // Without a relation the shortest vector is about as long as the digits allow: no need to try it.
+  if (shortest.some((c) => (c < 0n ? -c : c) >= RELATION_MAX)) return null;
   const candidate = primitivePart(trimmed(shortest.slice(0, n + 1)));
   return candidate.length > 1 && value.isRootOf(candidate) ? candidate : null;
 }
@@ -63,7 +67,7 @@ function minimalCandidate(value: AlgebraicNumber, check: () => void): IntegerPol
       .every((each) => !each)
   )
     return polynomial;
-  const possible = possibleFactorDegrees(polynomial);
+  const possible = possibleFactorDegrees(polynomial, SEARCH_DEGREE_MAX);
   for (let n = 1; n <= SEARCH_DEGREE_MAX; n++) {
     if (n >= degree(polynomial) || !possible[n]) continue;
     const found = smallRelation(value, n, check);

@@ -46,6 +46,8 @@ const magnitudes = (thetas: readonly number[]) =>
   [...new Set(thetas.map((theta) => Math.abs(theta)))].sort((a, b) => a - b);
 
 function endBehaviour({ wave, survey, check }: Context, value: AlgebraicNumber): EndBehaviour {
+  const isAlwaysSolvable = survey.curve.factors.every(({ kind }) => kind !== 'lead');
+  if (rootCount(wave) === 1 && isAlwaysSolvable) return { stableAtLimit: true, why: TWO_LEVEL };
   const behaviour = behaviourAt(wave, survey.parts, value, check);
   if (behaviour.unsolvable.length > 0)
     return { stableAtLimit: false, why: UNSOLVABLE, theta: magnitudes(behaviour.unsolvable) };
