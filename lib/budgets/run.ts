@@ -1,126 +1,193 @@
-/** A run as the budget takes it, in SI units, and what it costs: steps, memory, bytes, time, error. */
-import { z } from 'zod';
+/** A run in SI units and what it costs with one scheme: steps, memory, bytes, time, error. */
 import { CONVENTIONS } from '@/lib/numerics/equation';
 import type { NumericScheme } from '@/lib/numerics/numeric-scheme';
 import type { SchemeFacts } from '@/lib/facts/facts';
+import { fewestPoints } from '@/lib/shortlist/points-per-wave';
 import { decays, runError } from '@/lib/shortlist/run-error';
 
-const positive = (low: number, high: number, sentence: string) =>
-  z.coerce
-    .number({ error: sentence })
-    .refine((value) => Number.isFinite(value) && value >= low && value <= high, sentence);
+const BYTES_A_VALUE = 8;
 
-export const Run = z.object({
-  /** Extent of the grid along each dimension, m; unused dimensions are ignored. */
-  length: positive(1e-9, 1e9, 'Accepted: a length between 1 nm and 1 000 000 km, in metres.').default(6000),
-  width: positive(1e-9, 1e9, 'Accepted: a width between 1 nm and 1 000 000 km, in metres.').default(1200),
-  height: positive(1e-9, 1e9, 'Accepted: a height between 1 nm and 1 000 000 km, in metres.').default(600),
-  /** Fastest speed, m/s; for diffusion the diffusivity, m²/s. */
-  speed: positive(
-    1e-12,
-    3e8,
-    'Accepted: a speed between 1e-12 and 3e8 m/s (for diffusion a diffusivity in m²/s).',
-  ).default(1500),
+export interface Run {
+  /** Extent of the grid along each dimension, m. */
+  readonly extents: readonly number[];
+  /** Speeds on the grid, m/s, fastest first; the equation's own coefficient (m²/s, …) where it has no speed. */
+  readonly speeds: readonly [number, ...number[]];
   /** Shortest wave that matters, m. */
-  wavelength: positive(1e-9, 1e9, 'Accepted: a wavelength between 1 nm and 1 000 000 km, in metres.').default(15),
+  readonly wavelength: number;
   /** Time to march, s. */
-  time: positive(1e-12, 1e11, 'Accepted: a time between 1e-12 s and about 3000 years, in seconds.').default(4.4),
-  /** Spacing, m, equal in all dimensions. */
-  spacing: positive(1e-12, 1e9, 'Accepted: a spacing between 1e-12 and 1e9 m.').default(1),
-  /** Part of the stable bound at which to march. */
-  part: positive(0.001, 1, 'Accepted: a part of the bound between 0.001 and 1.').default(0.9),
-  /** Memory bandwidth of one node, bytes/s, and its memory, bytes. */
-  bandwidth: positive(1e6, 1e15, 'Accepted: a bandwidth between 1 MB/s and 1 PB/s, in bytes a second.').default(1.8e11),
-  memory: positive(1e3, 1e18, 'Accepted: a memory between 1 kB and 1 EB, in bytes.').default(9.6e10),
-  processes: positive(1, 1e6, 'Accepted: 1 to 1 000 000 processes.').default(1),
-});
-export type Run = z.infer<typeof Run>;
+  readonly time: number;
+  /** Smallest spacing over the spacing of the error, 0 … 1: a stretched grid steps by its smallest cell. */
+  readonly smallest: number;
+  /** A diffusion that shares the step: m²/s and the largest stable ν dt/dx²; null where there is none. */
+  readonly diffusion: { readonly diffusivity: number; readonly bound: number } | null;
+  /** Of one node: bytes a second, bytes. */
+  readonly bandwidth: number;
+  readonly memory: number;
+  readonly nodes: number;
+}
+
+export interface Subject {
+  readonly numeric: NumericScheme;
+  readonly facts: SchemeFacts;
+  /** Largest stable parameter; Infinity without end. */
+  readonly bound: number;
+}
+
+export interface Tolerance {
+  /** Degrees of phase, or part of the wave. */
+  readonly kind: 'angle' | 'part';
+  readonly value: number;
+}
 
 export interface RunCosting {
   readonly spacing: number;
+  /** Of the fastest speed, at the spacing of the error. */
   readonly parameter: number;
   /** Time step, s. */
   readonly step: number;
   readonly steps: number;
   readonly points: number;
   readonly pointsPerWave: number;
-  /** Bytes kept, halos included. */
+  /** Bytes kept on all nodes, halos included. */
   readonly memory: number;
   /** Bytes moved in the whole run. */
   readonly bytes: number;
   readonly operations: number;
-  /** Seconds at the bandwidth given; all processes together. */
+  /** Seconds at the bandwidth given; all nodes together. */
   readonly seconds: number;
-  /** Error at the end of the run, of the shortest wave, part of its amplitude; and its phase, radians. */
+  /** Error of the shortest wave at the end, worst speed: part of the wave, and degrees of phase. */
   readonly error: number;
-  readonly phase: number;
-  /** False where the parameter is past the bound. */
+  readonly drift: number;
+  /** False where the step is past the bound. */
   readonly stable: boolean;
 }
 
-const extents = ({ length, width, height }: Run, dims: number) => [length, width, height].slice(0, dims);
-
-/** Cells along one side of a process, and those kept for its halo. */
-function keptCells(run: Run, facts: SchemeFacts, spacing: number, dims: number): { points: number; kept: number } {
-  const cells = extents(run, dims).map((extent) => Math.max(1, Math.round(extent / spacing)));
-  const points = cells.reduce((product, n) => product * n, 1);
-  const perSide = Math.round(run.processes ** (1 / dims));
-  const kept = cells.reduce((product, n, k) => {
-    const [left, right] = facts.halo[k] ?? facts.halo[0] ?? [0, 0];
-    const split = Math.max(1, k === dims - 1 ? Math.round(run.processes / perSide ** (dims - 1)) : perSide);
-    return product * (n + split * (left + right));
-  }, 1);
-  return { points, kept };
+export interface TimeLimit {
+  readonly name: string;
+  /** Largest step that this limit allows, s. */
+  readonly step: number;
 }
+
+const powerOf = (scheme: NumericScheme) =>
+  CONVENTIONS[scheme.equation].spaceOrder / CONVENTIONS[scheme.equation].timeOrder;
 
 /** dt of a parameter value on a spacing: lambda dx / c, r dx² / nu, mu dx³ / eps, q dx⁴ / kappa. */
 export const stepOf = (parameter: number, spacing: number, speed: number, scheme: NumericScheme) =>
-  (parameter * spacing ** (CONVENTIONS[scheme.equation].spaceOrder / CONVENTIONS[scheme.equation].timeOrder)) / speed;
+  (parameter * spacing ** powerOf(scheme)) / speed;
 export const parameterOf = (step: number, spacing: number, speed: number, scheme: NumericScheme) =>
-  (step * speed) / spacing ** (CONVENTIONS[scheme.equation].spaceOrder / CONVENTIONS[scheme.equation].timeOrder);
+  (step * speed) / spacing ** powerOf(scheme);
 
-/** Periods of the shortest wave (or its e-foldings) that the run lasts. */
-export function durationOf(run: Run, scheme: NumericScheme): number {
-  const { spaceOrder, timeOrder } = CONVENTIONS[scheme.equation];
-  const power = spaceOrder / timeOrder;
-  const rate = run.speed * ((2 * Math.PI) / run.wavelength) ** power;
+/** Periods of the shortest wave (or its e-foldings) that the run lasts at one speed. */
+export function durationOf(run: Pick<Run, 'wavelength' | 'time'>, speed: number, scheme: NumericScheme): number {
+  const rate = speed * ((2 * Math.PI) / run.wavelength) ** powerOf(scheme);
   return decays(scheme.equation) ? run.time * rate : (run.time * rate) / (2 * Math.PI);
 }
 
+/** Points of the grid, and those kept when every node holds a block with its halos. */
+export function keptPoints(run: Pick<Run, 'extents' | 'nodes'>, facts: SchemeFacts, spacing: number) {
+  const dims = run.extents.length;
+  const cells = run.extents.map((extent) => Math.max(1, Math.round(extent / spacing)));
+  const perSide = Math.max(1, Math.round(run.nodes ** (1 / dims)));
+  const kept = cells.reduce((product, n, k) => {
+    const [left, right] = facts.halo[k] ?? facts.halo[0] ?? [0, 0];
+    const split = k === dims - 1 ? Math.max(1, Math.round(run.nodes / perSide ** (dims - 1))) : perSide;
+    return product * (n + split * (left + right));
+  }, 1);
+  return { points: cells.reduce((product, n) => product * n, 1), kept };
+}
+
 /**
- * @param parameter CFL number (or diffusion number) at which to march, > 0
- * @param bound     largest stable value; Infinity without end
+ * The largest step of each limit at the wanted parameter: every speed on the smallest cell, and the diffusion.
+ * @param parameter wanted for the fastest speed; the diffusion is kept as far below its own bound as this is below its
  */
-export function costOfRun(
+export function timeLimits(run: Run, { numeric, bound }: Subject, spacing: number, parameter: number): TimeLimit[] {
+  const cell = spacing * run.smallest;
+  const part = Number.isFinite(bound) ? parameter / bound : 1;
+  const speeds = run.speeds.map((speed, k) => ({
+    name:
+      run.speeds.length > 1
+        ? `speed ${k + 1} of ${run.speeds.length}`
+        : decays(numeric.equation)
+          ? 'the equation'
+          : 'the speed',
+    step: stepOf(parameter, cell, speed, numeric),
+  }));
+  if (!run.diffusion) return speeds;
+  return [
+    ...speeds,
+    { name: 'the diffusion', step: (part * run.diffusion.bound * cell ** 2) / run.diffusion.diffusivity },
+  ];
+}
+
+/** Of several limits the smallest step rules. */
+export const rulingLimit = (limits: readonly TimeLimit[]): TimeLimit | null =>
+  limits.reduce<TimeLimit | null>((least, limit) => (least === null || limit.step < least.step ? limit : least), null);
+
+/** Error and phase at the end of the run, the worst of the speeds. */
+export function errorOfRun(
   run: Run,
-  scheme: NumericScheme,
-  facts: SchemeFacts,
+  { numeric }: Subject,
   spacing: number,
-  parameter: number,
-  bound: number,
-): RunCosting {
-  const { dims } = CONVENTIONS[scheme.equation];
-  const { points, kept } = keptCells(run, facts, spacing, dims);
-  const step = stepOf(parameter, spacing, run.speed, scheme);
+  step: number,
+): { error: number; drift: number } {
+  const points = run.wavelength / spacing;
+  if (points < 2) return { error: Infinity, drift: Infinity };
+  const errors = run.speeds.map((speed) =>
+    runError(numeric, parameterOf(step, spacing, speed, numeric), points, durationOf(run, speed, numeric)),
+  );
+  return {
+    error: Math.max(...errors.map(({ total }) => total)),
+    drift: Math.max(
+      ...errors.map(({ phase, total }) => (Number.isFinite(total) ? (Math.abs(phase) * 180) / Math.PI : Infinity)),
+    ),
+  };
+}
+
+/** @param step s; it is taken as it is, stable or not */
+export function costOfStep(run: Run, subject: Subject, spacing: number, step: number): RunCosting {
+  const { numeric, facts, bound } = subject;
+  const { points, kept } = keptPoints(run, facts, spacing);
   const steps = Math.ceil(run.time / step - 1e-9);
   const bytes = points * steps * facts.cost.bytesDouble;
-  const pointsPerWave = run.wavelength / spacing;
-  const error = pointsPerWave < 2 ? null : runError(scheme, parameter, pointsPerWave, durationOf(run, scheme));
+  const cell = spacing * run.smallest;
   return {
     spacing,
-    parameter,
+    parameter: parameterOf(step, spacing, run.speeds[0], numeric),
     step,
     steps,
     points,
-    pointsPerWave,
-    memory: kept * facts.storage.arraysInPlace * 8,
+    pointsPerWave: run.wavelength / spacing,
+    memory: kept * facts.storage.arraysInPlace * BYTES_A_VALUE,
     bytes,
     operations: points * steps * facts.cost.operations,
-    seconds: bytes / (run.bandwidth * run.processes),
-    error: error?.total ?? Infinity,
-    phase: error?.phase ?? Infinity,
-    stable: parameter <= bound * (1 + 1e-12),
+    seconds: bytes / (run.bandwidth * run.nodes),
+    ...errorOfRun(run, subject, spacing, step),
+    stable:
+      parameterOf(step, cell, run.speeds[0], numeric) <= bound * (1 + 1e-9) &&
+      (!run.diffusion || (step * run.diffusion.diffusivity) / cell ** 2 <= run.diffusion.bound * (1 + 1e-9)),
   };
+}
+
+/** The run at the step that all limits allow. */
+export function costOfRun(run: Run, subject: Subject, spacing: number, parameter: number): RunCosting {
+  return costOfStep(run, subject, spacing, rulingLimit(timeLimits(run, subject, spacing, parameter))!.step);
+}
+
+/** How far the costing is from the tolerance, 1 at it. */
+export const shareOf = (costing: Pick<RunCosting, 'error' | 'drift'>, { kind, value }: Tolerance) =>
+  (kind === 'angle' ? costing.drift : costing.error) / value;
+
+/** The coarsest spacing that holds the tolerance at a parameter; null where none does. */
+export function spacingFor(run: Run, subject: Subject, parameter: number, tolerance: Tolerance): number | null {
+  const points = fewestPoints((n) => {
+    const spacing = run.wavelength / n;
+    const { step } = rulingLimit(timeLimits(run, subject, spacing, parameter))!;
+    const found = errorOfRun(run, subject, spacing, step);
+    // A phase turned right round is no small drift: the whole error must be that of an angle, too.
+    const lost = tolerance.kind === 'angle' && found.error > 2;
+    return !lost && shareOf(found, tolerance) <= 1;
+  });
+  return points === null ? null : run.wavelength / points;
 }
 
 export interface Rung {
@@ -132,24 +199,20 @@ export interface Rung {
 }
 
 /** The ladder: twice the spacing, as asked, half, a quarter. */
-export function ladder(run: Run, scheme: NumericScheme, facts: SchemeFacts, parameter: number, bound: number): Rung[] {
-  const asked = stepOf(parameter, run.spacing, run.speed, scheme);
-  return [2, 1, 1 / 2, 1 / 4].map((factor) => {
-    const spacing = run.spacing * factor;
-    return {
-      factor,
-      scaled: costOfRun(run, scheme, facts, spacing, parameter, bound),
-      stepKept: costOfRun(run, scheme, facts, spacing, parameterOf(asked, spacing, run.speed, scheme), bound),
-    };
-  });
+export function ladder(run: Run, subject: Subject, spacing: number, parameter: number): Rung[] {
+  const { step } = costOfRun(run, subject, spacing, parameter);
+  return [2, 1, 1 / 2, 1 / 4].map((factor) => ({
+    factor,
+    scaled: costOfRun(run, subject, spacing * factor, parameter),
+    stepKept: costOfStep(run, subject, spacing * factor, step),
+  }));
 }
 
-/** The smallest spacing whose arrays fit the memory of all processes; null where not even one cell a side fits. */
-export function finestSpacing(run: Run, scheme: NumericScheme, facts: SchemeFacts): number | null {
-  const { dims } = CONVENTIONS[scheme.equation];
-  const available = run.memory * run.processes;
-  const needs = (spacing: number) => keptCells(run, facts, spacing, dims).kept * facts.storage.arraysInPlace * 8;
-  let coarse = Math.max(...extents(run, dims));
+/** The smallest spacing whose arrays fit the memory of all nodes; null where not even one cell a side fits. */
+export function finestSpacing(run: Run, facts: SchemeFacts): number | null {
+  const available = run.memory * run.nodes;
+  const needs = (spacing: number) => keptPoints(run, facts, spacing).kept * facts.storage.arraysInPlace * BYTES_A_VALUE;
+  let coarse = Math.max(...run.extents);
   if (needs(coarse) > available) return null;
   let fine = coarse;
   while (needs(fine) <= available && fine > 1e-15) fine /= 2;
@@ -159,18 +222,4 @@ export function finestSpacing(run: Run, scheme: NumericScheme, facts: SchemeFact
     else fine = middle;
   }
   return coarse;
-}
-
-export interface TimeLimit {
-  readonly name: string;
-  /** Largest step that this limit allows, s. */
-  readonly step: number;
-}
-
-/** Of several limits (advection and diffusion, several speeds, a smallest spacing) the smallest step rules. */
-export function rulingLimit(limits: readonly TimeLimit[]): TimeLimit | null {
-  return limits.reduce<TimeLimit | null>(
-    (least, limit) => (least === null || limit.step < least.step ? limit : least),
-    null,
-  );
 }

@@ -3,14 +3,14 @@ import { setImmediate } from 'node:timers/promises';
 import { db } from '@/db/client';
 import { type CandidateRow, listCandidates } from '@/db/queries/candidates';
 import type { Actor } from '@/lib/people/actor';
+import { BoundedMap } from './bounded-map';
 import type { RunCost } from './candidate';
 import { numericOf } from './numeric-of';
 import { equationOf, type Requirement } from './requirement';
 import { type Candidate, type Measured, measure, rank, type Shortlist } from './shortlist';
 
-const KEPT_MAX = 20_000;
-/** Cheapest runs by revision and by what they depend on, oldest first. */
-const costs = new Map<string, RunCost | null>();
+/** Cheapest runs by revision and by what they depend on. */
+const costs = new BoundedMap<string, RunCost | null>(20_000);
 
 /** Candidates of the book, with the sketch that stands beside them. */
 export type BookCandidate = Candidate & Pick<CandidateRow, 'summary' | 'revision'>;
@@ -46,7 +46,6 @@ export async function answerShortlist(actor: Actor, asked: Requirement): Promise
     }
     await setImmediate();
     const fresh = measure(candidate, asked);
-    if (costs.size >= KEPT_MAX) costs.delete(costs.keys().next().value ?? key);
     costs.set(key, fresh.cost);
     measured.push(fresh);
   }

@@ -2,9 +2,9 @@ import 'server-only';
 import type { CandidateRow } from '@/db/queries/candidates';
 import { canonicalScheme } from '@/lib/facts/canonical-scheme';
 import { compileScheme, type NumericScheme } from '@/lib/numerics/numeric-scheme';
+import { BoundedMap } from './bounded-map';
 
-const KEPT_MAX = 2_000;
-const compiled = new Map<string, NumericScheme | null>();
+const compiled = new BoundedMap<string, NumericScheme | null>(2_000);
 
 /** The scheme of a revision in doubles, compiled once a process; null where its definition has none. */
 export function numericOf({ revisionId, version, definition }: CandidateRow): NumericScheme | null {
@@ -13,7 +13,5 @@ export function numericOf({ revisionId, version, definition }: CandidateRow): Nu
   if (known !== undefined) return known;
   const { scheme } = definition.kind === 'scheme' ? canonicalScheme(definition) : { scheme: null };
   const numeric = scheme && compileScheme(scheme);
-  if (compiled.size >= KEPT_MAX) compiled.delete(compiled.keys().next().value ?? key);
-  compiled.set(key, numeric);
-  return numeric;
+  return compiled.set(key, numeric);
 }

@@ -104,7 +104,7 @@ function failing(candidate: Candidate, cost: RunCost | null, asked: Requirement)
     orderSpace: (facts.order.pX ?? 0) < asked.orderAtLeast,
     arrays: asked.arraysAtMost > 0 && facts.storage.arraysInPlace > asked.arraysAtMost,
     halo: asked.haloAtMost > 0 && widest(facts) > asked.haloAtMost,
-    bothSigns: signed && !holdsBothSigns(facts),
+    bothSigns: stable && signed && !holdsBothSigns(facts),
     coupling: asked.coupling === 'explicit' && !facts.storage.explicit,
     damping: asked.damping === 'none' && !facts.dissipation?.conservative,
     language: asked.language !== 'any' && !candidate.languages.includes(asked.language),
