@@ -13,18 +13,20 @@ interface MarginThreadsProps {
 }
 
 const GAP = 12;
+const LINE_HEIGHT = 24;
 
 /** Sets each thread level with its line, and below the one before where that is in the way. */
 function place(code: HTMLElement, margin: HTMLElement) {
+  const top = margin.getBoundingClientRect().top;
   let free = 0;
   for (const child of margin.children) {
     const thread = child as HTMLElement;
     const line = code.querySelector<HTMLElement>(`[data-line="${thread.dataset.beside}"]`);
     // Changed lines are taller: the text stands at the foot of its line.
-    const wanted = line ? line.offsetTop + line.offsetHeight - 24 : 0;
-    const top = Math.max(wanted, free);
-    thread.style.top = `${top}px`;
-    free = top + thread.offsetHeight + GAP;
+    const wanted = line ? line.getBoundingClientRect().bottom - LINE_HEIGHT - top : 0;
+    const at = Math.max(wanted, free);
+    thread.style.top = `${at}px`;
+    free = at + thread.offsetHeight + GAP;
   }
   margin.style.minHeight = `${free}px`;
 }
