@@ -38,6 +38,13 @@ function quadraticModulus(ar: number, ai: number, br: number, bi: number, cr: nu
   const hi = bi / 2;
   const dr = hr * hr - hi * hi - (ar * cr - ai * ci);
   const di = 2 * hr * hi - (ar * ci + ai * cr);
+  // A real discriminant, as central differences have it, needs one root only.
+  if (di === 0) {
+    const root = Math.sqrt(dr < 0 ? -dr : dr);
+    const qr = Math.abs(hr) + (dr < 0 ? 0 : root);
+    const qi = Math.abs(hi) + (dr < 0 ? root : 0);
+    return Math.sqrt((qr * qr + qi * qi) / (ar * ar + ai * ai));
+  }
   const size = Math.sqrt(dr * dr + di * di);
   let sr = Math.sqrt((size + Math.abs(dr)) / 2);
   let si = sr === 0 ? 0 : di / (2 * sr);
