@@ -7,7 +7,7 @@ import { readExpression } from '@/lib/numerics/expression';
 import { neg, type Polynomial, variable } from '@/lib/numerics/polynomial';
 import { quotientText } from '@/lib/numerics/polynomial-text';
 import { addF, fromPolynomial, negF, type RationalFunction } from '@/lib/numerics/rational-function';
-import { formatRational, parseRational } from '@/lib/numerics/rational';
+import { formatRational, parseRational, toNumber } from '@/lib/numerics/rational';
 import { LIMITS, type TableScheme } from './definition';
 import { additiveTerms, negatedExpression } from './negated-expression';
 
@@ -38,8 +38,20 @@ const joined = (parts: readonly string[]) =>
   parts.map((part, k) => (k === 0 ? part : part.startsWith('-') ? ` - ${part.slice(1)}` : ` + ${part}`)).join('') ||
   '0';
 
+const valueOf = (text: string) => toNumber(parseRational(text));
+
+/** Newest level first, then from left to right. */
+function asRead(a: Term, b: Term): number {
+  const [left, right] = [offsetsOf(a.offset), offsetsOf(b.offset)];
+  return (
+    valueOf(b.level) - valueOf(a.level) ||
+    left.reduce((order, by, axis) => order || valueOf(by) - valueOf(right[axis] ?? '0'), 0)
+  );
+}
+
 /** The terms as a line: the newest level on the left, the others on the right with their signs turned. */
-export function formulaOf(terms: readonly Term[]): string {
+export function formulaOf(written: readonly Term[]): string {
+  const terms = [...written].sort(asRead);
   const newest = newestLevel(terms);
   const left = terms.filter(({ level }) => Number(parseRational(level).num) === newest);
   const right = terms.filter((term) => !left.includes(term));

@@ -50,7 +50,9 @@ export function DraftDesk(props: DraftDeskProps) {
   );
 }
 
-const PULSE_STEPS = { '48': '48 steps', '480': '480 steps' };
+const PULSE_STEPS = { '12': '12 steps', '48': '48 steps', '480': '480 steps' };
+/** What spreads has spread before long; what travels shows its faults late. */
+const isSpreading = (equation: Draft['equation']) => equation?.includes('diffusion') === true;
 
 /** Right end of the staff, and where it stands at first. */
 function staffOf(limit: number | null): { max: number; start: number } {
@@ -68,7 +70,7 @@ function Desk({ draft, blocks, attachments, latestTrial, obstacle, isAuthor }: D
   const numeric = analysis?.numeric ?? null;
   const staff = staffOf(analysis?.limit ?? 0);
   const [moved, setMoved] = useState<number | null>(null);
-  const [steps, setSteps] = useState('480');
+  const [steps, setSteps] = useState(isSpreading(draft.equation) ? '12' : '480');
   const value = moved ?? staff.start;
   const parameter = numeric?.parameters[0] ?? null;
   const at = useMemo(() => (parameter === null ? null : { symbol: symbolText(parameter), value }), [parameter, value]);

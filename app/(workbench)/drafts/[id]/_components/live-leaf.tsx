@@ -6,6 +6,7 @@ import { MathText } from '@/components/math/math-text';
 import { CurveTable } from '@/components/plots/curve-table';
 import { ThetaPlot, type ThetaPlotData } from '@/components/plots/theta-plot';
 import { decimalText } from '@/lib/facts/reading-texts';
+import { capital } from '@/lib/facts/readings';
 import { schemeCurves } from '@/lib/numerics/curves';
 import type { NumericScheme } from '@/lib/numerics/numeric-scheme';
 import { MomentsTable } from './moments-table';
@@ -95,14 +96,13 @@ export function LiveLeaf({ live, at }: LiveLeafProps) {
         <ul className="problems" aria-label="Problems of the definition">
           {problems.map(({ pointer, severity, message }) => (
             <li key={pointer + message} className={severity === 'error' ? 'fail' : 'q'}>
-              {severity === 'error' ? '' : 'Note: '}
-              {message}
+              {severity === 'error' ? capital(message) : `Note: ${message}`}
             </li>
           ))}
         </ul>
       )}
       <dl className="live">
-        {analysis && (
+        {analysis && (numeric || analysis.verdict !== 'facts') && (
           <div className="read">
             <dt>Consistent</dt>
             <dd>{analysis.verdict === 'facts' ? 'yes' : 'no'}</dd>

@@ -91,7 +91,11 @@ export const siteName = (level: number, offset: readonly number[]) =>
 
 /** "n minus 1, i plus 1", for the voice. */
 export const spokenSite = (level: number, offset: readonly number[]) =>
-  siteName(level, offset).replaceAll('−', 'minus').replaceAll('+', 'plus').replace(/(\d)½/g, '$1 and a half').replace('½', 'a half');
+  siteName(level, offset)
+    .replaceAll('−', 'minus')
+    .replaceAll('+', 'plus')
+    .replace(/(\d)½/g, '$1 and a half')
+    .replace('½', 'a half');
 
 /** As it is set beside a point: "−(1 − 2λ)". */
 export const prettyWeight = (text: string) =>

@@ -7,6 +7,8 @@ import { asContent, dropText, isSameText, storeText, takeStoredText } from './ke
 
 const PAUSE_MS = 700;
 const RETRY_MS = 4_000;
+/** A line that is cut without a word leaves a request hanging; after this it counts as cut. */
+const ANSWER_MS = 20_000;
 
 export type Theirs = Extract<KeepAnswer, { kind: 'conflict' }>['theirs'];
 
@@ -39,6 +41,14 @@ interface Server {
 }
 
 const CUT = 'The line to the server is cut. It is tried again every few seconds.';
+
+/** The answer, or a rejection where none comes. */
+function answered<T>(asked: Promise<T>): Promise<T> {
+  return new Promise((resolve, reject) => {
+    const timer = setTimeout(() => reject(new Error('no answer')), ANSWER_MS);
+    asked.then(resolve, reject).finally(() => clearTimeout(timer));
+  });
+}
 
 function firstText(server: Server): { content: DraftContent; keeping: Keeping } {
   const stored = takeStoredText(server.id);
@@ -102,7 +112,7 @@ export function useKeptDraft(server: Server, isReadOnly: boolean): KeptDraft {
       timer.current = setTimeout(() => void sendLater.current(), RETRY_MS);
       return false;
     };
-    const work = keepDraft({ revisionId: server.id, version, content: sent }).then(
+    const work = answered(keepDraft({ revisionId: server.id, version, content: sent })).then(
       (answer) => {
         if (!answer.ok) return again(answer.message);
         if (answer.value.kind === 'conflict') {
