@@ -1,4 +1,4 @@
-/** Thousands of random and damaged definitions: an answer to each, in the shape of the schema, without a number that is none. */
+/** Ten thousand random and damaged definitions: an answer to each, in the shape of the schema, without a number that is none. */
 import { describe, expect, it } from 'vitest';
 import { CONVENTIONS, EQUATIONS } from '@/lib/numerics/equation';
 import { createBudget } from '@/lib/numerics/budget';
@@ -159,24 +159,24 @@ const KNOWN = [
 ].map(({ definition }) => definition);
 
 describe('any input is answered', () => {
-  it('damaged definitions', { timeout: 120_000 }, () => {
+  it('damaged definitions', { timeout: 300_000 }, () => {
     const random = randomFrom(20260311);
-    for (let k = 0; k < 2500; k++) check(damaged(random.pick(KNOWN), random), 20);
+    for (let k = 0; k < 5600; k++) check(damaged(random.pick(KNOWN), random), 10);
   });
 
-  it('random tables of every equation', { timeout: 120_000 }, () => {
+  it('random tables of every equation', { timeout: 300_000 }, () => {
     const random = randomFrom(7);
-    for (let k = 0; k < 1500; k++) check(randomTable(random), 20);
+    for (let k = 0; k < 2300; k++) check(randomTable(random), 10);
   });
 
-  it('random lines that hold', { timeout: 120_000 }, () => {
+  it('random lines that hold', { timeout: 300_000 }, () => {
     const random = randomFrom(5);
-    for (let k = 0; k < 250; k++) check(randomLines(random), 40);
+    for (let k = 0; k < 300; k++) check(randomLines(random), 20);
   });
 
-  it('random stencils', { timeout: 120_000 }, () => {
+  it('random stencils', { timeout: 300_000 }, () => {
     const random = randomFrom(11);
-    for (let k = 0; k < 800; k++) check(randomStencil(random), 20);
+    for (let k = 0; k < 1800; k++) check(randomStencil(random), 10);
   });
 
   it('what is no definition at all', () => {

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { AlgebraicNumber, decimalText } from '@/lib/numerics/algebraic-number';
 import { type IntegerPolynomial, multiply } from '@/lib/numerics/integer-polynomial';
 import { isolateRealRoots } from '@/lib/numerics/real-roots';
-import { realRootCount, rootsInHalfOpen, rootsInOpen, sturmChain } from '@/lib/numerics/sturm';
+import { realRootCount, rootsInHalfOpen, rootsInOpen, sturmChain } from '../../support/sturm';
 import { rational } from '@/lib/numerics/rational';
 import { dice } from './scalar-scheme-maker';
 
