@@ -1,11 +1,16 @@
 /** The same run with other schemes and other steps, all at the same error. */
-import { largestAdmissible, parametersToTry } from '@/lib/shortlist/candidate';
-import { costOfRun, type Run, type RunCosting, spacingFor, type Subject, type Tolerance } from './run';
+import { equalCostRatio, largestAdmissible, parametersToTry } from '@/lib/shortlist/candidate';
+import { costOfRun, type Run, type RunCosting, shareOf, spacingFor, type Subject, type Tolerance } from './run';
 
 /** The fastest run of a scheme that holds the tolerance, over the parameters worth trying; null where there is none. */
 export function quickestRun(run: Run, subject: Subject, tolerance: Tolerance): RunCosting | null {
   let best: RunCosting | null = null;
   for (const parameter of parametersToTry(subject.bound, 0.9)) {
+    // Where the grid that would take as long as the best run does not hold the error, this step cannot be quicker.
+    if (best && !run.diffusion) {
+      const even = best.spacing / equalCostRatio(subject.numeric, 'bytes', parameter / best.parameter);
+      if (shareOf(costOfRun(run, subject, even, parameter), tolerance) > 1) continue;
+    }
     const spacing = spacingFor(run, subject, parameter, tolerance);
     if (spacing === null) continue;
     const costing = costOfRun(run, subject, spacing, parameter);

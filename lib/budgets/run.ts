@@ -3,7 +3,7 @@ import { CONVENTIONS } from '@/lib/numerics/equation';
 import type { NumericScheme } from '@/lib/numerics/numeric-scheme';
 import type { SchemeFacts } from '@/lib/facts/facts';
 import { fewestPoints } from '@/lib/shortlist/points-per-wave';
-import { decays, runError } from '@/lib/shortlist/run-error';
+import { decays, DIRECTIONS, runErrorAlong } from '@/lib/shortlist/run-error';
 
 const BYTES_A_VALUE = 8;
 
@@ -123,7 +123,7 @@ export function timeLimits(run: Run, { numeric, bound }: Subject, spacing: numbe
 export const rulingLimit = (limits: readonly TimeLimit[]): TimeLimit | null =>
   limits.reduce<TimeLimit | null>((least, limit) => (least === null || limit.step < least.step ? limit : least), null);
 
-/** Error and phase at the end of the run, the worst of the speeds. */
+/** Error and phase at the end of the run, the worst of the speeds and of the directions on the grid. */
 export function errorOfRun(
   run: Run,
   { numeric }: Subject,
@@ -132,8 +132,16 @@ export function errorOfRun(
 ): { error: number; drift: number } {
   const points = run.wavelength / spacing;
   if (points < 2) return { error: Infinity, drift: Infinity };
-  const errors = run.speeds.map((speed) =>
-    runError(numeric, parameterOf(step, spacing, speed, numeric), points, durationOf(run, speed, numeric)),
+  const errors = run.speeds.flatMap((speed) =>
+    DIRECTIONS[CONVENTIONS[numeric.equation].dims].map((direction) =>
+      runErrorAlong(
+        numeric,
+        parameterOf(step, spacing, speed, numeric),
+        points,
+        durationOf(run, speed, numeric),
+        direction,
+      ),
+    ),
   );
   return {
     error: Math.max(...errors.map(({ total }) => total)),

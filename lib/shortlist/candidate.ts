@@ -31,7 +31,7 @@ export interface RunCost {
 }
 
 /** Largest stable parameter with a positive speed; null where no step is stable, Infinity where there is no end. */
-export function largestAdmissible({ stability }: SchemeFacts): number | null {
+export function largestAdmissible({ stability }: Pick<SchemeFacts, 'stability'>): number | null {
   if (stability.verdict === 'unconditionally stable') return Infinity;
   const reach = stability.intervals
     .filter(({ lo, hi }) => (lo === null || Number(lo) <= 1e-12) && (hi === null || Number(hi) > 0))
@@ -40,6 +40,16 @@ export function largestAdmissible({ stability }: SchemeFacts): number | null {
       return hiIncluded === false ? Number(hi) * SHORT_OF_BOUND : Number(hi);
     });
   return reach.length > 0 ? Math.max(...reach) : null;
+}
+
+/** The bound as a field names it: "up to 0.5", "below 1", "no bound". */
+export function boundWords({ stability }: Pick<SchemeFacts, 'stability'>): string {
+  const bound = largestAdmissible({ stability });
+  if (bound === null) return 'no stable step';
+  if (!Number.isFinite(bound)) return 'no bound';
+  const end = stability.intervals.find(({ hi }) => hi !== null && Number(hi) >= bound);
+  const value = Number(Number(end?.hi ?? bound).toPrecision(4));
+  return end?.hiIncluded === false ? `below ${value}` : `up to ${value}`;
 }
 
 /** Whether the bound is the same for both signs of the speed. */
@@ -122,7 +132,7 @@ export function errorCurve(
 }
 
 /** How many times the points may grow when the parameter is multiplied by `longer`, at the same measure. */
-function equalCostRatio(scheme: NumericScheme, rank: Requirement['rank'], longer: number): number {
+export function equalCostRatio(scheme: NumericScheme, rank: Requirement['rank'], longer: number): number {
   if (rank === 'memory') return 1;
   const { dims, spaceOrder, timeOrder } = CONVENTIONS[scheme.equation];
   const stepsPower = spaceOrder / timeOrder;

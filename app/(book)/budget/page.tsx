@@ -78,14 +78,7 @@ export default async function BudgetPage({ searchParams }: PageProps<'/budget'>)
           </p>
         )}
       </div>
-      <GivenForm
-        rows={read.offered}
-        own={own}
-        question={question}
-        subject={subject}
-        partners={partners}
-        partner={partner}
-      />
+      <GivenForm rows={read.offered} own={own} question={question} partners={partners} partner={partner} />
       {budget && (
         <>
           <div className="acts budget-acts">

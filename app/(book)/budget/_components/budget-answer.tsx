@@ -98,7 +98,17 @@ export function BudgetAnswer({ budget, others, addressOf }: BudgetAnswerProps) {
   const title = `${what} after ${after}`;
   const node = nodeText(run);
   const titled = `${name}, ${symbol} ${decimalText(parameter, 3)}`;
-  const plot = driftPlot({ name: titled, run, subject, tolerance, parameter, rungs, title, node }, others);
+  const plot = driftPlot(
+    { name: titled, run, subject, tolerance, parameter, rungs, title, node },
+    others.filter(
+      ({ subject: other, costing }) => other.facts !== subject.facts || costing.parameter < parameter * 0.95,
+    ),
+  );
+  // The scheme itself, where its quickest step is the one asked, is not another way.
+  const ways = others.filter(
+    ({ subject: other, costing }) =>
+      other.facts !== subject.facts || Math.abs(costing.seconds / asked!.seconds - 1) > 0.05,
+  );
   const quicker = others.find(({ costing }) => costing.seconds < asked!.seconds * 0.9);
   const shorter = others.find(
     ({ subject: other, costing }) =>
@@ -143,7 +153,7 @@ export function BudgetAnswer({ budget, others, addressOf }: BudgetAnswerProps) {
           <span>Same {what.toLowerCase()}, other ways</span>
           <span>all at {toleranceText(tolerance)}, each at its quickest step</span>
         </div>
-        <WaysTable name={titled} asked={asked!} others={others} addressOf={addressOf} />
+        <WaysTable name={titled} asked={asked!} others={ways} addressOf={addressOf} />
         <p className="cap">
           {shorter
             ? 'The error of the time step rules here: a shorter step allows a coarser grid, and the run is quicker.'

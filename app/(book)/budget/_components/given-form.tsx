@@ -2,7 +2,7 @@ import { AskForm } from '@/components/ui/ask-form';
 import type { CandidateRow } from '@/db/queries/candidates';
 import { symbolText } from '@/lib/facts/reading-texts';
 import { coefficientKind, type RunField, type RunQuestion } from '@/lib/budgets/run-question';
-import type { Subject } from '@/lib/budgets/run';
+import { boundWords } from '@/lib/shortlist/candidate';
 
 const EQUATION_WORDS: Readonly<Record<string, string>> = {
   advection: 'Advection',
@@ -21,21 +21,14 @@ interface GivenProps {
   rows: readonly CandidateRow[];
   own: CandidateRow;
   question: RunQuestion;
-  /** null where no step is stable. */
-  subject: Subject | null;
   partners: readonly CandidateRow[];
   partner: string;
 }
 
 /** What is given: the scheme, the run and the machine, in the user's own units; works without scripts. */
-export function GivenForm({ rows, own, question, subject, partners, partner }: GivenProps) {
+export function GivenForm({ rows, own, question, partners, partner }: GivenProps) {
   const symbol = symbolText(own.facts.stability.parameter ?? 'lambda');
-  const bound =
-    subject === null
-      ? 'no stable step'
-      : Number.isFinite(subject.bound)
-        ? `up to ${Number(subject.bound.toPrecision(4))}`
-        : 'no bound';
+  const bound = boundWords(own.facts);
   const kind = coefficientKind(own.equation);
   const groups = [...new Set(rows.map(({ equation }) => equation))].map((equation) => ({
     words: equationWords(equation),

@@ -156,7 +156,5 @@ export function RungsTable({ rungs, subject, tolerance, symbol, node, errorHead 
 
 function PastBound({ subject, parameter }: { subject: Subject; parameter: number }) {
   const growth = worstGrowth(subject.numeric, parameter);
-  return (
-    <small className="small red"> past a bound{growth > 1.0005 ? `: × ${decimalText(growth, 3)} a step` : ''}</small>
-  );
+  return <small className="past">past a bound{growth > 1.0005 ? `: × ${decimalText(growth, 3)} a step` : ''}</small>;
 }
