@@ -36,6 +36,7 @@ export async function listEvents(db: Database, filter: LedgerFilter, limit: numb
       at: events.at,
       reason: events.reason,
       data: events.data,
+      actorId: events.actorId,
       actor: actors.name,
       subjectId: events.subjectId,
       revision: { number: revisions.number, title: revisions.title },

@@ -38,6 +38,9 @@ export const EVENT_WORDS: Readonly<Record<EventKind, string>> = {
 export const eventWords = (kind: string): string =>
   Object.hasOwn(EVENT_WORDS, kind) ? EVENT_WORDS[kind as EventKind] : kind.replace('.', ': ');
 
+/** The same where somebody did it to their own account, whose name is not said twice. */
+export const ownEventWords = (kind: string): string => eventWords(kind).replace(/ (of|for)$/, '');
+
 /** The particulars of an event in a few words: "from reader to maintainer". */
 export function eventDetail(data: Readonly<Record<string, unknown>>): string {
   const parts: string[] = [];

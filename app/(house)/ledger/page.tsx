@@ -5,7 +5,7 @@ import { db } from '@/db/client';
 import { type ListedEvent, listEvents, listNames } from '@/db/queries/ledger';
 import { requireActor } from '@/lib/auth/require-actor';
 import { moment } from '@/lib/entries/dates';
-import { eventDetail, eventWords } from '@/lib/ledger/event-words';
+import { eventDetail, eventWords, ownEventWords } from '@/lib/ledger/event-words';
 import { ledgerQuery, readLedgerFilter } from '@/lib/ledger/ledger-filter';
 import { LedgerConditions } from './_components/ledger-conditions';
 
@@ -76,7 +76,13 @@ export default async function LedgerPage({ searchParams }: PageProps<'/ledger'>)
                   </td>
                   <td>{event.actor ?? 'The house'}</td>
                   <td>
-                    {eventWords(event.kind)} <Subject revision={event.revision} person={event.person} />
+                    {event.person && event.subjectId === event.actorId ? (
+                      ownEventWords(event.kind)
+                    ) : (
+                      <>
+                        {eventWords(event.kind)} <Subject revision={event.revision} person={event.person} />
+                      </>
+                    )}
                     <small className="q"> {eventDetail(event.data)}</small>
                   </td>
                   <td>{event.reason}</td>

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { csvLine } from '@/lib/ledger/csv-line';
 import { EVENT_KINDS } from '@/lib/ledger/event';
-import { eventDetail, eventWords } from '@/lib/ledger/event-words';
+import { eventDetail, eventWords, ownEventWords } from '@/lib/ledger/event-words';
 import { ledgerQuery, readLedgerFilter } from '@/lib/ledger/ledger-filter';
 
 describe('a line of CSV', () => {
@@ -63,6 +63,12 @@ describe('the words of the ledger', () => {
     for (const kind of EVENT_KINDS) expect(eventWords(kind)).toMatch(/^[a-z ]+$/);
     expect(eventWords('house.moved')).toBe('house: moved');
     expect(eventWords('toString')).toBe('toString');
+  });
+
+  it('do not say twice who changed their own account', () => {
+    expect(ownEventWords('person.joined')).toBe('took up the invitation');
+    expect(ownEventWords('person.password-reset')).toBe('set a new password');
+    expect(ownEventWords('person.renamed')).toBe('renamed');
   });
 
   it('tell the particulars', () => {
