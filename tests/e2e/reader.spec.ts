@@ -76,6 +76,7 @@ test('the catalog carries its conditions in the address, and says what to let go
     .getByRole('button', { name: /^Advection/ })
     .click();
   await expect(page).toHaveURL(/equation=advection/);
+  await expect(page.locator('.shown .num')).not.toHaveText(String(all));
   const left = Number(await page.locator('.shown .num').textContent());
   expect(left).toBeGreaterThan(0);
   expect(left).toBeLessThan(all);
