@@ -35,6 +35,23 @@ export const DEFINITION_CHAPTERS: readonly DefinitionChapter[] = [
     ],
   },
   {
+    title: 'What a definition may be',
+    definitions: [
+      {
+        id: 'forms',
+        title: 'Table, lines, system',
+        terms: [],
+        text: [
+          'A table lists coefficients of u at levels n+1, n, … and offsets; their sum is 0. Lines give one stencil for each term of the operator, in the order of the equation, and a method in time. A system gives one table for each unknown, in the order of the update, and may stand at half levels.',
+          'Offsets that are halves are taken as staggered grids: levels that lie half a spacing apart are brought onto one grid by the factor exp(iθ/2), which changes no modulus.',
+          'Runge–Kutta methods step u_t = f and are therefore refused for u_tt in lines: the equation has to be given as a system of first order, as a table, or with a multistep method read as Σ α u = Δt² Σ β f. Methods that are partly implicit (IMEX) need an operator of two terms of which the second is stiff: they are accepted for advection–diffusion, advection explicit and diffusion implicit, and refused elsewhere.',
+        ],
+        obtained:
+          'Definitions that do not hold are refused with the place as a pointer and, in expressions, the column.',
+      },
+    ],
+  },
+  {
     title: 'Stencils',
     definitions: [
       {

@@ -1,2 +1,2 @@
 /** Raised when the same definition may give other facts; stored beside the facts that it computed. */
-export const ENGINE_VERSION = '1.0.0';
+export const ENGINE_VERSION = '1.1.0';

@@ -23,7 +23,7 @@ import { readTimeMethod, type ExactTimeMethod } from './canonical-time-method';
 import { nominalScheme } from './canonical-scheme';
 import type { SchemeFacts, StabilityFacts } from './facts';
 import { roundingOf } from './rounding';
-import { representativeValues, schemeDissipationFacts, schemeStability } from './scheme-stability';
+import { representativeValues, schemeDissipationFacts, schemeStability, stablePair } from './scheme-stability';
 
 /** Nonzero roots z at each wave. */
 function rootsPerWave(scheme: CanonicalScheme): number {
@@ -144,7 +144,7 @@ export function schemeFacts(
   budget.progress(0.8, 'dissipation');
   const values = representativeValues(scheme, stability, order.specialValues);
   // A region without a stable pair on its cuts has no inside at which to judge damping.
-  const isInside = stability.kind === 'one-parameter' || stability.lambdaLimitAtR !== undefined;
+  const isInside = stability.kind === 'one-parameter' || stablePair(stability) !== null;
   const dissipation = order.consistent && isInside && !budget.isSpent() ? schemeDissipationFacts(meant, values) : null;
   const at = scheme.parameters.map((name, k) => `${name} = ${formatRational(values[k]!)}`).join(', ');
   const axes = scheme.dims === 1 ? 0 : scheme.dims;

@@ -29,7 +29,7 @@ function nearbyFraction(value: number): Rational {
 const numberOf = (text: string | null) => (text === null ? null : Number(text));
 
 /** A stable pair [lambda, r] on one of the cuts, half way to its end; null without one. */
-function stablePair({ lambdaLimitAtR = [] }: StabilityFacts): Rational[] | null {
+export function stablePair({ lambdaLimitAtR = [] }: StabilityFacts): Rational[] | null {
   const stretches = lambdaLimitAtR.flatMap(({ r, intervalsLambda }) =>
     intervalsLambda.map(([lo, hi]) => ({ r: parseRational(r), lo: Math.max(0, lo ?? 0), hi })),
   );

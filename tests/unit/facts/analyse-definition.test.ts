@@ -210,6 +210,49 @@ describe('the analysis of a definition', () => {
     }
   });
 
+  it('stops on its way once it is cancelled, and keeps what it has', () => {
+    const abort = new AbortController();
+    const told: string[] = [];
+    const onProgress = (_: number, stage: string) => {
+      told.push(stage);
+      if (stage === 'stability') abort.abort();
+    };
+    const { facts } = analyseDefinition(leapfrog, { budget: createBudget({ signal: abort.signal, onProgress }) });
+    expect(told).toContain('stability');
+    expect(facts).toMatchObject({
+      order: { pT: 2 },
+      stability: { verdict: 'not decided within the time budget', note: 'The analysis was cancelled.' },
+      dissipation: null,
+    });
+  });
+
+  it('ends a long analysis soon after its time', () => {
+    const offsets = ['-4', '-3', '-2', '-1', '0', '1', '2', '3'];
+    const hard = {
+      kind: 'scheme',
+      equation: 'advection',
+      form: 'lines',
+      space: [{ kind: 'stencil', dims: 1, derivative: 1, offsets, weights: null }],
+      time: {
+        kind: 'runge-kutta',
+        A: [
+          ['0', '0', '0', '0'],
+          ['1/2', '0', '0', '0'],
+          ['0', '1/2', '0', '0'],
+          ['0', '0', '1', '0'],
+        ],
+        b: ['1/6', '1/3', '1/3', '1/6'],
+      },
+    };
+    const processor = process.cpuUsage();
+    const { facts } = analyseDefinition(hard, { budget: createBudget({ timeLimitMs: 20 }) });
+    const { user, system } = process.cpuUsage(processor);
+    expect(facts).toMatchObject({ order: { pT: 4, pX: 7 } });
+    if (facts?.kind === 'scheme' && facts.stability.method !== 'exact')
+      expect(facts.stability.verdict).toBe('not decided within the time budget');
+    expect((user + system) / 1000).toBeLessThan(1500);
+  });
+
   it('tells its progress up to the end', () => {
     const told: number[] = [];
     analyseDefinition(leapfrog, { budget: createBudget({ onProgress: (fraction) => told.push(fraction) }) });
