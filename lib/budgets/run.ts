@@ -103,13 +103,8 @@ export function keptPoints(run: Pick<Run, 'extents' | 'nodes'>, facts: SchemeFac
 export function timeLimits(run: Run, { numeric, bound }: Subject, spacing: number, parameter: number): TimeLimit[] {
   const cell = spacing * run.smallest;
   const part = Number.isFinite(bound) ? parameter / bound : 1;
-  const speeds = run.speeds.map((speed, k) => ({
-    name:
-      run.speeds.length > 1
-        ? `speed ${k + 1} of ${run.speeds.length}`
-        : decays(numeric.equation)
-          ? 'the equation'
-          : 'the speed',
+  const speeds = run.speeds.map((speed) => ({
+    name: run.speeds.length > 1 ? `the speed ${speed} m/s` : decays(numeric.equation) ? 'the equation' : 'the speed',
     step: stepOf(parameter, cell, speed, numeric),
   }));
   if (!run.diffusion) return speeds;

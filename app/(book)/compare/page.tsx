@@ -12,7 +12,7 @@ import { compareEntries, listAddable } from '@/lib/comparisons/compare-entries';
 import { comparedFindings, type ComparedRow, PLACES, plainText, type Value } from '@/lib/comparisons/side-by-side';
 import { env } from '@/lib/env';
 import { ComparedPlots } from './_components/compared-plots';
-import { SharedSketch, sharedAxes } from './_components/shared-sketch';
+import { SharedSketch, sharedAxes, stageSketch } from './_components/shared-sketch';
 
 export const metadata: Metadata = { title: 'Side by side' };
 
@@ -45,7 +45,12 @@ export default async function ComparePage({ searchParams }: PageProps<'/compare'
   const addable = sheets.length < PLACES ? await listAddable(actor, sheets) : [];
   const shown = sheets.map(({ slug }) => slug);
   const origin = env().NEXTAUTH_URL.replace(/\/$/, '');
-  const axes = sharedAxes(sheets.flatMap(({ summary }) => (summary ? [summary.sketch] : [])));
+  const sketches = new Map(
+    sheets.flatMap((sheet) =>
+      sheet.summary ? [[sheet.slug, stageSketch(sheet.summary.sketch, sheet.facts)] as const] : [],
+    ),
+  );
+  const axes = sharedAxes([...sketches.values()]);
   const looks = new Map(sheets.map(({ callNumber }, k) => [callNumber, k]));
   const allRows = [...rows, ...comparedFindings(sheets, FINDING_TITLES)];
   const asText = [
@@ -149,9 +154,10 @@ export default async function ComparePage({ searchParams }: PageProps<'/compare'
             <tbody>
               <tr>
                 <th scope="row">Sketch, same axes</th>
-                {sheets.map(({ slug, title, summary }) => (
-                  <td key={slug}>{summary && <SharedSketch sketch={summary.sketch} axes={axes} title={title} />}</td>
-                ))}
+                {sheets.map(({ slug, title }) => {
+                  const sketch = sketches.get(slug);
+                  return <td key={slug}>{sketch && <SharedSketch sketch={sketch} axes={axes} title={title} />}</td>;
+                })}
               </tr>
               {allRows.map((row) => (
                 <RowOf key={row.term} row={row} />

@@ -1,3 +1,4 @@
+import type { Facts } from '@/lib/facts/facts';
 import type { FactsSummary } from '@/lib/facts/facts-summary';
 import { levelLabel } from '@/lib/facts/sketch-model';
 
@@ -18,6 +19,13 @@ export const sharedAxes = (sketches: readonly Sketch[]): SharedAxes => ({
   reach: Math.max(2, ...sketches.flatMap(({ sites }) => sites.map(({ offset }) => Math.ceil(Math.abs(offset))))),
   oldest: Math.min(0, ...sketches.flatMap(({ sites }) => sites.map(({ level }) => level))),
 });
+
+/** Of a scheme in stages, what one stage reads: all stages together reach farther than a sketch can say. */
+export function stageSketch(sketch: Sketch, facts: Facts | null): Sketch {
+  if (sketch.stages <= 1 || facts?.kind !== 'scheme') return sketch;
+  const [left, right] = facts.halo[0] ?? [0, 0];
+  return { ...sketch, sites: sketch.sites.filter(({ offset }) => offset >= -left && offset <= right) };
+}
 
 const offsetLabel = (offset: number) => (offset === 0 ? 'i' : `i ${offset > 0 ? '+' : '−'} ${Math.abs(offset)}`);
 
