@@ -4,6 +4,9 @@ import type { LiveAnalysis } from './live-analysis';
 
 export type Heard = { kind: 'analysis'; analysis: LiveAnalysis } | { kind: 'fault'; message: string };
 
+const ATTEMPTS = 4;
+const AGAIN_MS = 700;
+
 const openWorker = () => new Worker(new URL('./analysis-worker.ts', import.meta.url), { type: 'module' });
 
 export class AnalysisClient {
@@ -12,9 +15,15 @@ export class AnalysisClient {
   private spare: Worker | null = null;
   private mark = 0;
   private isBusy = false;
+  private again: ReturnType<typeof setTimeout> | undefined;
 
   /** Asks about a definition; `hear` is called once, unless another question comes first. */
   ask(definition: unknown, hear: (heard: Heard) => void): void {
+    this.tryToAsk(definition, hear, 1);
+  }
+
+  private tryToAsk(definition: unknown, hear: (heard: Heard) => void, attempt: number): void {
+    clearTimeout(this.again);
     if (this.isBusy) this.giveUp();
     const worker = (this.worker ??= openWorker());
     this.spare ??= openWorker();
@@ -28,8 +37,11 @@ export class AnalysisClient {
     };
     worker.onerror = (event) => {
       event.preventDefault();
-      this.giveUp();
-      hear({ kind: 'fault', message: event.message });
+      this.close();
+      // A worker that could not be fetched is often there a moment later.
+      if (attempt < ATTEMPTS)
+        this.again = setTimeout(() => this.tryToAsk(definition, hear, attempt + 1), AGAIN_MS * attempt);
+      else hear({ kind: 'fault', message: event.message });
     };
     worker.postMessage({ mark, definition } satisfies Question);
   }
@@ -42,6 +54,7 @@ export class AnalysisClient {
   }
 
   close(): void {
+    clearTimeout(this.again);
     this.worker?.terminate();
     this.spare?.terminate();
     this.worker = this.spare = null;

@@ -18,6 +18,7 @@ async function signInForDrafts(page: Page): Promise<void> {
 async function beginDraft(page: Page, title: string): Promise<string> {
   await page.getByLabel('Title').fill(title);
   await page.getByRole('button', { name: 'Begin the draft' }).click();
+  await page.waitForURL(/\/drafts\/[0-9a-f-]{36}$/);
   await expect(page.getByRole('heading', { name: title })).toBeVisible();
   await expect(page.getByText('Analysis, as you draw')).toBeVisible();
   return new URL(page.url()).pathname;

@@ -1,10 +1,17 @@
 import { CopyText } from '@/components/ui/copy-text';
 import { bibtexOf } from '@/lib/entries/bibtex';
+import { type AttachmentView, sizeText, TYPE_NAMES } from '@/lib/attachments/attachment';
 import type { SheetView } from '@/lib/entries/entry';
 import { Part } from './part';
 
-/** The sources, each with its DOI and an entry for a bibliography. */
-export const ReferencesPart = ({ sheet, figure }: { sheet: SheetView; figure: number }) => (
+interface ReferencesPartProps {
+  sheet: SheetView;
+  attachments: readonly AttachmentView[];
+  figure: number;
+}
+
+/** The sources, each with its DOI and an entry for a bibliography; the files that the author added. */
+export const ReferencesPart = ({ sheet, attachments, figure }: ReferencesPartProps) => (
   <Part id="references" figure={figure} name="References">
     {sheet.references.length === 0 ? (
       <p className="cap">No source is booked; the derivation stands in the notes.</p>
@@ -27,6 +34,19 @@ export const ReferencesPart = ({ sheet, figure }: { sheet: SheetView; figure: nu
           </li>
         ))}
       </ol>
+    )}
+    {attachments.length > 0 && (
+      <ul className="attachments small" aria-label="Attachments">
+        {attachments.map(({ id, name, type, bytes }) => (
+          <li key={id}>
+            <a href={`/attachments/${id}`} download={name}>
+              {name}
+            </a>
+            <span>{TYPE_NAMES[type]}</span>
+            <span className="num">{sizeText(bytes)}</span>
+          </li>
+        ))}
+      </ul>
     )}
   </Part>
 );

@@ -2,7 +2,8 @@ import { LargeSketch } from '@/components/marks/large-sketch';
 import { Stamp } from '@/components/marks/stamp';
 import { StateMark } from '@/components/marks/vial';
 import { CopyFile } from '@/components/ui/copy-file';
-import { Prose } from '@/components/ui/prose';
+import { Markdown } from '@/components/ui/markdown';
+import type { AttachmentView } from '@/lib/attachments/attachment';
 import { longDate } from '@/lib/entries/dates';
 import type { SheetView } from '@/lib/entries/entry';
 import { type Drawing, drawingOf } from '@/lib/facts/drawing';
@@ -31,6 +32,7 @@ interface SheetBodyProps {
   actor: Actor;
   sheet: SheetView;
   kernel: ShownKernel;
+  attachments: readonly AttachmentView[];
   origin: string;
 }
 
@@ -110,7 +112,7 @@ function SketchLeaf({ sheet, drawing, kernel }: { sheet: SheetView; drawing: Dra
       </div>
       {sheet.notes && (
         <div className="small leafnotes">
-          <Prose text={sheet.notes} />
+          <Markdown text={sheet.notes} />
         </div>
       )}
     </div>
@@ -127,7 +129,7 @@ const WARNINGS = {
 } as const satisfies Record<SheetView['state'], string | null>;
 
 /** One revision of an entry, from its readings to what people said of it. */
-export function SheetBody({ actor, sheet, kernel, origin }: SheetBodyProps) {
+export function SheetBody({ actor, sheet, kernel, attachments, origin }: SheetBodyProps) {
   const parts = partsOf(sheet);
   const figureOf = (id: string) => parts.findIndex((part) => part.id === id) + 1;
   const drawing = drawingOf(sheet.definition, sheet.facts, sheet.summary);
@@ -182,7 +184,7 @@ export function SheetBody({ actor, sheet, kernel, origin }: SheetBodyProps) {
         <RevisionsPart sheet={sheet} figure={figureOf('revisions')} />
         <div className="twoup">
           <UsedByPart sheet={sheet} figure={figureOf('used')} />
-          <ReferencesPart sheet={sheet} figure={figureOf('references')} />
+          <ReferencesPart sheet={sheet} attachments={attachments} figure={figureOf('references')} />
         </div>
         <RemarksPart
           key={`remarks-${sheet.revisionId}`}

@@ -2,6 +2,7 @@ import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
 import { cache } from 'react';
 import { db } from '@/db/client';
+import { listAttachments } from '@/db/queries/attachments';
 import { findSheet } from '@/db/queries/entries';
 import { currentActor } from '@/lib/auth/current-actor';
 import { requireActor } from '@/lib/auth/require-actor';
@@ -25,6 +26,17 @@ export async function SheetPage({ slug, revision }: { slug: string; revision?: n
   const actor = await requireActor();
   const sheet = await readSheet(slug, revision);
   if (!sheet) notFound();
-  const kernel = await shownKernel(actor, sheet, { language: 'c' });
-  return <SheetBody actor={actor} sheet={sheet} kernel={kernel} origin={env().NEXTAUTH_URL.replace(/\/$/, '')} />;
+  const [kernel, attachments] = await Promise.all([
+    shownKernel(actor, sheet, { language: 'c' }),
+    listAttachments(db, sheet.revisionId),
+  ]);
+  return (
+    <SheetBody
+      actor={actor}
+      sheet={sheet}
+      kernel={kernel}
+      attachments={attachments}
+      origin={env().NEXTAUTH_URL.replace(/\/$/, '')}
+    />
+  );
 }

@@ -89,7 +89,8 @@ export function LiveLeaf({ live, at }: LiveLeafProps) {
       </div>
       {fault && (
         <p className="fail small" role="alert">
-          The engine stopped on this definition, so there are no facts. What you wrote is kept.
+          The engine gave no answer for this definition, so there are no facts. What you wrote is kept; change it, or
+          load the page again.
         </p>
       )}
       {problems.length > 0 && (

@@ -147,16 +147,19 @@ export function PointSketch({ sites, levels, reach, slice, model, isReadOnly, on
                   r={r}
                   kind={computed ? 'computed' : site ? (level === 1 ? 'coupled' : 'known') : 'free'}
                 />
-                {site && !computed && prettyWeight(site.weight).length * 8 < column * 1.7 && (
-                  <text
-                    x={xOf(by) + Math.max(r + 4, 10)}
-                    y={yOf(level) - Math.max(r + 5, 11)}
-                    className="s-w"
-                    aria-hidden="true"
-                  >
-                    {prettyWeight(site.weight)}
-                  </text>
-                )}
+                {site &&
+                  !computed &&
+                  prettyWeight(site.weight).length * 8.5 <
+                    column * (byKey.has(siteKey(level, [by + 1, ...slice])) ? 0.95 : 1.7) && (
+                    <text
+                      x={xOf(by) + Math.max(r + 4, 10)}
+                      y={yOf(level) - Math.max(r + 5, 11)}
+                      className="s-w"
+                      aria-hidden="true"
+                    >
+                      {prettyWeight(site.weight)}
+                    </text>
+                  )}
               </g>
             );
           }),
