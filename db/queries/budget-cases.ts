@@ -1,4 +1,4 @@
-import { and, asc, count, eq } from 'drizzle-orm';
+import { and, asc, eq } from 'drizzle-orm';
 import type { Database } from '../client';
 import { budgetCases } from '../schema/budgets';
 import { people } from '../schema/people';
@@ -14,11 +14,6 @@ const columns = { id: budgetCases.id, name: budgetCases.name, question: budgetCa
 
 export const listBudgetCases = (db: Database, personId: string): Promise<BudgetCase[]> =>
   db.select(columns).from(budgetCases).where(eq(budgetCases.personId, personId)).orderBy(asc(budgetCases.name));
-
-export async function countBudgetCases(db: Database, personId: string): Promise<number> {
-  const [row] = await db.select({ n: count() }).from(budgetCases).where(eq(budgetCases.personId, personId));
-  return row?.n ?? 0;
-}
 
 /** Anyone who has the link may open it; it is hard to guess. */
 export async function findBudgetCase(db: Database, id: string): Promise<(BudgetCase & { owner: string }) | null> {

@@ -1,13 +1,14 @@
 import 'server-only';
 import { db } from '@/db/client';
-import { countBudgetCases, deleteBudgetCase, keepBudgetCase } from '@/db/queries/budget-cases';
+import { deleteBudgetCase, keepBudgetCase, listBudgetCases } from '@/db/queries/budget-cases';
 import type { Actor } from '@/lib/people/actor';
 import { Refusal } from '@/lib/refusal';
 import { CASES_MAX } from './case-input';
 
 /** Keeps a run by name for this person; one of the same name is written over. @returns its id, which is its link */
 export async function keepCase(actor: Actor, name: string, question: string): Promise<string> {
-  if ((await countBudgetCases(db, actor.id)) >= CASES_MAX)
+  const kept = await listBudgetCases(db, actor.id);
+  if (kept.length >= CASES_MAX && !kept.some((one) => one.name === name))
     throw new Refusal('too-many', `You keep ${CASES_MAX} cases already. Take one out first.`);
   return keepBudgetCase(db, actor.id, name, question);
 }

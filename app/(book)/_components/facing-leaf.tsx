@@ -42,6 +42,9 @@ export function FacingLeaf({ line }: { line: CatalogLine }) {
         <Link className="btn main" href={`/sheets/${line.slug}`}>
           Open the sheet
         </Link>
+        <Link className="btn" href={`/compare?entry=${line.slug}`} prefetch={false}>
+          Side by side
+        </Link>
         {leaf && 'address' in leaf.kernel && (
           <CopyButton id="copy-chosen" className="btn" textOf={fetchText.bind(null, leaf.kernel.address)}>
             Copy C kernel

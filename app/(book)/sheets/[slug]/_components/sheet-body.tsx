@@ -109,6 +109,9 @@ function SketchLeaf({ sheet, drawing, kernel }: { sheet: SheetView; drawing: Dra
         <a className="btn" href="#kernel">
           See the kernel
         </a>
+        <a className="btn" href={`/compare?entry=${sheet.slug}`}>
+          Side by side
+        </a>
       </div>
       {sheet.notes && (
         <div className="small leafnotes">
