@@ -33,6 +33,10 @@ function lawOf({ growth }: StabilityFacts) {
   return side?.factor && side.tolerance ? { q: quotient(side.q), factor: side.factor } : null;
 }
 
+/** A staff shows one number that is known to be stable or not; regions have their map. */
+const hasStaff = ({ verdict }: StabilityFacts) =>
+  verdict === 'conditionally stable' || verdict === 'unconditionally stable' || verdict.includes('unstable');
+
 /** The bound on the staff, what happens at it, the region of several numbers, and how all of it was found. */
 export function BoundPart({ figure, definition, facts, summary, drawing }: BoundPartProps) {
   const { stability } = facts;
@@ -52,7 +56,7 @@ export function BoundPart({ figure, definition, facts, summary, drawing }: Bound
         </>
       }
     >
-      <StaffBound reading={staffReading(stability, summary)} />
+      {hasStaff(stability) && <StaffBound reading={staffReading(stability, summary)} />}
       <div className="cap boundcap">
         {boundSentences(stability).map((sentence) => (
           <p key={sentence}>
