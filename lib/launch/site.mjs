@@ -13,11 +13,11 @@ export async function runProgram(file, env, log) {
   if (status !== 0) throw new Error(`${file} failed.`);
 }
 
-/** Newest schema, and the demo where the settings ask for it; both do nothing that is done already. */
-export async function prepareDatabase(env) {
-  await runProgram('db/migrate.ts', env, 'migrate');
-  if (env.LEVELBOOK_DEMO === '1') await runProgram('db/seed/seed.ts', env, 'seed');
-}
+/** The newest schema. */
+export const migrateDatabase = (env) => runProgram('db/migrate.ts', env, 'migrate');
+
+/** The demo's people and entries; does nothing that is done already. */
+export const fillDemo = (env) => runProgram('db/seed/seed.ts', env, 'seed');
 
 /** The server's greeting: its address is not the one to open, and we tell when it is ready. */
 const GREETING = /^\s*$|^\s*(▲ Next\.js|- Local:|- Network:|✓ (Ready|Starting|Running))/;

@@ -14,7 +14,15 @@ import { DATA, writePrivately } from './places.mjs';
 import { livingProcess } from './processes.mjs';
 import { say, seconds, step } from './say.mjs';
 import { chooseAddress, givenDatabase, readEnvFile, settingsFor } from './settings.mjs';
-import { catcherSettings, databaseListens, prepareDatabase, startMailCatcher, startWeb, startWorker } from './site.mjs';
+import {
+  catcherSettings,
+  databaseListens,
+  fillDemo,
+  migrateDatabase,
+  startMailCatcher,
+  startWeb,
+  startWorker,
+} from './site.mjs';
 import { ensureSystemPackages } from './system-packages.mjs';
 
 const LOCK = 'start';
@@ -122,11 +130,16 @@ async function main() {
   const env = settingsFor({ databaseUrl: await databaseUrl(), port, demo: ownServer, production });
   const catchesMail = withWeb && withWorker && !env.SMTP_URL && (env.LEVELBOOK_DEMO === '1' || !production);
   if (catchesMail) Object.assign(env, await catcherSettings());
-  await step('schema and content of the database', () => prepareDatabase(env));
-  if (withWeb) {
+  await step('schema of the database', () => migrateDatabase(env));
+  const serve = async () => {
     if (production) await ensureBuild();
     await step('web server', () => keep('web server', () => startWeb({ env, host, port, production })));
-  }
+  };
+  // Side by side: the one computes facts, the other bundles pages.
+  await Promise.all([
+    withWeb && serve(),
+    env.LEVELBOOK_DEMO === '1' && step('content of the demo', () => fillDemo(env)),
+  ]);
   if (catchesMail) await step('mail catcher', () => keep('mail catcher', async () => startMailCatcher({ env })));
   if (withWorker) await step('worker', () => keep('worker', () => startWorker({ env })));
 

@@ -13,7 +13,7 @@ import { freePort } from './ports.mjs';
 import { startCluster } from './postgres.mjs';
 import { say, seconds } from './say.mjs';
 import { settingsFor } from './settings.mjs';
-import { catcherSettings, prepareDatabase, startMailCatcher, startWeb, startWorker } from './site.mjs';
+import { catcherSettings, fillDemo, migrateDatabase, startMailCatcher, startWeb, startWorker } from './site.mjs';
 import { ensureSystemPackages } from './system-packages.mjs';
 import { countPlaywright, countVitest } from './test-reports.mjs';
 
@@ -74,7 +74,8 @@ async function browser() {
   const address = `http://${host}:${port}`;
   const settings = settingsFor({ databaseUrl: url('browser'), port, demo: true, production: true });
   const env = { ...settings, NEXTAUTH_URL: address, ...(await catcherSettings()) };
-  await prepareDatabase(env);
+  await migrateDatabase(env);
+  await fillDemo(env);
   const web = await keepForNow(await startWeb({ env, host, port, production: true }));
   const catcher = await keepForNow(startMailCatcher({ env }));
   const worker = await keepForNow(await startWorker({ env }));
