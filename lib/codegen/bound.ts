@@ -64,19 +64,28 @@ function endOf(
   return { value, decimal: withPoint(String(value)), text, included: included ?? true, why };
 }
 
+/** A region in closed form, as text and as conditions, together with the signs that the equation itself asks for. */
+function regionOf(region: string | null, symbols: readonly string[], nonNegative: readonly string[]): Bound {
+  const signs = nonNegative.map((symbol) => `${symbol} >= 0`);
+  const text = region === null ? null : [region, ...signs].join(', ');
+  return {
+    kind: 'region',
+    text:
+      text?.replaceAll('lambda', 'lam').replace(/\s*([<>]=|\+)\s*/g, ' $1 ') ??
+      'stable region: see the map on the sheet',
+    symbols: symbols.map(parameterName),
+    inequalities: text === null ? null : regionInequalities(text, symbols),
+  };
+}
+
 /**
  * The verdict of the facts as pieces to check, in ascending order.
- * @param symbols parameters of the scheme
+ * @param symbols     parameters of the scheme
+ * @param nonNegative those whose negative values make the equation ill-posed, where the region does not say so
  */
-export function boundOf(facts: SchemeFacts, symbols: readonly string[]): Bound {
+export function boundOf(facts: SchemeFacts, symbols: readonly string[], nonNegative: readonly string[] = []): Bound {
   const { stability } = facts;
-  if (stability.kind === 'two-parameter')
-    return {
-      kind: 'region',
-      text: stability.region?.replaceAll('lambda', 'lam') ?? 'stable region: see the map on the sheet',
-      symbols: symbols.map(parameterName),
-      inequalities: stability.region === null ? null : regionInequalities(stability.region, symbols),
-    };
+  if (stability.kind === 'two-parameter') return regionOf(stability.region, symbols, nonNegative);
   switch (stability.verdict) {
     case 'unstable for all nonzero values':
       return { kind: 'never', sentence: 'UNSTABLE for every nonzero value of the parameter: do not march with it.' };
@@ -91,6 +100,9 @@ export function boundOf(facts: SchemeFacts, symbols: readonly string[]): Bound {
       return { kind: 'unknown', sentence: `Stability: ${stability.verdict}.` };
     default:
   }
+  // Analysed along equal values of several parameters: only the closed form speaks of each.
+  if (stability.parameter !== null && !symbols.includes(stability.parameter))
+    return regionOf(stability.region, symbols, nonNegative);
   const pieces: BoundPiece[] = stability.intervals.map((interval) => ({
     lo: endOf(interval.lo, interval.loExact, interval.loIncluded, interval.loBehaviour?.why ?? null),
     hi: endOf(interval.hi, interval.hiExact, interval.hiIncluded, interval.hiBehaviour?.why ?? null),

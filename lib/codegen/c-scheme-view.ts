@@ -16,6 +16,7 @@ import {
   startAbout,
   runAbout,
   scalarsOf,
+  sizesOf,
   sweepArrays,
   taylorNode,
   type SchemeContext,
@@ -23,11 +24,11 @@ import {
 import { wrapStatement } from './wrap-text';
 
 const WIDTH = 96;
-const statement = (text: string) => wrapStatement(text, WIDTH);
+export const statement = (text: string) => wrapStatement(text, WIDTH);
 /** An argument list, broken between arguments. */
-const listed = (head: string, items: readonly string[]) => statement(`${head}(${items.join(', ')})`);
+export const listed = (head: string, items: readonly string[]) => statement(`${head}(${items.join(', ')})`);
 
-function coefficientLines(coefficients: readonly Coefficient[], symbols: readonly string[]): string {
+export function coefficientLines(coefficients: readonly Coefficient[], symbols: readonly string[]): string {
   return coefficients
     .map(({ name, value }) => statement(`const double ${name} = ${coefficientSource(value, symbols, C.literal)};`))
     .join('\n');
@@ -38,35 +39,47 @@ function assignmentLine(assignment: Assignment): string {
   return statement(`${target} = ${infix(assignment.node, C)};`);
 }
 
-const pointer = ({ name, written }: { name: string; written: boolean }) =>
+export const pointer = ({ name, written }: { name: string; written: boolean }) =>
   `${written ? '' : 'const '}double *restrict ${name}`;
 
 export class CSchemeView {
-  private readonly symbols: string[];
-  private readonly parameters: string[];
+  protected readonly symbols: string[];
+  protected readonly parameters: string[];
+  protected readonly sizes: string[];
 
-  constructor(private readonly context: SchemeContext) {
+  constructor(protected readonly context: SchemeContext) {
     this.symbols = context.plan.parameters.map((p) => p.name);
     this.parameters = this.symbols.map((name) => `double ${name}`);
+    this.sizes = sizesOf(context.plan);
   }
 
-  private get periodic() {
+  protected get sizeParameters() {
+    return this.sizes.map((name) => `ptrdiff_t ${name}`);
+  }
+
+  protected get periodic() {
     return this.context.options.boundary === 'periodic';
   }
   private get fillParameters() {
     return this.periodic ? [] : [`${this.context.prefix}_fill *fill`, 'void *context'];
   }
-  private get fillArguments() {
+  protected get fillArguments() {
     return this.periodic ? [] : ['fill', 'context'];
   }
   private fill(array: string) {
-    return this.periodic ? `${this.context.prefix}_fill_halo(n, ${array});` : `fill(n, ${array}, context);`;
+    return this.periodic
+      ? `${this.context.prefix}_fill_halo(${this.sizes.join(', ')}, ${array});`
+      : `fill(${this.sizes.join(', ')}, ${array}, context);`;
   }
 
-  private tableRows(plan: TablePlan): View[] {
+  protected tableRows(plan: TablePlan): View[] {
     const { prefix } = this.context;
     const arrays = arrayWords(plan);
-    const signature = listed(`void ${prefix}_step`, ['ptrdiff_t n', ...this.parameters, ...arrays.map(pointer)]);
+    const signature = listed(`void ${prefix}_step`, [
+      ...this.sizeParameters,
+      ...this.parameters,
+      ...arrays.map(pointer),
+    ]);
     return [
       {
         notes: [{ note: `One step. ${arrays.map((a) => `${a.name}: ${a.words}`).join('; ')}.` }],
@@ -113,12 +126,12 @@ export class CSchemeView {
     return ['ptrdiff_t n', ...this.parameters, ...arrays, ...this.fillParameters];
   }
 
-  private taylor(start: StartPlan): { signature: string; body: string; coefficients: string; words: string } {
+  protected taylor(start: StartPlan): View {
     const { plan, prefix } = this.context;
     const second = plan.timeOrder === 2;
     return {
       signature: listed(`static void ${prefix}_taylor`, [
-        'ptrdiff_t n',
+        ...this.sizeParameters,
         ...this.parameters,
         ...(second ? ['double b'] : []),
         'double c',
@@ -129,13 +142,13 @@ export class CSchemeView {
       ]),
       coefficients: coefficientLines(start.coefficients, this.symbols),
       body: statement(`w[i] = ${infix(taylorNode(start, plan.timeOrder), C)};`),
-      words: second ? 'u + b v + c dt^2 L y' : 'u + c dt L y',
+      seriesWords: second ? 'u + b v + c dt^2 L y' : 'u + c dt L y',
     };
   }
 
   private startParameters(plan: TablePlan) {
     return [
-      'ptrdiff_t n',
+      ...this.sizeParameters,
       ...this.parameters,
       `double *const level[${plan.arrays}]`,
       ...(plan.timeOrder === 2 ? ['const double *v'] : []),
@@ -147,20 +160,16 @@ export class CSchemeView {
   private start(plan: TablePlan): View[] {
     const { start } = plan;
     if (!start) return [];
-    const { signature, body, coefficients, words } = this.taylor(start);
     const loop = {
       terms: String(start.terms),
-      leading: ['n', ...this.symbols].join(', '),
+      leading: [...this.sizes, ...this.symbols].join(', '),
       fill_u: this.fill('u'),
       fill_w: this.fill('w'),
     };
     const oldest = oldestOf(plan);
     return [
       {
-        signature,
-        body,
-        coefficients,
-        seriesWords: words,
+        ...this.taylor(start),
         about: startAbout(this.context).map((line) => ({ line })),
         parameters: this.startParameters(plan).join(', '),
         alsoNull: plan.timeOrder === 2 ? ' || !v' : '',
@@ -172,7 +181,7 @@ export class CSchemeView {
 
   private runParameters() {
     const level = `double *${this.context.plan.shape === 'table' ? '' : 'const '}level[${arraysOf(this.context.plan)}]`;
-    return ['ptrdiff_t nsteps', 'ptrdiff_t n', ...this.parameters, level, ...this.fillParameters];
+    return ['ptrdiff_t nsteps', ...this.sizeParameters, ...this.parameters, level, ...this.fillParameters];
   }
 
   /** Statements of one step on level[], shared by run and by the driver. */
@@ -188,7 +197,7 @@ export class CSchemeView {
       .map((_, age) => `level[${last - age}]`);
     return [
       this.fill(`level[${last}]`),
-      `${prefix}_step(${['n', ...this.symbols, ...read, 'level[0]'].join(', ')});`,
+      `${prefix}_step(${[...this.sizes, ...this.symbols, ...read, 'level[0]'].join(', ')});`,
       'double *const newest = level[0];',
       ...Array.from({ length: last }, (_, k) => `level[${k}] = level[${k + 1}];`),
       `level[${last}] = newest;`,
@@ -207,13 +216,13 @@ export class CSchemeView {
     const { plan, prefix } = this.context;
     const table = plan.shape === 'table' ? plan : null;
     const step = table
-      ? ['ptrdiff_t n', ...this.parameters, ...arrayWords(table).map(pointer)]
+      ? [...this.sizeParameters, ...this.parameters, ...arrayWords(table).map(pointer)]
       : this.stagedParameters(plan as StagesPlan);
     return [
-      listed(`ptrdiff_t ${prefix}_length`, ['ptrdiff_t n']),
-      listed(`int ${prefix}_check`, ['ptrdiff_t n', ...this.parameters]),
-      listed(`int ${prefix}_check_state`, ['ptrdiff_t n', 'const double *u']),
-      ...(this.periodic ? [listed(`void ${prefix}_fill_halo`, ['ptrdiff_t n', 'double *u'])] : []),
+      listed(`ptrdiff_t ${prefix}_length`, this.sizeParameters),
+      listed(`int ${prefix}_check`, [...this.sizeParameters, ...this.parameters]),
+      listed(`int ${prefix}_check_state`, [...this.sizeParameters, 'const double *u']),
+      ...(this.periodic ? [listed(`void ${prefix}_fill_halo`, [...this.sizeParameters, 'double *u'])] : []),
       listed(`void ${prefix}_step`, step),
       ...(table?.start ? [listed(`int ${prefix}_start`, this.startParameters(table))] : []),
       listed(`int ${prefix}_run`, this.runParameters()),
@@ -222,35 +231,30 @@ export class CSchemeView {
       .join('\n');
   }
 
-  view(): View {
+  /** What the templates of a row and of a grid have in common. */
+  protected common(): View {
     const { plan, prefix, bound } = this.context;
     const condition = boundCondition(bound, { and: '&&', or: '||', decimal: (text) => text, literal: C.literal });
     const refused = [
       ...this.symbols.map((name) => `!isfinite(${name})`),
       ...(plan.divisor ? [`!(fabs(${coefficientSource(plan.divisor, this.symbols, C.literal)}) > 0.0)`] : []),
     ];
-    const start = plan.shape === 'table' ? this.start(plan) : [];
     return {
       prefix,
       PREFIX: prefix.toUpperCase(),
-      haloLeft: String(plan.halo[0]),
-      haloRight: String(plan.halo[1]),
-      minPoints: String(minPoints(plan)),
       levels: String(levelsOf(plan)),
       arrays: String(arraysOf(plan)),
       parameterWords: this.symbols.length > 0 ? this.symbols.join(' or ') : 'no parameter:',
       divisorWords: plan.divisor ? ', or the coefficient of the new level is 0' : '',
       boundWords: boundWords(bound),
       caller: this.periodic ? [] : [{}],
-      periodic: this.periodic ? [{ fillLines: haloLines('c', this.context.plan.halo) }] : [],
       declarations: this.declarations(),
-      checkParameters: ['ptrdiff_t n', ...this.parameters].join(', '),
-      checkArguments: ['n', ...this.symbols].join(', '),
+      checkParameters: [...this.sizeParameters, ...this.parameters].join(', '),
+      checkArguments: [...this.sizes, ...this.symbols].join(', '),
       refused: refused.length > 0 ? [{ condition: statement(refused.join(' || ')) }] : [],
       bounded: condition ? [{ outside: statement(`!(${condition})`) }] : [],
       rows: plan.shape === 'table' ? this.tableRows(plan) : this.stageRows(plan),
-      staged: plan.shape === 'stages' ? this.stagedStep(plan) : [],
-      start,
+      start: plan.shape === 'table' ? this.start(plan) : [],
       runAbout: runAbout(this.context).map((line) => ({ line })),
       runParameters: this.runParameters().join(', '),
       runBefore: this.before(),
@@ -258,20 +262,29 @@ export class CSchemeView {
     };
   }
 
-  /** What the driver's template prints. */
-  driver(): View {
+  view(): View {
+    const { plan } = this.context;
+    return {
+      ...this.common(),
+      haloLeft: String(plan.halo[0]),
+      haloRight: String(plan.halo[1]),
+      minPoints: String(minPoints(plan)),
+      periodic: this.periodic ? [{ fillLines: haloLines('c', plan.halo) }] : [],
+      staged: plan.shape === 'stages' ? this.stagedStep(plan) : [],
+    };
+  }
+
+  protected commonDriver(): View {
     const { plan, prefix } = this.context;
     const started = plan.shape === 'table' && plan.start !== null;
     const second = plan.timeOrder === 2;
     return {
       prefix,
-      caller: this.periodic ? [] : [{ fillLines: haloLines('c', this.context.plan.halo) }],
       declarations: this.declarations(),
       arrays: String(arraysOf(plan)),
       levels: String(levelsOf(plan)),
-      haloLeft: String(plan.halo[0]),
       parameters: this.symbols.map((name) => ({ name })),
-      checkArguments: ['n', ...this.symbols].join(', '),
+      checkArguments: [...this.sizes, ...this.symbols].join(', '),
       fillArguments: this.fillArguments.map((name) => `, ${name}`).join(''),
       before: this.before(),
       advance: this.advance(),
@@ -279,13 +292,28 @@ export class CSchemeView {
         ? [
             {
               second: second ? [{}] : [],
-              arguments: ['n', ...this.symbols, 'level', ...(second ? ['v'] : []), 'work', ...this.fillArguments].join(
-                ', ',
-              ),
+              arguments: [
+                ...this.sizes,
+                ...this.symbols,
+                'level',
+                ...(second ? ['v'] : []),
+                'work',
+                ...this.fillArguments,
+              ].join(', '),
             },
           ]
         : [],
       startless: started ? [] : [{}],
+    };
+  }
+
+  /** What the driver's template prints. */
+  driver(): View {
+    const { halo } = this.context.plan;
+    return {
+      ...this.commonDriver(),
+      caller: this.periodic ? [] : [{ fillLines: haloLines('c', halo) }],
+      haloLeft: String(halo[0]),
     };
   }
 }

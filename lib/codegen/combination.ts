@@ -6,11 +6,20 @@ import { neg as negPolynomial } from '@/lib/numerics/polynomial';
 import type { RationalFunction } from '@/lib/numerics/rational-function';
 import { formatRational } from '@/lib/numerics/rational';
 import { constantValue, isConstantFunction, leadingSign, type Coefficient } from './coefficient';
-import { named, number, product, read, signedSum, type Node, type SignedNode } from './expression-tree';
+import {
+  componentsOf,
+  named,
+  number,
+  product,
+  read,
+  signedSum,
+  type Node,
+  type Place,
+  type SignedNode,
+} from './expression-tree';
 
-export interface CombinationTerm {
+export interface CombinationTerm extends Place {
   readonly array: string;
-  readonly offset: number;
   /** Nonzero, real. */
   readonly coefficient: RationalFunction;
 }
@@ -24,17 +33,34 @@ interface Group {
   readonly array: string;
   readonly coefficient: RationalFunction;
   readonly negative: boolean;
-  readonly members: { readonly offset: number; readonly negative: boolean }[];
+  readonly members: (Place & { readonly negative: boolean })[];
 }
+
+const AXES = ['x', 'y', 'z'] as const;
 
 const key = ({ num, den }: RationalFunction) =>
   [num, den].map((a) => a.map((m) => `${m.powers.join(',')}:${formatRational(m.re)}`).join(' ')).join('/');
 const negated = (f: RationalFunction): RationalFunction => ({ num: negPolynomial(f.num), den: f.den });
 
-/** Members of equal or opposite coefficient, the highest offset first and positive. */
+const reachOf = (place: Place) => Math.max(...componentsOf(place).map(Math.abs));
+const axesUsed = (place: Place) => componentsOf(place).flatMap((o, axis) => (o === 0 ? [] : [axis]));
+
+/** Along a row the highest offset first; on a grid axis by axis, the nearest first, forward before backward. */
+function byPlace(a: Place, b: Place): number {
+  if (!a.across && !b.across) return b.offset - a.offset;
+  const rank = (place: Place) => {
+    const axes = axesUsed(place);
+    return [axes.length, axes[0] ?? -1, axes[1] ?? -1, reachOf(place), ...componentsOf(place).map((o) => -o)];
+  };
+  const [p, q] = [rank(a), rank(b)];
+  const k = p.findIndex((value, at) => value !== q[at]);
+  return k < 0 ? 0 : p[k]! - q[k]!;
+}
+
+/** Members of equal or opposite coefficient, in the order of their places; the first is positive. */
 function groupsOf(terms: readonly CombinationTerm[]): Group[] {
   const groups: Group[] = [];
-  for (const term of [...terms].sort((a, b) => b.offset - a.offset)) {
+  for (const term of [...terms].sort(byPlace)) {
     const own = key(term.coefficient);
     const opposite = key(negated(term.coefficient));
     const present = groups.find(
@@ -43,7 +69,7 @@ function groupsOf(terms: readonly CombinationTerm[]): Group[] {
     );
     if (present) {
       const lead = key(present.negative ? negated(present.coefficient) : present.coefficient);
-      present.members.push({ offset: term.offset, negative: own !== lead });
+      present.members.push({ offset: term.offset, across: term.across, negative: own !== lead });
       continue;
     }
     const negative = leadingSign(term.coefficient.num) < 0;
@@ -51,22 +77,28 @@ function groupsOf(terms: readonly CombinationTerm[]): Group[] {
       array: term.array,
       coefficient: negative ? negated(term.coefficient) : term.coefficient,
       negative,
-      members: [{ offset: term.offset, negative: false }],
+      members: [{ offset: term.offset, across: term.across, negative: false }],
     });
   }
   return groups;
 }
 
 function coefficientName(letter: string, members: Group['members'], taken: ReadonlySet<string>): string {
-  const first = members[0]!.offset;
-  const reach = Math.max(...members.map((m) => Math.abs(m.offset)));
-  const balanced = members.length > 1 && members.some((m) => m.offset === -first);
+  const first = componentsOf(members[0]!);
+  const reach = Math.max(...members.map(reachOf));
+  const balanced =
+    members.length > 1 && members.some((m) => componentsOf(m).every((offset, axis) => offset === -first[axis]!));
+  const signed = (offset: number) => (offset === 0 ? '0' : `${offset < 0 ? 'm' : 'p'}${Math.abs(offset)}`);
+  const axes = [...new Set(members.flatMap(axesUsed))];
+  const axis = first.length > 1 && axes.length === 1 ? AXES[axes[0]!]! : '';
   const plain =
-    first === 0 && members.length === 1
+    reach === 0 && members.length === 1
       ? `${letter}0`
       : balanced
-        ? `${letter}${reach}`
-        : `${letter}${first < 0 ? 'm' : 'p'}${Math.abs(first)}`;
+        ? `${letter}${reach}${axis}`
+        : first.length === 1
+          ? `${letter}${signed(first[0]!)}`
+          : `${letter}_${first.map(signed).join('_')}`;
   let name = plain;
   for (let k = 2; taken.has(name); k++) name = `${plain}_${k}`;
   return name;
@@ -93,7 +125,7 @@ export function combine(
   symbols: readonly string[],
 ): Combination {
   const order = [...new Set(terms.map((t) => t.array))];
-  const reach = (g: Group) => Math.max(...g.members.map((m) => Math.abs(m.offset)));
+  const reach = (g: Group) => Math.max(...g.members.map(reachOf));
   const groups = groupsOf(terms).sort(
     (a, b) =>
       Number(isOne(b.coefficient) && !b.negative) - Number(isOne(a.coefficient) && !a.negative) ||
@@ -107,7 +139,9 @@ export function combine(
   const coefficients: Coefficient[] = [];
   const taken = new Set<string>(symbols);
   const signed = groups.map((group): SignedNode => {
-    const inner = signedSum(group.members.map((m) => ({ negative: m.negative, node: read(group.array, m.offset) })));
+    const inner = signedSum(
+      group.members.map((m) => ({ negative: m.negative, node: read(group.array, m.offset, m.across) })),
+    );
     if (isOne(group.coefficient)) return { negative: group.negative, node: inner };
     if (isConstantFunction(group.coefficient))
       return { negative: group.negative, node: product(number(constantValue(group.coefficient)), inner) };

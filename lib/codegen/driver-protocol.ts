@@ -30,6 +30,9 @@
  *
  *     end
  *
+ * In two and three dimensions the word <n> is as many words as there are dimensions, the points along x, y, z; a level
+ * has as many lines as the grid has points, x running fastest.
+ *
  * Stencils on half-integer offsets: the approximation at i stands half a spacing to the right of u at i, so that
  * offset x reads u at i + x + 1/2 (offset 1/2 is the right neighbour). Periodic continuation everywhere.
  *
@@ -42,7 +45,10 @@
 export interface MarchTask {
   kind: 'march';
   id: string;
+  /** Points in all. */
   n: number;
+  /** Points along x, y, z in two and three dimensions; their product is n. */
+  grid?: readonly number[] | undefined;
   steps: number;
   parameters: number[];
   levels: Float64Array[];
@@ -50,7 +56,10 @@ export interface MarchTask {
 export interface RunTask {
   kind: 'run';
   id: string;
+  /** Points in all. */
   n: number;
+  /** Points along x, y, z in two and three dimensions; their product is n. */
+  grid?: readonly number[] | undefined;
   steps: number;
   parameters: number[];
   levels: Float64Array[];
@@ -58,7 +67,10 @@ export interface RunTask {
 export interface StartTask {
   kind: 'start';
   id: string;
+  /** Points in all. */
   n: number;
+  /** Points along x, y, z in two and three dimensions; their product is n. */
+  grid?: readonly number[] | undefined;
   parameters: number[];
   levels: Float64Array[];
 }
@@ -72,7 +84,10 @@ export interface ApplyTask {
 export interface PaceTask {
   kind: 'pace';
   id: string;
+  /** Points in all. */
   n: number;
+  /** Points along x, y, z in two and three dimensions; their product is n. */
+  grid?: readonly number[] | undefined;
   repeats: number;
   parameters: number[];
 }

@@ -19,17 +19,18 @@ export function hexToDouble(text: string): number {
 const pointLines = (levels: readonly Float64Array[]) => levels.flatMap((level) => Array.from(level, doubleToHex));
 
 function taskLines(task: DriverTask): string[] {
+  const size = 'grid' in task && task.grid ? task.grid.join(' ') : task.n;
   const numbers = 'parameters' in task ? task.parameters.map(doubleToHex) : [];
   switch (task.kind) {
     case 'march':
     case 'run':
-      return [[task.kind, task.id, task.n, task.steps, ...numbers].join(' '), ...pointLines(task.levels)];
+      return [[task.kind, task.id, size, task.steps, ...numbers].join(' '), ...pointLines(task.levels)];
     case 'start':
-      return [['start', task.id, task.n, ...numbers].join(' '), ...pointLines(task.levels)];
+      return [['start', task.id, size, ...numbers].join(' '), ...pointLines(task.levels)];
     case 'apply':
       return [['apply', task.id, task.n, doubleToHex(task.spacing)].join(' '), ...pointLines([task.values])];
     case 'pace':
-      return [['pace', task.id, task.n, task.repeats, ...numbers].join(' ')];
+      return [['pace', task.id, size, task.repeats, ...numbers].join(' ')];
   }
 }
 

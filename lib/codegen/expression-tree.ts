@@ -4,16 +4,28 @@
  */
 import type { Rational } from '@/lib/numerics/rational';
 
+/** A point relative to the one that is computed. */
+export interface Place {
+  /** Along the row: x. */
+  readonly offset: number;
+  /** Along y, and z: in two and three dimensions only. */
+  readonly across?: readonly number[] | undefined;
+}
+
 export type Node =
-  /** array at i + offset */
-  | { readonly kind: 'read'; readonly array: string; readonly offset: number }
+  /** array at i + offset, j + across[0], k + across[1] */
+  | ({ readonly kind: 'read'; readonly array: string } & Place)
   /** A coefficient, a parameter, or a value kept at the point. */
   | { readonly kind: 'name'; readonly name: string }
   | { readonly kind: 'number'; readonly value: Rational }
   | { readonly kind: 'negation'; readonly operand: Node }
   | { readonly kind: 'sum' | 'difference' | 'product'; readonly left: Node; readonly right: Node };
 
-export const read = (array: string, offset: number): Node => ({ kind: 'read', array, offset });
+export const read = (array: string, offset: number, across?: readonly number[]): Node =>
+  across ? { kind: 'read', array, offset, across } : { kind: 'read', array, offset };
+
+/** Offsets along x, y, z, as many as there are dimensions. */
+export const componentsOf = ({ offset, across = [] }: Place): number[] => [offset, ...across];
 export const named = (name: string): Node => ({ kind: 'name', name });
 export const number = (value: Rational): Node => ({ kind: 'number', value });
 export const negation = (operand: Node): Node => ({ kind: 'negation', operand });
@@ -37,7 +49,7 @@ export function signedSum(terms: readonly SignedNode[]): Node {
 }
 
 /** Every read below a node, left to right. */
-export function readsOf(node: Node): { readonly array: string; readonly offset: number }[] {
+export function readsOf(node: Node): ({ readonly array: string } & Place)[] {
   switch (node.kind) {
     case 'read':
       return [node];
@@ -59,7 +71,7 @@ export type Assignment =
 
 export interface Dialect {
   literal(value: Rational): string;
-  element(array: string, offset: number): string;
+  element(array: string, offset: number, across?: readonly number[]): string;
 }
 
 const PRECEDENCE = { read: 3, name: 3, number: 3, product: 2, negation: 1, sum: 1, difference: 1 } as const;
@@ -72,7 +84,7 @@ export function infix(node: Node, dialect: Dialect): string {
   };
   switch (node.kind) {
     case 'read':
-      return dialect.element(node.array, node.offset);
+      return dialect.element(node.array, node.offset, node.across);
     case 'name':
       return node.name;
     case 'number':

@@ -1,8 +1,16 @@
 /** What the Fortran template of a scheme prints. */
 import { boundCondition } from './bound';
-import { coefficientSource, type Coefficient } from './coefficient';
-import { infix, type Assignment } from './expression-tree';
+import { coefficientSource } from './coefficient';
+import { type Assignment } from './expression-tree';
 import { FORTRAN } from './fortran';
+import {
+  assignmentLine,
+  coefficientLines,
+  listed,
+  localDeclaration,
+  scalarDeclaration,
+  statement,
+} from './fortran-text';
 import { haloExtent, haloLines } from './halo-text';
 import type { StagesPlan, TablePlan } from './kernel-plan';
 import type { View } from './kernel-source';
@@ -10,11 +18,13 @@ import {
   arraysOf,
   arrayWords,
   boundWords,
+  isGrid,
   levelsOf,
   minPoints,
   oldestOf,
   runAbout,
   scalarsOf,
+  sizesOf,
   startAbout,
   sweepArrays,
   taylorNode,
@@ -22,47 +32,39 @@ import {
 } from './scheme-words';
 import { wrapStatement } from './wrap-text';
 
-const WIDTH = 100;
-const statement = (text: string) => wrapStatement(text, WIDTH, ' &');
-const listed = (head: string, items: readonly string[]) => statement(`${head}(${items.join(', ')})`);
-
-function coefficientLines(coefficients: readonly Coefficient[], symbols: readonly string[]): string {
-  return coefficients
-    .map(({ name, value }) => statement(`${name} = ${coefficientSource(value, symbols, FORTRAN.literal)}`))
-    .join('\n');
-}
-function assignmentLine(assignment: Assignment): string {
-  const target = assignment.kind === 'value' ? assignment.name : FORTRAN.element(assignment.array, 0);
-  return statement(`${target} = ${infix(assignment.node, FORTRAN)}`);
-}
-const scalarDeclaration = (names: readonly string[]) =>
-  names.length > 0 ? `real(wp), intent(in)    :: ${names.join(', ')}` : '';
-const localDeclaration = (names: readonly string[]) => (names.length > 0 ? `real(wp) :: ${names.join(', ')}` : '');
-
 export class FortranSchemeView {
-  private readonly symbols: string[];
-  private readonly extent: string;
+  protected readonly symbols: string[];
+  protected readonly sizes: string[];
+  /** Bounds of an array, ghost cells included. */
+  protected readonly extent: string;
+  /** What stands for all of them in a section. */
+  private readonly whole: string;
 
-  constructor(private readonly context: SchemeContext) {
+  constructor(protected readonly context: SchemeContext) {
     const { plan } = context;
     this.symbols = plan.parameters.map((p) => p.name);
-    this.extent = haloExtent(plan.halo);
+    this.sizes = sizesOf(plan);
+    const halos = isGrid(plan) ? plan.halos : [context.plan.halo];
+    this.extent = halos.map((halo, k) => haloExtent(halo, this.sizes[k]!)).join(', ');
+    this.whole = halos.map(() => ':').join(', ');
   }
 
-  private get periodic() {
+  protected get periodic() {
     return this.context.options.boundary === 'periodic';
   }
-  private get fillArguments() {
+  protected get fillArguments() {
     return this.periodic ? [] : ['fill'];
   }
   private get fillDeclaration() {
     return this.periodic ? '' : `procedure(${this.context.prefix}_fill) :: fill`;
   }
   private fill(array: string) {
-    return this.periodic ? `call ${this.context.prefix}_fill_halo(n, ${array})` : `call fill(n, ${array})`;
+    return this.periodic
+      ? `call ${this.context.prefix}_fill_halo(${this.sizes.join(', ')}, ${array})`
+      : `call fill(${this.sizes.join(', ')}, ${array})`;
   }
 
-  private arrayDeclaration(
+  protected arrayDeclaration(
     { name, written, words }: { name: string; written: boolean; words?: string },
     intent: string,
   ) {
@@ -70,21 +72,31 @@ export class FortranSchemeView {
     return `${shown} :: ${name}(${this.extent})${words ? `   ! ${words}` : ''}`;
   }
 
-  private tableRows(plan: TablePlan): View[] {
+  protected tableRows(plan: TablePlan): View[] {
     const name = `${this.context.prefix}_step`;
     const arrays = arrayWords(plan);
     return [
       {
         name,
         notes: [{ note: 'One step.' }],
-        signature: listed(name, ['n', ...this.symbols, ...arrays.map((a) => a.name)]),
+        signature: listed(name, [...this.sizes, ...this.symbols, ...arrays.map((a) => a.name)]),
         scalars: scalarDeclaration(this.symbols),
         arrayDeclarations: arrays.map((a) => this.arrayDeclaration(a, 'inout')).join('\n'),
         locals: localDeclaration(plan.coefficients.map((c) => c.name)),
         coefficients: coefficientLines(plan.coefficients, this.symbols),
-        body: plan.sweep.assignments.map(assignmentLine).join('\n'),
+        body: this.sweepBody(plan.sweep.assignments),
       },
     ];
+  }
+
+  /** What is done at every point. */
+  protected sweepBody(assignments: readonly Assignment[]): string {
+    return assignments.map(assignmentLine).join('\n');
+  }
+
+  /** Section of one column of u in start and run. */
+  private column(index: string) {
+    return `u(${this.whole}, ${index})`;
   }
 
   private stageRows(plan: StagesPlan): View[] {
@@ -135,15 +147,17 @@ export class FortranSchemeView {
     if (!start) return [];
     const second = plan.timeOrder === 2;
     const oldest = oldestOf(plan) + 1;
-    const target = second ? `u(:, ${oldest}+k)` : 'u(:, k)';
+    const target = this.column(second ? `${oldest}+k` : 'k');
     // Terms alternate between the work array and the new level, in which the last one ends.
     const loop = {
       terms: String(start.terms),
-      leading: ['n', ...this.symbols].join(', '),
-      fill_u: this.fill(second ? `u(:, ${oldest})` : 'u(:, k-1)'),
+      leading: [...this.sizes, ...this.symbols].join(', '),
+      fill_u: this.fill(this.column(second ? String(oldest) : 'k-1')),
       fill_k: this.fill(target),
       fill_work: this.fill('work'),
       first: start.terms % 2 === 0 ? target : 'work',
+      newer: target,
+      older: this.column(second ? String(oldest) : 'k-1'),
     };
     const arrays = [
       { name: 'u', written: false },
@@ -155,7 +169,7 @@ export class FortranSchemeView {
       {
         seriesWords: second ? 'u + b v + c dt^2 L y' : 'u + c dt L y',
         signature: listed(`${prefix}_taylor`, [
-          'n',
+          ...this.sizes,
           ...this.symbols,
           ...(second ? ['b'] : []),
           'c',
@@ -165,10 +179,10 @@ export class FortranSchemeView {
         arrayDeclarations: arrays.map((a) => this.arrayDeclaration(a, 'inout')).join('\n'),
         locals: localDeclaration(start.coefficients.map((c) => c.name)),
         coefficients: coefficientLines(start.coefficients, this.symbols),
-        body: statement(`w(i) = ${infix(taylorNode(start, plan.timeOrder), FORTRAN)}`),
+        body: this.sweepBody([{ kind: 'store', array: 'w', node: taylorNode(start, plan.timeOrder) }]),
         about: startAbout(this.context).map((line) => ({ line })),
         startSignature: listed(`${prefix}_start`, [
-          'n',
+          ...this.sizes,
           ...this.symbols,
           'u',
           ...(second ? ['v'] : []),
@@ -181,7 +195,6 @@ export class FortranSchemeView {
           ? [
               {
                 ...loop,
-                oldest: String(oldest),
                 b: 'real(k, wp)/real(2*m-1, wp)',
                 c: 'real(k*k, wp)/real((2*m-1)*(2*m), wp)',
               },
@@ -200,11 +213,11 @@ export class FortranSchemeView {
     }
     const read = arrayWords(plan)
       .filter((a) => !a.written)
-      .map((_, age) => (age === 0 ? 'u(:, newest)' : `u(:, modulo(newest-${age + 1}, ${plan.arrays})+1)`));
+      .map((_, age) => this.column(age === 0 ? 'newest' : `modulo(newest-${age + 1}, ${plan.arrays})+1`));
     return [
       `oldest = modulo(newest, ${plan.arrays}) + 1`,
-      this.fill('u(:, newest)'),
-      statement(`call ${prefix}_step(${['n', ...this.symbols, ...read, 'u(:, oldest)'].join(', ')})`),
+      this.fill(this.column('newest')),
+      statement(`call ${prefix}_step(${[...this.sizes, ...this.symbols, ...read, this.column('oldest')].join(', ')})`),
       'newest = oldest',
     ].join('\n');
   }
@@ -216,11 +229,12 @@ export class FortranSchemeView {
     return plan.known
       .map((name, age) => ({ name, age }))
       .filter(({ name, age }) => age > 0 && name !== 'w')
-      .map(({ age }) => this.fill(`u(:, modulo(newest-${age + 1}, ${plan.arrays})+1)`))
+      .map(({ age }) => this.fill(this.column(`modulo(newest-${age + 1}, ${plan.arrays})+1`)))
       .join('\n');
   }
 
-  view(): View {
+  /** What the templates of a row and of a grid have in common. */
+  protected common(): View {
     const { plan, prefix, bound } = this.context;
     const rotating = plan.shape === 'table';
     const decimal = (text: string) => (text.startsWith('-') ? `(${text}_wp)` : `${text}_wp`);
@@ -235,9 +249,6 @@ export class FortranSchemeView {
     return {
       prefix,
       extent: this.extent,
-      haloLeft: String(plan.halo[0]),
-      haloRight: String(plan.halo[1]),
-      minPoints: String(minPoints(plan)),
       levels: String(levelsOf(plan)),
       arrays: String(arraysOf(plan)),
       parameterWords: this.symbols.length > 0 ? this.symbols.join(' or ') : 'no parameter:',
@@ -248,13 +259,11 @@ export class FortranSchemeView {
         ...(start.length > 0 ? [{ name: `${prefix}_start` }] : []),
       ],
       caller: this.periodic ? [] : [{}],
-      periodic: this.periodic ? [{ fillLines: haloLines('fortran', this.context.plan.halo) }] : [],
-      checkArguments: ['n', ...this.symbols].join(', '),
+      checkArguments: [...this.sizes, ...this.symbols].join(', '),
       parameterDeclarations: scalarDeclaration(this.symbols),
       refused: refused.length > 0 ? [{ condition: wrapStatement(refused.join(' .or. '), 90, ' &') }] : [],
       bounded: condition ? [{ outside: wrapStatement(`.not. (${condition})`, 90, ' &') }] : [],
       rows: plan.shape === 'table' ? this.tableRows(plan) : this.stageRows(plan),
-      staged: plan.shape === 'stages' ? this.stagedStep(plan) : [],
       start,
       fillDeclaration: this.fillDeclaration,
       runAbout: runAbout(this.context).map((line) => ({
@@ -262,7 +271,7 @@ export class FortranSchemeView {
       })),
       runSignature: listed(`${prefix}_run`, [
         'nsteps',
-        'n',
+        ...this.sizes,
         ...this.symbols,
         'u',
         ...(rotating ? ['newest'] : []),
@@ -277,8 +286,20 @@ export class FortranSchemeView {
     };
   }
 
-  /** What the driver's template prints. */
-  driver(): View {
+  view(): View {
+    const { plan } = this.context;
+    return {
+      ...this.common(),
+      haloLeft: String(plan.halo[0]),
+      haloRight: String(plan.halo[1]),
+      minPoints: String(minPoints(plan)),
+      periodic: this.periodic ? [{ fillLines: haloLines('fortran', plan.halo) }] : [],
+      staged: plan.shape === 'stages' ? this.stagedStep(plan) : [],
+    };
+  }
+
+  /** What the drivers of a row and of a grid have in common. */
+  protected commonDriver(): View {
     const { plan, prefix } = this.context;
     const rotating = plan.shape === 'table';
     const started = plan.shape === 'table' && plan.start !== null;
@@ -287,12 +308,9 @@ export class FortranSchemeView {
       file: `${prefix}.f90`,
       prefix,
       extent: this.extent,
-      lower: String(1 - plan.halo[0]),
-      haloRight: String(plan.halo[1]),
       arrays: String(arraysOf(plan)),
       levels: String(levelsOf(plan)),
-      caller: this.periodic ? [] : [{ fillLines: haloLines('fortran', this.context.plan.halo) }],
-      checkArguments: ['n', ...this.symbols].join(', '),
+      checkArguments: [...this.sizes, ...this.symbols].join(', '),
       runArguments: [...(rotating ? ['newest'] : []), ...this.fillArguments].map((name) => `${name}, `).join(''),
       parameterDeclarations: scalarDeclaration(this.symbols),
       parameterLocals: localDeclaration(this.symbols),
@@ -306,7 +324,7 @@ export class FortranSchemeView {
             {
               second: second ? [{}] : [],
               arguments: [
-                'n',
+                ...this.sizes,
                 ...this.symbols,
                 'u',
                 ...(second ? ['v'] : []),
@@ -318,6 +336,17 @@ export class FortranSchemeView {
           ]
         : [],
       startless: started ? [] : [{}],
+    };
+  }
+
+  /** What the driver's template prints. */
+  driver(): View {
+    const { halo } = this.context.plan;
+    return {
+      ...this.commonDriver(),
+      lower: String(1 - halo[0]),
+      haloRight: String(halo[1]),
+      caller: this.periodic ? [] : [{ fillLines: haloLines('fortran', halo) }],
     };
   }
 }

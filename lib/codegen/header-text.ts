@@ -7,7 +7,9 @@ import { EQUATION_TEXT } from './equation-text';
 import { infix, type Assignment, type Dialect } from './expression-tree';
 import { GENERATOR_RELEASE } from './generator-release';
 import type { KernelInput, KernelLanguage, KernelOptions } from './kernel-request';
-import { arraysOf, arrayWords, levelsOf, oldestOf, type SchemeContext } from './scheme-words';
+import { layoutWords } from './grid-words';
+import type { TablePlan } from './kernel-plan';
+import { arraysOf, arrayWords, AXES, isGrid, levelsOf, oldestOf, type SchemeContext } from './scheme-words';
 import { wrapProse } from './wrap-text';
 
 const WIDTH = 92;
@@ -57,8 +59,9 @@ function orderLines({ facts, plan }: SchemeContext): string[] {
 function formulaDialect(levelOf: ReadonlyMap<string, string>): Dialect {
   return {
     literal: (value) => (value.den === 1n ? formatRational(value) : `(${formatRational(value)})`),
-    element: (array, offset) => {
-      const at = offset === 0 ? 'i' : offset < 0 ? `i-${-offset}` : `i+${offset}`;
+    element: (array, offset, across = []) => {
+      const index = (o: number, axis: number) => `${'ijk'[axis]!}${o === 0 ? '' : o < 0 ? o : `+${o}`}`;
+      const at = [offset, ...across].map(index).join(',');
       const level = levelOf.get(array);
       return level === undefined ? `${array}[${at}]` : `u[${level},${at}]`;
     },
@@ -77,7 +80,8 @@ function formulaLines({ plan }: SchemeContext): string[] {
   const where = coefficients.length > 0 ? entry('', `with ${coefficients.join(', ')}`) : [];
   if (plan.shape === 'table') {
     const node = plan.sweep.assignments[0]!.node;
-    return [...entry('Formula', `u[n+1,i] = ${infix(node, dialect)}`), ...where];
+    const at = ['i', 'j', 'k'].slice(0, plan.halos.length).join(',');
+    return [...entry('Formula', `u[n+1,${at}] = ${infix(node, dialect)}`), ...where];
   }
   const last = plan.sweeps.length - 1;
   const text = (assignment: Assignment, stage: number) => {
@@ -138,13 +142,24 @@ function stabilityLines({ bound, plan }: SchemeContext): string[] {
   }
 }
 
-function arraysLines(context: SchemeContext): string[] {
+function gridArraysLines(plan: TablePlan, language: KernelLanguage): string[] {
+  const padded = plan.halos.map(([left, right], k) => `(n${AXES[k]!} + ${left + right})`).join(' x ');
+  const ghosts = plan.halos.map(([left, right], k) => `${left} before and ${right} after along ${AXES[k]!}`).join(', ');
+  return [
+    ...entry('Arrays', `${plan.arrays} of ${padded} doubles, contiguous; ghost cells: ${ghosts}.`),
+    ...entry('', layoutWords(plan, language)),
+  ];
+}
+
+function arraysLines(context: SchemeContext, language: KernelLanguage): string[] {
   const { plan, facts } = context;
   const [left, right] = plan.halo;
-  const lines = entry(
-    'Arrays',
-    `${arraysOf(plan)} of n + ${left + right} doubles, contiguous; ghost cells: ${left} before the first point, ${right} after the last.`,
-  );
+  const lines = isGrid(plan)
+    ? gridArraysLines(plan, language)
+    : entry(
+        'Arrays',
+        `${arraysOf(plan)} of n + ${left + right} doubles, contiguous; ghost cells: ${left} before the first point, ${right} after the last.`,
+      );
   if (plan.shape === 'table') {
     lines.push(...arrayWords(plan).flatMap((a) => entry('', `${a.name}: ${a.words}`)));
     lines.push(
@@ -199,7 +214,7 @@ export function schemeHeader(context: SchemeContext, language: KernelLanguage, c
     ...conditionLines(context),
     ...(facts.order.meaning ? entry('Error', facts.order.meaning.replaceAll('lambda', 'lam')) : []),
     ...stabilityLines(context),
-    ...arraysLines(context),
+    ...arraysLines(context, language),
     ...entry('Boundary', fill),
     ...startLines(context),
     ...entry('Units', 'u in any unit; time and space enter through the dimensionless numbers only.'),
@@ -216,7 +231,7 @@ function oldestSentence({ plan }: SchemeContext): string[] {
 
 export function firstLine(
   input: KernelInput,
-  halo: readonly [number, number],
+  halos: readonly (readonly [number, number])[],
   bound: string | null,
   options: KernelOptions,
 ): string {
@@ -224,6 +239,6 @@ export function firstLine(
   return [
     `${input.callNumber} r${input.revision}`,
     ...(bound ? [bound] : []),
-    `halo ${halo[0]}|${halo[1]}, ${filled}`,
+    `halo ${halos.map(([left, right]) => `${left}|${right}`).join(' x ')}, ${filled}`,
   ].join('   ');
 }

@@ -43,6 +43,8 @@ export interface TablePlan extends SchemeBase {
   /** Names of the levels read, newest first: u, u1, u2, …; the one that is overwritten is called w. */
   readonly known: readonly string[];
   readonly keptLevels: number;
+  /** Ghost cells before and after, for x, y, z as far as there are dimensions; the first is `halo`. */
+  readonly halos: readonly (readonly [number, number])[];
   /** Arrays in all; keptLevels where the oldest is overwritten in place. */
   readonly arrays: number;
   readonly inPlace: boolean;

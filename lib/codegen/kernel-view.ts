@@ -1,6 +1,9 @@
 /** Everything that a template may print of a revision, already computed. */
+import { CONVENTIONS } from '@/lib/numerics/equation';
 import { boundOf, boundText } from './bound';
+import { CGridView } from './c-grid-view';
 import { CSchemeView } from './c-scheme-view';
+import { FortranGridView } from './fortran-grid-view';
 import { FortranSchemeView } from './fortran-scheme-view';
 import { firstLine, schemeHeader } from './header-text';
 import { none, type Planned } from './kernel-plan';
@@ -9,9 +12,10 @@ import type { View } from './kernel-source';
 import { planMethod } from './method-plan';
 import { methodHeader } from './method-header';
 import { methodDriverView, methodView, type MethodContext } from './method-view';
+import { PythonGridView } from './python-grid-view';
 import { PythonSchemeView } from './python-scheme-view';
 import { planScheme } from './scheme-plan';
-import { kernelPrefix, schemeCalling, schemeNotes, type SchemeContext } from './scheme-words';
+import { isGrid, kernelPrefix, schemeCalling, schemeNotes, type SchemeContext } from './scheme-words';
 import { planStencil } from './stencil-plan';
 import { derivativeWords, stencilDriverView, stencilHeader, stencilView, type StencilContext } from './stencil-view';
 
@@ -37,23 +41,30 @@ interface Printable {
   driver(language: KernelLanguage): DescribedDriver;
 }
 
-const SCHEME_VIEWS = { c: CSchemeView, fortran: FortranSchemeView, python: PythonSchemeView };
+const ROW_VIEWS = { c: CSchemeView, fortran: FortranSchemeView, python: PythonSchemeView };
+const GRID_VIEWS = { c: CGridView, fortran: FortranGridView, python: PythonGridView };
+
+function schemeView(context: SchemeContext, language: KernelLanguage) {
+  const { plan } = context;
+  return isGrid(plan) ? new GRID_VIEWS[language](context, plan) : new ROW_VIEWS[language](context);
+}
 
 function printableScheme(context: SchemeContext): Printable {
   const { input, options, prefix, plan, bound } = context;
+  const halos = isGrid(plan) ? plan.halos : [plan.halo];
   return {
     kernel: (language) => ({
       prefix,
-      firstLine: firstLine(input, plan.halo, boundText(bound), options),
+      firstLine: firstLine(input, halos, boundText(bound), options),
       header: schemeHeader(context, language, schemeCalling(context, language)),
-      template: 'scheme',
-      view: new SCHEME_VIEWS[language](context).view(),
+      template: isGrid(plan) ? 'grid' : 'scheme',
+      view: schemeView(context, language).view(),
       notes: schemeNotes(context, language),
     }),
     driver: (language) => ({
       prefix,
-      template: 'driver-scheme',
-      view: new SCHEME_VIEWS[language](context).driver(),
+      template: isGrid(plan) ? 'driver-grid' : 'driver-scheme',
+      view: schemeView(context, language).driver(),
     }),
   };
 }
@@ -64,7 +75,7 @@ function printableStencil(context: StencilContext): Printable {
   return {
     kernel: (language) => ({
       prefix,
-      firstLine: firstLine(input, plan.halo, what, options),
+      firstLine: firstLine(input, [plan.halo], what, options),
       header: stencilHeader(context, language),
       template: 'stencil',
       view: stencilView(context, language),
@@ -126,6 +137,7 @@ function printable(input: KernelInput, options: KernelOptions): Planned<Printabl
         bound: boundOf(
           facts,
           planned.plan.parameters.map((p) => p.symbol),
+          isGrid(planned.plan) ? CONVENTIONS[definition.equation].nonNegative : [],
         ),
         prefix,
       }),

@@ -1,7 +1,7 @@
 /** What the Python template of a scheme prints. */
 import { boundCondition, boundText } from './bound';
 import { coefficientSource, type Coefficient } from './coefficient';
-import { infix, type Assignment, type Dialect } from './expression-tree';
+import { infix, type Assignment, type Dialect, type Place } from './expression-tree';
 import { haloLines } from './halo-text';
 import type { StagesPlan, TablePlan } from './kernel-plan';
 import type { View } from './kernel-source';
@@ -13,14 +13,12 @@ import {
   minPoints,
   oldestOf,
   runAbout,
+  sizesOf,
   startAbout,
   taylorNode,
   type SchemeContext,
 } from './scheme-words';
 import { wrapStatement } from './wrap-text';
-
-/** Slices of whole arrays, for the start-up that is called once. */
-const SLICED: Dialect = { literal: PYTHON.literal, element: (array, offset) => `at(${array}, ${offset})` };
 
 const coefficientLines = (coefficients: readonly Coefficient[], symbols: readonly string[], prefix = '') =>
   coefficients.map(({ name, value }) => `${prefix}${name} = ${coefficientSource(value, symbols, PYTHON.literal)}`);
@@ -28,13 +26,15 @@ const coefficientLines = (coefficients: readonly Coefficient[], symbols: readonl
 const tuple = (names: readonly string[]) => (names.length === 1 ? `(${names[0]!},)` : names.join(', '));
 
 export class PythonSchemeView {
-  private readonly symbols: string[];
+  protected readonly symbols: string[];
+  protected readonly sizes: string[];
 
-  constructor(private readonly context: SchemeContext) {
+  constructor(protected readonly context: SchemeContext) {
     this.symbols = context.plan.parameters.map((p) => p.name);
+    this.sizes = sizesOf(context.plan);
   }
 
-  private get periodic() {
+  protected get periodic() {
     return this.context.options.boundary === 'periodic';
   }
   private get fillArguments() {
@@ -48,11 +48,23 @@ export class PythonSchemeView {
     return pythonSweep(assignments, (name) => `self.${name}`);
   }
 
+  /** Distance of a neighbour within the array. */
+  protected shift({ offset }: Place): string {
+    return String(offset);
+  }
+  /** Slices of whole arrays, for the start-up that is called once. */
+  private get sliced(): Dialect {
+    return {
+      literal: PYTHON.literal,
+      element: (array, offset, across) => `at(${array}, ${this.shift({ offset, across })})`,
+    };
+  }
+
   private sweepParts(sweep: PythonSweep) {
     return {
       names: tuple([...sweep.views.map((v) => v.name), ...sweep.scratch]),
       views: [
-        ...sweep.views.map((v) => `_part(${v.array}, a, b, ${v.offset}),`),
+        ...sweep.views.map((v) => `_part(${v.array}, a, b, ${this.shift(v)}),`),
         ...sweep.scratch.map((name) => `${name}[: b - a],`),
       ].join('\n'),
       lines: sweep.lines.join('\n'),
@@ -91,13 +103,13 @@ export class PythonSchemeView {
       terms: String(start.terms),
       fill_u: this.fill('u'),
       fill_w: this.fill('w'),
-      body: infix(taylorNode(start, plan.timeOrder), SLICED),
+      body: infix(taylorNode(start, plan.timeOrder), this.sliced),
     };
     const about = startAbout(this.context).filter((line) => !line.startsWith('work:'));
     return [
       {
         startArguments: ['levels', ...this.symbols, ...(second ? ['v'] : []), ...this.fillArguments].join(', '),
-        checkArguments: ['n', ...this.symbols].join(', '),
+        checkArguments: [...this.sizes, ...this.symbols].join(', '),
         about: about.map((line) => ({ line: line.replace(/^Start-up: makes/, 'Makes') })),
         coefficients: coefficientLines(start.coefficients, this.symbols).join('\n'),
         firstOrder: second ? [] : [{ ...loop, second: String(oldest + 1) }],
@@ -122,7 +134,7 @@ export class PythonSchemeView {
       .join('\n');
   }
 
-  private classAbout(): string[] {
+  protected classAbout(): string[] {
     const { plan } = this.context;
     if (plan.shape === 'stages')
       return [
@@ -139,7 +151,8 @@ export class PythonSchemeView {
     ];
   }
 
-  view(): View {
+  /** What the templates of a row and of a grid have in common. */
+  protected common(): View {
     const { plan, bound } = this.context;
     const condition = boundCondition(bound, { and: 'and', or: 'or', decimal: (text) => text, literal: PYTHON.literal });
     const refused = [
@@ -161,13 +174,10 @@ export class PythonSchemeView {
     const [first, ...rest] = runAbout(this.context).join(' ').split('. ');
     const fillInStep = plan.shape === 'stages' ? this.fillArguments : [];
     return {
-      haloLeft: String(plan.halo[0]),
-      haloRight: String(plan.halo[1]),
-      minPoints: String(minPoints(plan)),
       levels: String(levelsOf(plan)),
       arrays: String(arraysOf(plan)),
-      checkArguments: ['n', ...this.symbols].join(', '),
-      checkCall: ['step.n', ...this.symbols].join(', '),
+      checkArguments: [...this.sizes, ...this.symbols].join(', '),
+      checkCall: [...this.sizes.map((size) => `step.${size}`), ...this.symbols].join(', '),
       refused,
       bounded: condition
         ? [
@@ -177,7 +187,6 @@ export class PythonSchemeView {
             },
           ]
         : [],
-      periodic: this.periodic ? [{ fillLines: haloLines('python', this.context.plan.halo) }] : [],
       classAbout: this.classAbout().map((line) => ({ line })),
       initArguments: ['levels', ...this.symbols, ...fillInStep].join(', '),
       initScalars: [
@@ -186,7 +195,6 @@ export class PythonSchemeView {
       ].join('\n'),
       scratchLines: scratch.map((name) => `${name} = np.empty(size)`).join('\n'),
       turning: plan.shape === 'table' ? this.turning(plan) : [],
-      staging: plan.shape === 'stages' ? this.staging(plan) : [],
       start: plan.shape === 'table' ? this.start(plan) : [],
       runArguments: ['nsteps', 'levels', ...this.symbols, ...this.fillArguments].join(', '),
       runFirst: 'Marches nsteps steps and returns the arrays, the newest level last.',
@@ -199,15 +207,26 @@ export class PythonSchemeView {
     };
   }
 
-  /** What the driver's template prints. */
-  driver(): View {
+  view(): View {
+    const { plan } = this.context;
+    return {
+      ...this.common(),
+      haloLeft: String(plan.halo[0]),
+      haloRight: String(plan.halo[1]),
+      minPoints: String(minPoints(plan)),
+      periodic: this.periodic ? [{ fillLines: haloLines('python', plan.halo) }] : [],
+      staging: plan.shape === 'stages' ? this.staging(plan) : [],
+    };
+  }
+
+  /** What the drivers of a row and of a grid have in common. */
+  protected commonDriver(): View {
     const { plan } = this.context;
     const started = plan.shape === 'table' && plan.start !== null;
     const second = plan.timeOrder === 2;
     const fill = this.fillArguments.map((name) => `, ${name}`).join('');
     const kernelFill = (text: string) => text.replaceAll('fill_halo(', 'kernel.fill_halo(');
     return {
-      caller: this.periodic ? [] : [{ fillLines: haloLines('python', this.context.plan.halo) }],
       count: String(this.symbols.length),
       stepFill: plan.shape === 'stages' ? fill : '',
       runFill: fill,
@@ -215,6 +234,14 @@ export class PythonSchemeView {
       advance: kernelFill(this.advance()),
       start: started ? [{ second: second ? [{}] : [], startTail: `${second ? ', v' : ''}${fill}` }] : [],
       startless: started ? [] : [{}],
+    };
+  }
+
+  /** What the driver's template prints. */
+  driver(): View {
+    return {
+      ...this.commonDriver(),
+      caller: this.periodic ? [] : [{ fillLines: haloLines('python', this.context.plan.halo) }],
     };
   }
 }

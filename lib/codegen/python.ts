@@ -1,11 +1,14 @@
 /** Python with NumPy: literals, and sweeps as ufunc calls on prebuilt views with `out=`. */
 import type { Rational } from '@/lib/numerics/rational';
 import { literalSource } from './coefficient';
-import { readsOf, type Assignment, type Dialect, type Node } from './expression-tree';
+import { readsOf, type Assignment, type Dialect, type Node, type Place } from './expression-tree';
 
-/** Name of the view of an array that is shifted by `offset`: u_m1 is u[i - 1]. */
-export const viewName = (array: string, offset: number) =>
-  offset === 0 ? array : `${array}_${offset < 0 ? 'm' : 'p'}${Math.abs(offset)}`;
+/** Name of the view of an array that is shifted: u_m1 is u[i - 1], u_0_p1 on a grid the next row. */
+export function viewName(array: string, offset: number, across: readonly number[] = []): string {
+  const offsets = [offset, ...across];
+  if (offsets.every((o) => o === 0)) return array;
+  return [array, ...offsets.map((o) => (o === 0 ? '0' : `${o < 0 ? 'm' : 'p'}${Math.abs(o)}`))].join('_');
+}
 
 export const PYTHON: Dialect = { literal: (value: Rational) => literalSource(value), element: viewName };
 export const PYTHON_SUFFIX = 'py';
@@ -13,7 +16,7 @@ export const PYTHON_SUFFIX = 'py';
 export interface PythonSweep {
   readonly lines: readonly string[];
   /** Views that the lines use, targets first. */
-  readonly views: readonly { readonly name: string; readonly array: string; readonly offset: number }[];
+  readonly views: readonly ({ readonly name: string; readonly array: string } & Place)[];
   /** Names of the scratch arrays. */
   readonly scratch: readonly string[];
 }
@@ -43,7 +46,7 @@ class SweepWriter {
   }
 
   private leaf(node: Node): string | null {
-    if (node.kind === 'read') return viewName(node.array, node.offset);
+    if (node.kind === 'read') return viewName(node.array, node.offset, node.across);
     if (node.kind === 'number') return literalSource(node.value);
     if (node.kind === 'name') return this.values.get(node.name) ?? this.scalar(node.name);
     return null;
@@ -92,12 +95,14 @@ class SweepWriter {
 /** @param scalar how a coefficient or parameter is written, such as `self.a1` */
 export function pythonSweep(assignments: readonly Assignment[], scalar: (name: string) => string): PythonSweep {
   const writer = new SweepWriter(scalar);
-  const views = new Map<string, { name: string; array: string; offset: number }>();
-  const see = (array: string, offset: number) =>
-    views.set(viewName(array, offset), { name: viewName(array, offset), array, offset });
+  const views = new Map<string, PythonSweep['views'][number]>();
+  const see = (array: string, offset: number, across?: readonly number[]) => {
+    const name = viewName(array, offset, across);
+    views.set(name, { name, array, offset, across });
+  };
   for (const assignment of assignments) if (assignment.kind === 'store') see(assignment.array, 0);
   for (const assignment of assignments) {
-    for (const { array, offset } of readsOf(assignment.node)) see(array, offset);
+    for (const { array, offset, across } of readsOf(assignment.node)) see(array, offset, across);
     writer.assign(assignment);
   }
   return { lines: writer.lines, views: [...views.values()], scratch: writer.scratch };

@@ -9,6 +9,8 @@ import type { SchemePlan, StartPlan, TablePlan } from './kernel-plan';
 /** "AD 003" → "lb_ad003" */
 export const kernelPrefix = (callNumber: string) => `lb_${callNumber.toLowerCase().replace(/[^a-z0-9]/g, '')}`;
 
+export const AXES = ['x', 'y', 'z'] as const;
+
 export interface SchemeContext {
   readonly input: KernelInput;
   readonly facts: SchemeFacts;
@@ -20,6 +22,12 @@ export interface SchemeContext {
 
 /** Arrays that the caller provides: work arrays of the stages come first, u last. */
 export const arraysOf = (plan: SchemePlan) => (plan.shape === 'table' ? plan.arrays : plan.work.length + 1);
+/** Whether the kernel sweeps a grid of two or three dimensions. */
+export const isGrid = (plan: SchemePlan): plan is TablePlan => plan.shape === 'table' && plan.halos.length > 1;
+
+/** Names of the numbers of points: n along a row, nx, ny, nz on a grid. */
+export const sizesOf = (plan: SchemePlan) =>
+  isGrid(plan) ? AXES.slice(0, plan.halos.length).map((axis) => `n${axis}`) : ['n'];
 export const levelsOf = (plan: SchemePlan) => (plan.shape === 'table' ? plan.keptLevels : 1);
 export const minPoints = (plan: SchemePlan) => Math.max(1, ...plan.halo);
 
@@ -71,7 +79,9 @@ export function sweepArrays(assignments: readonly Assignment[]): { name: string;
 
 /** u + c·(dt L y), or u + b·v + c·(dt² L y): one term of the Taylor series at a point. */
 export function taylorNode({ operator }: StartPlan, timeOrder: 1 | 2): Node {
-  const base = timeOrder === 1 ? read('u', 0) : sum(read('u', 0), product(named('b'), read('v', 0)));
+  const here = readsOf(operator)[0]?.across?.map(() => 0);
+  const own = (array: string) => read(array, 0, here);
+  const base = timeOrder === 1 ? own('u') : sum(own('u'), product(named('b'), own('v')));
   return operator.kind === 'negation'
     ? difference(base, product(named('c'), operator.operand))
     : sum(base, product(named('c'), operator));
@@ -108,42 +118,52 @@ export function runAbout({ plan }: SchemeContext): string[] {
 export function schemeCalling({ plan, prefix, options }: SchemeContext, language: KernelLanguage): string[] {
   const symbols = plan.parameters.map((p) => p.name);
   const arrays = arraysOf(plan);
+  const sizes = sizesOf(plan);
+  const all = sizes.join(', ');
   const starts = plan.shape === 'table' && plan.start !== null;
   const initial = plan.timeOrder === 2 ? ['v'] : [];
   const fill = options.boundary === 'periodic' ? [] : language === 'c' ? ['fill', 'context'] : ['fill'];
   const call = (name: string, items: readonly string[]) => `${name}(${items.join(', ')})`;
   if (language === 'c')
     return [
-      `double *level[${arrays}];   each of ${prefix}_length(n) doubles`,
+      `double *level[${arrays}];   each of ${prefix}_length(${all}) doubles`,
       ...(starts
-        ? [`status = ${call(`${prefix}_start`, ['n', ...symbols, 'level', ...initial, 'work', ...fill])};`]
+        ? [`status = ${call(`${prefix}_start`, [...sizes, ...symbols, 'level', ...initial, 'work', ...fill])};`]
         : []),
-      `status = ${call(`${prefix}_run`, ['nsteps', 'n', ...symbols, 'level', ...fill])};   result in level[${arrays - 1}]`,
+      `status = ${call(`${prefix}_run`, ['nsteps', ...sizes, ...symbols, 'level', ...fill])};   result in level[${arrays - 1}]`,
       'status 0: done; other values: see the second enum. step itself checks nothing: call check once.',
     ];
   if (language === 'fortran') {
-    const shape = `u(${1 - plan.halo[0]}:n+${plan.halo[1]}, ${arrays})`;
+    const halos = isGrid(plan) ? plan.halos : [plan.halo];
+    const extent = halos.map(([left, right], k) => `${1 - left}:${sizes[k]!}+${right}`).join(', ');
+    const shape = `u(${extent}, ${arrays})`;
+    const points = sizes.map((size) => `1:${size}`).join(', ');
     return [
       `real(real64) :: ${shape}   allocated by the caller`,
       ...(starts
-        ? [`call ${call(`${prefix}_start`, ['n', ...symbols, 'u', ...initial, 'work', ...fill, 'status'])}`]
+        ? [`call ${call(`${prefix}_start`, [...sizes, ...symbols, 'u', ...initial, 'work', ...fill, 'status'])}`]
         : []),
       `newest = ${arrays}`,
-      `call ${call(`${prefix}_run`, ['nsteps', 'n', ...symbols, 'u', 'newest', ...fill, 'status'])}   result in u(1:n, newest)`,
+      `call ${call(`${prefix}_run`, ['nsteps', ...sizes, ...symbols, 'u', 'newest', ...fill, 'status'])}   result in u(${points}, newest)`,
       'status 0: done; other values: see the parameters below. step itself checks nothing: call check once.',
     ];
   }
+  const within = ([left]: readonly [number, number], size: string) => `${left}:${left} + ${size}`;
+  const inside = isGrid(plan)
+    ? plan.halos.map((halo, k) => within(halo, sizes[k]!)).reverse()
+    : [within(plan.halo, 'n')];
+  const result = `levels[-1][${inside.join(', ')}]`;
   return [
-    `levels = [numpy.zeros(length(n)) for _ in range(${arrays})]`,
+    `levels = [numpy.zeros(${isGrid(plan) ? 'shape' : 'length'}(${all})) for _ in range(${arrays})]`,
     ...(starts ? [call('start', ['levels', ...symbols, ...initial, ...fill])] : []),
-    `levels = ${call('run', ['nsteps', 'levels', ...symbols, ...fill])}   result in levels[-1][${plan.halo[0]}:${plan.halo[0]} + n]`,
+    `levels = ${call('run', ['nsteps', 'levels', ...symbols, ...fill])}   result in ${result}`,
     'Bad arguments raise ValueError. Step checks shapes when it is made, not at every call.',
   ];
 }
 
 /** Margin notes for the page. */
 export function schemeNotes({ plan }: SchemeContext, language: KernelLanguage): { anchor: string; text: string }[] {
-  const update = { c: 'w[i] = ', fortran: 'w(i) = ', python: 'np.' }[language];
+  const update = { c: 'w[i] = ', fortran: isGrid(plan) ? 'w(i,j' : 'w(i) = ', python: 'np.' }[language];
   const storage =
     plan.shape === 'table'
       ? plan.inPlace

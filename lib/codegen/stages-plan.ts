@@ -108,7 +108,9 @@ function slopeTerms(definition: LinesScheme, scheme: ScalarScheme): Map<number, 
 
 export function planStages(definition: LinesScheme, scheme: ScalarScheme): Planned<StagesPlan> {
   if (scheme.dims > 1)
-    return none(`Kernels in ${scheme.dims} dimensions are not printed yet; one-dimensional schemes are.`);
+    return none(
+      `Runge-Kutta stages in ${scheme.dims} dimensions are not printed yet; explicit tables are, and multistep lines.`,
+    );
   const tableau = readTimeMethod(definition.time, '/time', []);
   if (tableau?.kind !== 'runge-kutta' || !isExplicit(tableau))
     return none('The Runge-Kutta method is implicit; kernels are printed for explicit methods.');

@@ -10,6 +10,7 @@ import { fromPolynomial } from '@/lib/numerics/rational-function';
 import { isZero, rational } from '@/lib/numerics/rational';
 import { stencilWeights } from '@/lib/numerics/stencil-weights';
 import { combine } from './combination';
+import { componentsOf, type Place } from './expression-tree';
 import { parameterName, type StartPlan } from './kernel-plan';
 
 /** Offsets within the scheme's halo where these carry the wanted order; a wider symmetric set where not. */
@@ -27,24 +28,26 @@ function offsetsFor(derivative: number, order: number, [left, right]: readonly [
 
 export interface PlannedStart {
   readonly plan: StartPlan;
-  readonly halo: readonly [number, number];
+  readonly halos: readonly (readonly [number, number])[];
 }
 
-/** @param reach halo of the scheme itself */
+/** @param reaches halo of the scheme itself, for every dimension */
 export function planStart(
   scheme: ScalarScheme,
   facts: SchemeFacts,
   keptLevels: number,
-  reach: readonly [number, number],
+  reaches: readonly (readonly [number, number])[],
 ): PlannedStart {
   const { order } = facts;
   const inTime = order.pT ?? order.orderAtFixedParameter ?? 2;
   const inSpace = Math.max(2, order.pX ?? order.orderAtFixedParameter ?? 2);
-  const byOffset = new Map<number, Polynomial>();
-  let halo: [number, number] = [reach[0], reach[1]];
+  const byPlace = new Map<string, Place & { readonly coefficient: Polynomial }>();
+  const halos = reaches.map(([left, right]): [number, number] => [left, right]);
   for (const { powers, coefficient } of symbolTerms(scheme)) {
-    const derivative = powers[0]!;
-    const offsets = offsetsFor(derivative, inSpace, reach);
+    // Every term of every equation is a derivative along one axis.
+    const axis = powers.findIndex((power) => power > 0);
+    const derivative = powers[axis]!;
+    const offsets = offsetsFor(derivative, inSpace, reaches[axis]!);
     const weights = stencilWeights(
       offsets.map((o) => rational(o)),
       derivative,
@@ -52,21 +55,28 @@ export function planStart(
     offsets.forEach((offset, k) => {
       const weight = weights[k]!;
       if (isZero(weight)) return;
-      byOffset.set(offset, add(byOffset.get(offset) ?? [], scale(coefficient, weight)));
-      halo = [Math.max(halo[0], -offset), Math.max(halo[1], offset)];
+      const along = (at: number) => (at === axis ? offset : 0);
+      const place: Place =
+        scheme.dims === 1 ? { offset } : { offset: along(0), across: powers.slice(1).map((_, k) => along(k + 1)) };
+      const key = componentsOf(place).join(' ');
+      const sum = add(byPlace.get(key)?.coefficient ?? [], scale(coefficient, weight));
+      byPlace.set(key, { ...place, coefficient: sum });
+      const [left, right] = halos[axis]!;
+      halos[axis] = [Math.max(left, -offset), Math.max(right, offset)];
     });
   }
-  const terms = [...byOffset]
-    .filter(([, coefficient]) => coefficient.length > 0)
-    .map(([offset, coefficient]) => ({
+  const terms = [...byPlace.values()]
+    .filter(({ coefficient }) => coefficient.length > 0)
+    .map(({ offset, across, coefficient }) => ({
       array: 'y',
       offset,
+      across,
       coefficient: fromPolynomial(coefficient, scheme.parameters.length),
     }));
   const { node, coefficients } = combine(terms, new Map([['y', 's']]), scheme.parameters.map(parameterName));
   const wanted = Math.max(inTime, keptLevels > 2 ? 2 : 1);
   return {
-    halo,
+    halos,
     plan: {
       terms: scheme.timeOrder === 1 ? Math.max(2, wanted) : Math.max(1, Math.ceil(wanted / 2)),
       spaceOrder: inSpace,

@@ -2,11 +2,12 @@
 import type { DriverTask } from '@/lib/codegen/driver-protocol';
 import { gridGrowth, sampleScheme } from './characteristic';
 import { type Answers, outcomeOf } from './check';
+import { gridText, pointsOf, sized } from './grid';
 import { randomField } from './smooth-field';
 import type { Subject } from './subject';
 import { TRIAL_LANGUAGES, type FindingView, type TrialLanguage } from './trial';
 
-const POINTS = 64;
+const GRIDS: Readonly<Record<1 | 2 | 3, readonly number[]>> = { 1: [64], 2: [13, 9], 3: [7, 6, 5] };
 const STEPS = 1000;
 /** An unstable scheme marches as far as its numbers stay well within range. */
 const GROWTH_MAX = 1e100;
@@ -16,10 +17,11 @@ export function agreementTasks(subject: Subject): DriverTask[] {
   if (subject.kind === 'stencil')
     return [{ kind: 'apply', id: ID, n: 1000, spacing: 0.3, values: randomField(1000, 3) }];
   const parameters = [...subject.working[0]!];
-  const { growth } = gridGrowth(sampleScheme(subject.scheme, parameters), POINTS);
+  const grid = GRIDS[subject.scheme.dims];
+  const { growth } = gridGrowth(sampleScheme(subject.scheme, parameters), grid);
   const steps = growth > 1 + 1e-9 ? Math.min(STEPS, Math.floor(Math.log(GROWTH_MAX) / Math.log(growth))) : STEPS;
-  const levels = Array.from({ length: subject.keptLevels }, (_, l) => randomField(POINTS, l + 11));
-  return [{ kind: 'march', id: ID, n: POINTS, steps: Math.max(1, steps), parameters, levels }];
+  const levels = Array.from({ length: subject.keptLevels }, (_, l) => randomField(pointsOf(grid), l + 11));
+  return [{ kind: 'march', id: ID, ...sized(grid), steps: Math.max(1, steps), parameters, levels }];
 }
 
 /** Position of a double among all doubles, so that neighbours differ by 1. */
@@ -79,7 +81,10 @@ export function judgeAgreement(
   );
   const worst = Math.max(...pairs.map(({ ulps }) => ulps));
   const [task] = tasks;
-  const done = task?.kind === 'march' ? `${task.steps} steps on ${task.n} points` : 'One application on 1000 points';
+  const done =
+    task?.kind === 'march'
+      ? `${task.steps} steps on ${gridText(task.grid ?? [task.n])} points`
+      : 'One application on 1000 points';
   return {
     ...base,
     outcome: outcomeOf(worst === 0),

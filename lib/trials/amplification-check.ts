@@ -1,13 +1,48 @@
 /** Single waves marched by the kernel against the factors that the definition gives them. */
 import type { ApplyTask, MarchTask } from '@/lib/codegen/driver-protocol';
 import { toNumber } from '@/lib/numerics/rational';
-import { minus, modulus, over, powerOf, sampleScheme, separation, times, type Complex } from './characteristic';
+import {
+  minus,
+  modulus,
+  over,
+  powerOf,
+  sampleScheme,
+  separation,
+  times,
+  type Angle,
+  type Complex,
+} from './characteristic';
 import { notApplicable, outcomeOf, short, stateOf, type Check } from './check';
+import { anglesOf, pointsOf, sized } from './grid';
 import type { MarchSubject, StencilSubject } from './subject';
 
 const POINTS = 48;
 /** Long, middling and short waves; neither the mean nor the shortest one, whose phase a grid cannot show. */
 const WAVES = [1, 5, 12, 18, 23] as const;
+/** In several dimensions: along each axis, and across the grid, short and long. */
+const GRIDS: Readonly<Record<1 | 2 | 3, { grid: readonly number[]; waves: readonly (readonly number[])[] }>> = {
+  1: { grid: [POINTS], waves: WAVES.map((count) => [count]) },
+  2: {
+    grid: [16, 12],
+    waves: [
+      [1, 0],
+      [0, 1],
+      [3, 2],
+      [5, -4],
+      [7, 5],
+    ],
+  },
+  3: {
+    grid: [12, 10, 8],
+    waves: [
+      [1, 0, 0],
+      [0, 1, 0],
+      [0, 0, 1],
+      [2, -1, 1],
+      [5, 4, -3],
+    ],
+  },
+};
 const PHASE = 0.4;
 const STEPS_MAX = 16;
 /** Roundings of a step feed the other roots of a wave, and a double root halves the digits of its factor. */
@@ -15,19 +50,30 @@ const LIMIT = 1e-10;
 /** Below this distance between two roots their values in double precision say too little. */
 const SEPARATION_MIN = 1e-3;
 
-const waveAt = (theta: number, factor: Complex): Float64Array =>
-  Float64Array.from({ length: POINTS }, (_, j) => {
-    const angle = theta * j + PHASE;
-    return factor[0] * Math.cos(angle) - factor[1] * Math.sin(angle);
+/** Angle of the wave at every point of the grid, x running fastest. */
+function anglesAt(theta: Angle, grid: readonly number[]): Float64Array {
+  const steps = typeof theta === 'number' ? [theta] : theta;
+  return Float64Array.from({ length: pointsOf(grid) }, (_, at) => {
+    let rest = at;
+    return grid.reduce((angle, n, axis) => {
+      const place = rest % n;
+      rest = Math.floor(rest / n);
+      return angle + steps[axis]! * place;
+    }, PHASE);
   });
+}
+
+const waveAt = (theta: Angle, factor: Complex, grid: readonly number[]): Float64Array =>
+  anglesAt(theta, grid).map((angle) => factor[0] * Math.cos(angle) - factor[1] * Math.sin(angle));
 
 /** Complex amplitude of one wave in a real field, its starting phase taken off. */
-function amplitude(values: Float64Array, theta: number): Complex {
+function amplitude(values: Float64Array, theta: Angle, grid: readonly number[]): Complex {
+  const angles = anglesAt(theta, grid);
   let re = 0;
   let im = 0;
   values.forEach((value, j) => {
-    re += value * Math.cos(theta * j + PHASE);
-    im -= value * Math.sin(theta * j + PHASE);
+    re += value * Math.cos(angles[j]!);
+    im -= value * Math.sin(angles[j]!);
   });
   return [(2 * re) / values.length, (2 * im) / values.length];
 }
@@ -41,17 +87,18 @@ function stepsFor(root: Complex, largest: number): number {
 }
 
 export function amplificationCheck(subject: MarchSubject): Check {
+  const { grid, waves } = GRIDS[subject.scheme.dims];
   const cases = subject.working.flatMap((parameters, p) => {
     const sampled = sampleScheme(subject.scheme, parameters);
-    return WAVES.flatMap((count) => {
-      const theta = (2 * Math.PI * count) / POINTS;
+    return waves.flatMap((counts) => {
+      const theta = anglesOf(counts, grid);
       const roots = sampled.roots(theta);
       if (separation(roots) < SEPARATION_MIN) return [];
       const largest = Math.max(...roots.map(modulus));
       return roots
         .filter((root) => modulus(root) > 1e-2 * largest && modulus(root) > 1e-3)
         .map((root, k) => ({
-          id: `amplification:${p}:${count}:${k}`,
+          id: `amplification:${p}:${counts.join(',')}:${k}`,
           parameters,
           theta,
           root,
@@ -66,15 +113,15 @@ export function amplificationCheck(subject: MarchSubject): Check {
     tasks: cases.map(({ id, parameters, theta, root, steps }): MarchTask => ({
       kind: 'march',
       id,
-      n: POINTS,
+      ...sized(grid),
       steps,
       parameters: [...parameters],
       // Seeded with the powers of one root, the kernel must go on with that root alone.
-      levels: Array.from({ length: subject.keptLevels }, (_, l) => waveAt(theta, powerOf(root, l))),
+      levels: Array.from({ length: subject.keptLevels }, (_, l) => waveAt(theta, powerOf(root, l), grid)),
     })),
     judge: (answers) => {
       const rows = cases.map(({ id, parameters, theta, root, steps }) => {
-        const last = amplitude(stateOf(answers, id).at(-1)!, theta);
+        const last = amplitude(stateOf(answers, id).at(-1)!, theta, grid);
         const due = powerOf(root, subject.keptLevels - 1 + steps);
         const ratio = over(last, due);
         const error = modulus(minus(ratio, [1, 0])) / steps;
@@ -120,11 +167,11 @@ export function symbolCheck(subject: StencilSubject): Check {
       id,
       n: POINTS,
       spacing,
-      values: waveAt(theta, [1, 0]),
+      values: waveAt(theta, [1, 0], [POINTS]),
     })),
     judge: (answers) => {
       const rows = cases.map(({ id, theta, due, scale }) => {
-        const measured = amplitude(stateOf(answers, id).at(-1)!, theta);
+        const measured = amplitude(stateOf(answers, id).at(-1)!, theta, [POINTS]);
         const error = modulus(minus(measured, due)) / (scale * size);
         return { theta, computed: due, measured, error: Number.isFinite(error) ? error : null };
       });

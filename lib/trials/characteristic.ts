@@ -7,6 +7,7 @@ import { symbolTerms } from '@/lib/numerics/equation-terms';
 import { compileScheme, polynomialAt, type NumericScheme } from '@/lib/numerics/numeric-scheme';
 import { evaluate } from '@/lib/numerics/polynomial';
 import { complexSqrt, polynomialRoots } from '@/lib/numerics/roots';
+import { anglesOf, wavesAround } from './grid';
 
 /** Real and imaginary part. */
 export type Complex = readonly [number, number];
@@ -30,13 +31,20 @@ export function powerOf(a: Complex, k: number): Complex {
   return result;
 }
 
-/** Logarithm of the factor by which the wave e^(i·theta·j) multiplies in one step. */
-export type Symbol = (theta: number) => Complex;
+/** Angle of a wave a point, in radians: one number in one dimension, one for each of x, y, z in several. */
+export type Angle = number | readonly number[];
 
-/** A one-dimensional scheme at fixed parameter values. */
+const components = (theta: Angle): readonly number[] => (typeof theta === 'number' ? [theta] : theta);
+const partOf = (theta: Angle, part: number): Angle =>
+  typeof theta === 'number' ? theta * part : theta.map((angle) => angle * part);
+
+/** Logarithm of the factor by which the wave e^(i·theta·j) multiplies in one step. */
+export type Symbol = (theta: Angle) => Complex;
+
+/** A scheme at fixed parameter values. */
 export interface SampledScheme {
   /** One root for each kept level; [] where the newest level vanishes for this wave, which then has no next value. */
-  readonly roots: (theta: number) => Complex[];
+  readonly roots: (theta: Angle) => Complex[];
   /** The equation's own factor. For the wave equation, that of one of the two travelling waves. */
   readonly exact: Symbol;
 }
@@ -45,19 +53,22 @@ export interface SampledScheme {
 export function sampleScheme(scheme: CanonicalScheme, parameters: readonly number[]): SampledScheme {
   const compiled: NumericScheme = compileScheme(scheme);
   const terms = symbolTerms(scheme).map(({ powers, coefficient }) => ({
-    power: powers[0]!,
+    powers,
     value: evaluate(coefficient, parameters),
   }));
   return {
     roots: (theta) => {
-      const found = polynomialRoots(polynomialAt(compiled, parameters, [theta]));
+      const found = polynomialRoots(polynomialAt(compiled, parameters, components(theta)));
       const roots = Array.from(found.re, (re, k): Complex => [re, found.im[k]!]);
       return roots.every(([re]) => Number.isFinite(re)) ? roots : [];
     },
     exact: (theta) => {
       const sum = terms.reduce<Complex>(
-        (total, { power, value }) => {
-          const part = times(value, powerOf([0, theta], power));
+        (total, { powers, value }) => {
+          const part = powers.reduce<Complex>(
+            (product, power, axis) => times(product, powerOf([0, components(theta)[axis]!], power)),
+            value,
+          );
           return [total[0] + part[0], total[1] + part[1]];
         },
         [0, 0],
@@ -74,11 +85,11 @@ export const separation = (roots: readonly Complex[]) =>
     Infinity,
   );
 
-/** Largest factor over the waves 2π m / n, m ≥ 1, of a periodic grid of n points; the mean is left out. */
-export function gridGrowth(sampled: SampledScheme, n: number): { growth: number; theta: number } {
-  let worst = { growth: 0, theta: 0 };
-  for (let m = 1; m <= n / 2; m++) {
-    const theta = (2 * Math.PI * m) / n;
+/** Largest factor over the waves of a periodic grid of these points along x, y, z; the mean is left out. */
+export function gridGrowth(sampled: SampledScheme, grid: readonly number[]): { growth: number; theta: Angle } {
+  let worst: { growth: number; theta: Angle } = { growth: 0, theta: 0 };
+  for (const counts of wavesAround(grid)) {
+    const theta = anglesOf(counts, grid);
     for (const root of sampled.roots(theta)) if (modulus(root) > worst.growth) worst = { growth: modulus(root), theta };
   }
   return worst;
@@ -93,11 +104,11 @@ const nearest = (roots: readonly Complex[], to: Complex): Complex | undefined =>
 const CONTINUATION_STEPS = 64;
 
 /** The root that stands for the solution: continued from theta = 0, where it follows `symbol`. */
-export function principalRoot(sampled: SampledScheme, theta: number, symbol: Symbol): Complex | undefined {
+export function principalRoot(sampled: SampledScheme, theta: Angle, symbol: Symbol): Complex | undefined {
   let before: Complex = [1, 0];
   let last: Complex | undefined;
   for (let k = 1; k <= CONTINUATION_STEPS; k++) {
-    const at = (theta * k) / CONTINUATION_STEPS;
+    const at = partOf(theta, k / CONTINUATION_STEPS);
     // Near 0 the exact factor predicts best; later the last two roots do, which holds where roots cross.
     const predicted: Complex = k <= 2 || !last ? expOf(symbol(at)) : [2 * last[0] - before[0], 2 * last[1] - before[1]];
     const root = nearest(sampled.roots(at), predicted);

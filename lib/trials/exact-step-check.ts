@@ -5,16 +5,28 @@ import { div, neg, power, rational, toNumber, type Rational } from '@/lib/numeri
 import { outcomeOf, short, stateOf, type Answers, type Check, type Judgement } from './check';
 import { exactCoefficient } from './exact-coefficient';
 import { distanceInRoundings, type Part } from './exact-sum';
+import { pointsOf, sized } from './grid';
 import { randomField } from './smooth-field';
 import type { MarchSubject, StencilSubject } from './subject';
 
 /** No power of two, so that a loop which handles blocks of points meets its remainder. */
-const GRIDS = [37, 64] as const;
+const GRIDS: Readonly<Record<1 | 2 | 3, readonly (readonly number[])[]>> = {
+  1: [[37], [64]],
+  2: [
+    [13, 9],
+    [8, 8],
+  ],
+  3: [
+    [7, 5, 6],
+    [8, 4, 4],
+  ],
+};
 /** Exact in binary, so that dividing by its powers rounds nothing. */
 const SPACING_POWER = 3;
 
 interface Case {
   readonly id: string;
+  readonly grid: readonly number[];
   readonly levels: readonly Float64Array[];
   readonly parts: readonly Part[];
   readonly about: Record<string, unknown>;
@@ -24,8 +36,8 @@ function judge(cases: readonly Case[], operations: number, answers: Answers, wha
   // Each operation rounds once, by half a unit of a partial result that is no larger than the sum of magnitudes;
   // coefficients that are computed once round too.
   const limit = Math.max(8, 2 * operations);
-  const rows = cases.map(({ id, levels, parts, about }) => {
-    const { worst, at } = distanceInRoundings(parts, levels, stateOf(answers, id).at(-1)!);
+  const rows = cases.map(({ id, grid, levels, parts, about }) => {
+    const { worst, at } = distanceInRoundings(parts, levels, stateOf(answers, id).at(-1)!, grid);
     return { ...about, points: levels[0]!.length, roundings: Number.isFinite(worst) ? worst : null, at };
   });
   const worst = rows.reduce((largest, row) => Math.max(largest, row.roundings ?? Infinity), 0);
@@ -44,7 +56,11 @@ export function stepParts(subject: MarchSubject, parameters: readonly number[]):
   const values = scheme.terms.map((term) => exactCoefficient(term.coefficient, parameters));
   const newest = scheme.terms.findIndex((term) => toNumber(term.level) === 1);
   const lead = values[newest]!;
-  const shift = toNumber(scheme.terms[newest]!.offset[0]!);
+  const shift = scheme.terms[newest]!.offset.map(toNumber);
+  const placeOf = (offset: readonly Rational[]) => {
+    const [x = 0, ...across] = offset.map((o, axis) => toNumber(o) - shift[axis]!);
+    return across.length > 0 ? { offset: x, across } : { offset: x };
+  };
   return scheme.terms.flatMap((term, k) =>
     k === newest
       ? []
@@ -52,7 +68,7 @@ export function stepParts(subject: MarchSubject, parameters: readonly number[]):
           {
             weight: neg(div(values[k]!, lead)),
             level: toNumber(term.level) - 1 + keptLevels,
-            offset: toNumber(term.offset[0]!) - shift,
+            ...placeOf(term.offset),
           },
         ],
   );
@@ -60,20 +76,23 @@ export function stepParts(subject: MarchSubject, parameters: readonly number[]):
 
 export function exactStepCheck(subject: MarchSubject): Check {
   const cases = subject.working.flatMap((parameters, p) =>
-    GRIDS.map((n, g) => ({
+    GRIDS[subject.scheme.dims].map((grid, g) => ({
       id: `exact-step:${p}:${g}`,
+      grid,
       parameters,
-      levels: Array.from({ length: subject.keptLevels }, (_, l) => randomField(n, 100 * p + 10 * g + l + 1)),
+      levels: Array.from({ length: subject.keptLevels }, (_, l) =>
+        randomField(pointsOf(grid), 100 * p + 10 * g + l + 1),
+      ),
       parts: stepParts(subject, parameters),
       about: { parameters },
     })),
   );
   return {
     name: 'exact-step',
-    tasks: cases.map(({ id, parameters, levels }): MarchTask => ({
+    tasks: cases.map(({ id, grid, parameters, levels }): MarchTask => ({
       kind: 'march',
       id,
-      n: levels[0]!.length,
+      ...sized(grid),
       steps: 1,
       parameters: [...parameters],
       levels,
@@ -84,9 +103,10 @@ export function exactStepCheck(subject: MarchSubject): Check {
 
 export function exactStencilCheck(subject: StencilSubject): Check {
   const scale: Rational = power(rational(2), SPACING_POWER * subject.derivative);
-  const cases = GRIDS.map((n, g) => ({
+  const cases = GRIDS[1].map((grid, g) => ({
     id: `exact-step:${g}`,
-    levels: [randomField(n, g + 1)],
+    grid,
+    levels: [randomField(pointsOf(grid), g + 1)],
     parts: subject.weights.map((weight, k) => ({
       weight: rational(weight.num * scale.num, weight.den),
       level: 0,

@@ -1,13 +1,15 @@
 /** Weighted sums in exact integer arithmetic, to tell how many roundings a kernel's result is away from them. */
 import { toNumber, type Rational } from '@/lib/numerics/rational';
+import { neighbour } from './grid';
 import { RANDOM_BITS } from './smooth-field';
 
 export interface Part {
   readonly weight: Rational;
   /** Which of the given levels, oldest first. */
   readonly level: number;
-  /** In grid points. */
+  /** In grid points along x, and along y and z where there are several dimensions. */
   readonly offset: number;
+  readonly across?: readonly number[] | undefined;
 }
 
 /** A finite double as mantissa · 2^exponent. */
@@ -26,11 +28,13 @@ const EPSILON = 2 ** -52;
  * 2^−52 · Σ |weight| · |level(i + offset)|: the rounding of one sum of that size.
  * @param levels n values each, multiples of 2^−RANDOM_BITS
  * @param result n values; one that is not finite gives Infinity
+ * @param grid   points along x, y, z; without it the values are one row
  */
 export function distanceInRoundings(
   parts: readonly Part[],
   levels: readonly Float64Array[],
   result: Float64Array,
+  grid: readonly number[] = [result.length],
 ): { worst: number; at: number } {
   const n = result.length;
   const common = parts.reduce((den, { weight }) => (den % weight.den === 0n ? den : den * weight.den), 1n);
@@ -42,8 +46,8 @@ export function distanceInRoundings(
     if (!Number.isFinite(result[i]!)) return { worst: Infinity, at: i };
     let sum = 0n;
     let scale = 0;
-    parts.forEach(({ level, offset }, k) => {
-      const j = (((i + offset) % n) + n) % n;
+    parts.forEach(({ level, offset, across = [] }, k) => {
+      const j = neighbour(grid, i, [offset, ...across]);
       sum += weights[k]! * whole[level]![j]!;
       scale += sizes[k]! * Math.abs(levels[level]![j]!);
     });

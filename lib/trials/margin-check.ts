@@ -1,6 +1,7 @@
 /** Bounded just below the bound, growing just above it; or growing at any value where the facts say so. */
 import type { MarchTask, RunTask } from '@/lib/codegen/driver-protocol';
-import { gridGrowth, sampleScheme } from './characteristic';
+import { gridGrowth, sampleScheme, type Angle } from './characteristic';
+import { gridText, pointsOf, sized } from './grid';
 import { notApplicable, OUTSIDE_BOUND, outcomeOf, short, stateOf, statusOf, type Answers, type Check } from './check';
 import { randomField } from './smooth-field';
 import type { BoundEnd, MarchSubject } from './subject';
@@ -8,7 +9,17 @@ import type { BoundEnd, MarchSubject } from './subject';
 /** Past the bound by these parts of it, the first at which growth shows within the steps allowed. */
 const EXCESSES = [0.01, 0.02, 0.03, 0.05, 0.1, 0.2, 0.4] as const;
 /** Long waves need long grids: some schemes lose stability there first. */
-const GRIDS = [64, 128, 256, 512] as const;
+const GRIDS: Readonly<Record<1 | 2 | 3, readonly (readonly number[])[]>> = {
+  1: [[64], [128], [256], [512]],
+  2: [
+    [12, 12],
+    [24, 24],
+  ],
+  3: [
+    [6, 6, 6],
+    [10, 10, 10],
+  ],
+};
 /** Growth that the worst wave must reach by itself; a random field holds about 1/sqrt(n) of it. */
 const GROWTH_WANTED = 1e6;
 const STEPS_MAX = 3000;
@@ -16,7 +27,7 @@ const POINT_STEPS_MAX = 400_000;
 /** Measured logarithm of growth against the computed one. */
 const RATE_TOLERANCE = 0.25;
 
-const CALM_POINTS = 64;
+const CALM_GRIDS: Readonly<Record<1 | 2 | 3, readonly number[]>> = { 1: [64], 2: [12, 10], 3: [8, 6, 6] };
 const CALM_STEPS = [300, 900] as const;
 /** Waves that beat against each other change the norm by small factors; growth of any rate does not stop there. */
 const CALM_LIMIT = 4;
@@ -24,11 +35,11 @@ const CALM_LIMIT = 4;
 interface Growing {
   readonly value: number;
   readonly parameters: readonly number[];
-  readonly n: number;
+  readonly grid: readonly number[];
   readonly steps: number;
   /** Largest factor a step over the waves of the grid; null where the definition gives none above 1. */
   readonly rate: number | null;
-  readonly theta: number | null;
+  readonly theta: Angle | null;
 }
 
 /** A random field without its mean, which may grow linearly where the equation is of second order in time. */
@@ -43,12 +54,12 @@ const norm = (levels: readonly Float64Array[]) =>
 
 function growingAt(subject: MarchSubject, value: number, parameters: readonly number[]): Growing | null {
   const sampled = sampleScheme(subject.scheme, parameters);
-  for (const n of GRIDS) {
-    const { growth, theta } = gridGrowth(sampled, n);
+  for (const grid of GRIDS[subject.scheme.dims]) {
+    const { growth, theta } = gridGrowth(sampled, grid);
     if (growth <= 1 + 1e-9) continue;
     const steps = 2 * Math.ceil(Math.log(GROWTH_WANTED) / Math.log(growth) / 2);
-    if (steps <= STEPS_MAX && steps * n <= POINT_STEPS_MAX)
-      return { value, parameters, n, steps: Math.max(8, steps), rate: growth, theta };
+    if (steps <= STEPS_MAX && steps * pointsOf(grid) <= POINT_STEPS_MAX)
+      return { value, parameters, grid, steps: Math.max(8, steps), rate: growth, theta };
   }
   return null;
 }
@@ -57,19 +68,19 @@ const march = (
   subject: MarchSubject,
   id: string,
   parameters: readonly number[],
-  n: number,
+  grid: readonly number[],
   steps: number,
 ): MarchTask => ({
   kind: 'march',
   id,
-  n,
+  ...sized(grid),
   steps,
   parameters: [...parameters],
-  levels: Array.from({ length: subject.keptLevels }, (_, l) => meanFree(n, l + 7)),
+  levels: Array.from({ length: subject.keptLevels }, (_, l) => meanFree(pointsOf(grid), l + 7)),
 });
 
 const calmTasks = (subject: MarchSubject, id: string, parameters: readonly number[]) =>
-  CALM_STEPS.map((steps, k) => march(subject, `${id}:${k}`, parameters, CALM_POINTS, steps));
+  CALM_STEPS.map((steps, k) => march(subject, `${id}:${k}`, parameters, CALM_GRIDS[subject.scheme.dims], steps));
 
 /** How many times the norm grew between the two calm runs. */
 function calmRatio(answers: Answers, id: string): number {
@@ -77,8 +88,8 @@ function calmRatio(answers: Answers, id: string): number {
   return late === 0 ? 0 : late! / early!;
 }
 
-const growthTasks = (subject: MarchSubject, id: string, { parameters, n, steps }: Growing) =>
-  [steps / 2, steps].map((count, k) => march(subject, `${id}:${k}`, parameters, n, count));
+const growthTasks = (subject: MarchSubject, id: string, { parameters, grid, steps }: Growing) =>
+  [steps / 2, steps].map((count, k) => march(subject, `${id}:${k}`, parameters, grid, count));
 
 function measuredRate(answers: Answers, id: string, steps: number): number {
   const [half, full] = [0, 1].map((k) => norm(stateOf(answers, `${id}:${k}`, true)));
@@ -87,7 +98,7 @@ function measuredRate(answers: Answers, id: string, steps: number): number {
 
 /** One step of the kernel's own loop, which compares the parameter with the bound. */
 const probe = (subject: MarchSubject, id: string, parameters: readonly number[]): RunTask => ({
-  ...march(subject, id, parameters, CALM_POINTS, 1),
+  ...march(subject, id, parameters, CALM_GRIDS[subject.scheme.dims], 1),
   kind: 'run',
 });
 
@@ -116,7 +127,14 @@ function planEnd(subject: MarchSubject, end: BoundEnd): EndPlan {
   const value = end.bound + end.outward * 0.1 * Math.abs(end.bound);
   return {
     end,
-    outside: { value, parameters: end.vector(value), n: CALM_POINTS, steps: 1000, rate: null, theta: null },
+    outside: {
+      value,
+      parameters: end.vector(value),
+      grid: CALM_GRIDS[subject.scheme.dims],
+      steps: 1000,
+      rate: null,
+      theta: null,
+    },
   };
 }
 
@@ -146,7 +164,7 @@ function boundedCheck(subject: MarchSubject): Check {
           inside: { value: end.inside, normRatio: Number.isFinite(calm) ? calm : null, steps: CALM_STEPS },
           outside: {
             value: outside.value,
-            points: outside.n,
+            points: pointsOf(outside.grid),
             steps: outside.steps,
             computedRate: outside.rate,
             measuredRate: Number.isFinite(rate) ? rate : null,
@@ -219,8 +237,8 @@ function unstableCheck(subject: MarchSubject): Check {
         outcome: outcomeOf(agrees(rate, shown.rate)),
         measured: `x ${Number.isFinite(rate) ? rate.toPrecision(6) : 'overflow'} a step`,
         target: `x ${shown.rate!.toPrecision(6)} a step`,
-        how: `The facts say "${subject.verdict}": a random field of ${shown.n} points was marched ${shown.steps} steps at ${shown.parameters.map(short).join(', ')}, and its growth compared with the computed one within ${100 * RATE_TOLERANCE} %.`,
-        data: { ...shown, measuredRate: Number.isFinite(rate) ? rate : null },
+        how: `The facts say "${subject.verdict}": a random field of ${gridText(shown.grid)} points was marched ${shown.steps} steps at ${shown.parameters.map(short).join(', ')}, and its growth compared with the computed one within ${100 * RATE_TOLERANCE} %.`,
+        data: { ...shown, n: pointsOf(shown.grid), measuredRate: Number.isFinite(rate) ? rate : null },
       };
     },
   };

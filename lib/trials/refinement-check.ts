@@ -3,8 +3,9 @@ import type { ApplyTask, DriverTask, MarchTask, StartTask } from '@/lib/codegen/
 import { toNumber } from '@/lib/numerics/rational';
 import { expOf, minus, modulus, powerOf, type Complex } from './characteristic';
 import { notApplicable, outcomeOf, stateOf, type Answers, type Check, type Judgement } from './check';
-import { planRefinement, slopeOf, type RefinedRun } from './refinement-plan';
-import { SMOOTH_WAVES, smoothField } from './smooth-field';
+import { sized } from './grid';
+import { gridOf, planRefinement, slopeOf, type RefinedRun } from './refinement-plan';
+import { SMOOTH_WAVES, smoothField, smoothGridField } from './smooth-field';
 import type { MarchSubject, StencilSubject } from './subject';
 
 const TOLERANCE = 0.15;
@@ -14,16 +15,16 @@ const NEAR_ORDER = 0.35;
 const startId = (k: number) => `refinement:start:${k}`;
 const marchId = (k: number) => `refinement:${k}`;
 
-const exactField = (run: RefinedRun, steps: number) =>
-  smoothField(SMOOTH_WAVES, run.n, (theta) => {
+const exactField = (subject: MarchSubject, run: RefinedRun, steps: number) =>
+  smoothGridField(gridOf(subject, run), (theta) => {
     const [re, im] = run.exact(theta);
     return expOf([re * steps, im * steps]);
   });
 
 /** What the start-up routine is given: the field, and for equations of second order in time dt·u_t. */
 const initialLevels = (subject: MarchSubject, run: RefinedRun): Float64Array[] => [
-  exactField(run, 0),
-  ...(subject.scheme.timeOrder === 2 ? [smoothField(SMOOTH_WAVES, run.n, run.exact)] : []),
+  exactField(subject, run, 0),
+  ...(subject.scheme.timeOrder === 2 ? [smoothGridField(gridOf(subject, run), run.exact)] : []),
 ];
 
 function rmsDifference(a: Float64Array, b: Float64Array): number {
@@ -70,7 +71,7 @@ export function refinementCheck(subject: MarchSubject): Check {
   const marchFrom = (run: RefinedRun, k: number, levels: Float64Array[]): MarchTask => ({
     kind: 'march',
     id: marchId(k),
-    n: run.n,
+    ...sized(gridOf(subject, run)),
     steps: run.steps - (keptLevels - 1),
     parameters: [...run.parameters],
     levels,
@@ -81,7 +82,7 @@ export function refinementCheck(subject: MarchSubject): Check {
       ? ({
           kind: 'start',
           id: startId(k),
-          n: run.n,
+          ...sized(gridOf(subject, run)),
           parameters: [...run.parameters],
           levels: initialLevels(subject, run),
         } satisfies StartTask)
@@ -100,7 +101,7 @@ export function refinementCheck(subject: MarchSubject): Check {
     judge: (answers) => {
       if (started) runs.forEach((_, k) => stateOf(answers, startId(k)));
       const errors = runs.map((run, k) =>
-        rmsDifference(stateOf(answers, marchId(k)).at(-1)!, exactField(run, run.steps)),
+        rmsDifference(stateOf(answers, marchId(k)).at(-1)!, exactField(subject, run, run.steps)),
       );
       const from = started ? 'from the kernel’s own start-up' : 'from the exact field';
       const against =
@@ -114,7 +115,7 @@ export function refinementCheck(subject: MarchSubject): Check {
         plan.predictedSlope,
         `Two smooth waves marched to one time ${from} on ${runs.length} grids, ${against}; slope of the error over the three finest.`,
         {
-          grids: runs.map(({ n }) => n),
+          grids: runs.map((run) => (subject.scheme.dims === 1 ? run.n : gridOf(subject, run))),
           marchedSteps: runs.map(({ steps }) => steps),
           parameters: runs.map(({ parameters }) => parameters),
           predictedSlope: plan.predictedSlope,

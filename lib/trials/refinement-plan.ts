@@ -1,26 +1,19 @@
 /** Which grids and parameter values show an order: chosen by what the definition itself predicts there. */
-import {
-  expOf,
-  gridGrowth,
-  minus,
-  modulus,
-  powerOf,
-  principalRoot,
-  sampleScheme,
-  type Complex,
-} from './characteristic';
-import { SMOOTH_WAVES } from './smooth-field';
+import { expOf, gridGrowth, minus, modulus, powerOf, principalRoot, sampleScheme, type Symbol } from './characteristic';
+import { anglesOf, pointsOf } from './grid';
+import { SMOOTH_WAVES, waveCounts } from './smooth-field';
 import type { MarchSubject } from './subject';
 import { CONVENTIONS } from '@/lib/numerics/equation';
 
 export interface RefinedRun {
+  /** Points along every axis. */
   readonly n: number;
   readonly steps: number;
   readonly parameters: readonly number[];
   /** What is halved, in units of its largest value. */
   readonly step: number;
   /** Logarithm of the exact factor of one step. */
-  readonly exact: (theta: number) => Complex;
+  readonly exact: Symbol;
 }
 
 export interface RefinementPlan {
@@ -30,7 +23,14 @@ export interface RefinementPlan {
 
 /** Steps 1, 2/3, 1/2, 1/3, 1/4 of the coarsest: five runs over two halvings. */
 const TIMES_FINER = [1, 1.5, 2, 3, 4] as const;
-const BASES = [16, 24, 48, 96, 192] as const;
+const BASES: Readonly<Record<1 | 2 | 3, readonly number[]>> = { 1: [16, 24, 48, 96, 192], 2: [8, 16], 3: [8] };
+/** In space the points grow with the cube: one run less. */
+const finerIn = (dims: number) => (dims === 3 ? TIMES_FINER.slice(0, 4) : TIMES_FINER);
+/** Waves of so many points an axis stand for those of finer grids, which are more than can be asked one by one. */
+const GROWTH_POINTS: Readonly<Record<2 | 3, number>> = { 2: 16, 3: 8 };
+
+export const gridOf = ({ scheme }: MarchSubject, { n }: Pick<RefinedRun, 'n'>): number[] =>
+  Array.from({ length: scheme.dims }, () => n);
 /** Fine enough in space that only the steps in time matter, coarse enough for every wave of the field. */
 const POINTS_IN_TIME = 16;
 /** Point updates of one march that a trial may cost. */
@@ -53,8 +53,9 @@ const rms = (amplitudes: readonly number[]) => Math.sqrt(amplitudes.reduce((sum,
 /** Error of the principal root alone after all steps; null where roundings would reach it. */
 function predictedError(subject: MarchSubject, run: RefinedRun): number | null {
   const sampled = sampleScheme(subject.scheme, run.parameters);
-  const amplitudes = SMOOTH_WAVES.map(({ count, amplitude }) => {
-    const theta = (2 * Math.PI * count) / run.n;
+  const { dims } = subject.scheme;
+  const amplitudes = SMOOTH_WAVES.map(({ amplitude }, k) => {
+    const theta = anglesOf(waveCounts(dims)[k]!, gridOf(subject, run));
     const root = principalRoot(sampled, theta, run.exact);
     if (!root) return null;
     const [re, im] = run.exact(theta);
@@ -62,15 +63,16 @@ function predictedError(subject: MarchSubject, run: RefinedRun): number | null {
   });
   if (amplitudes.some((a) => a === null)) return null;
   const error = rms(amplitudes as number[]);
-  const roundings = 2 ** -52 * 16 * run.steps * Math.max(1, gridGrowth(sampled, run.n).growth) ** run.steps;
+  const waves = gridOf(subject, { n: dims === 1 ? run.n : Math.min(run.n, GROWTH_POINTS[dims]) });
+  const roundings = 2 ** -52 * 16 * run.steps * Math.max(1, gridGrowth(sampled, waves).growth) ** run.steps;
   return roundings < 1e-2 * error ? error : null;
 }
 
 /** Logarithm of the factor of one step that is exact in time, the space differences being the kernel's own. */
-function exactInTime(subject: MarchSubject, parameters: readonly number[]): (theta: number) => Complex {
+function exactInTime(subject: MarchSubject, parameters: readonly number[]): Symbol {
   const { spaceSymbol } = subject;
   if (!spaceSymbol) throw new RangeError('exactInTime: the subject has no space differences of its own');
-  return (theta) => spaceSymbol(parameters, theta);
+  return (theta) => spaceSymbol(parameters, typeof theta === 'number' ? theta : theta[0]!);
 }
 
 /**
@@ -86,7 +88,7 @@ function scaling({ scheme }: MarchSubject, k: number): number {
 
 function runsFor(subject: MarchSubject, parameters: readonly number[], base: number, firstSteps: number): RefinedRun[] {
   const { spaceOrder, timeOrder } = CONVENTIONS[subject.scheme.equation];
-  return TIMES_FINER.map((finer) => {
+  return finerIn(subject.scheme.dims).map((finer) => {
     if (subject.refine === 'time') {
       const scaled = parameters.map((value) => value / finer);
       return {
@@ -124,11 +126,12 @@ export function planRefinement(subject: MarchSubject, order: number): Refinement
   // The levels of the start-up carry none of the scheme's error: with many steps they are few among all.
   const multiples = subject.keptLevels === 1 ? [1, 2, 4] : subject.keptLevels === 2 ? [4, 2] : [8, 16, 4];
   let best: RefinementPlan | null = null;
-  for (const base of subject.refine === 'time' ? [POINTS_IN_TIME] : BASES)
+  for (const base of subject.refine === 'time' ? [POINTS_IN_TIME] : BASES[subject.scheme.dims])
     for (const parameters of candidates(subject))
       for (const firstSteps of multiples.map((multiple) => multiple * unit)) {
         const runs = runsFor(subject, parameters, base, firstSteps);
-        if (firstSteps < subject.keptLevels || runs.at(-1)!.n * runs.at(-1)!.steps > WORK_MAX) continue;
+        if (firstSteps < subject.keptLevels || pointsOf(gridOf(subject, runs.at(-1)!)) * runs.at(-1)!.steps > WORK_MAX)
+          continue;
         const errors = runs.slice(-3).map((run) => predictedError(subject, run));
         if (errors.some((error) => error === null)) continue;
         const predictedSlope = slopeOf(

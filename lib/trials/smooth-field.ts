@@ -1,5 +1,6 @@
 /** The fields that trials march: smooth ones of which the exact solution is known, and random ones that repeat. */
 import type { Complex } from './characteristic';
+import { pointsOf } from './grid';
 
 /** One wave of a smooth field: whole waves around the grid, amplitude and phase in radians. */
 export interface Wave {
@@ -34,6 +35,39 @@ export function smoothField(
       values[j]! += wave.amplitude * (re * Math.cos(angle) - im * Math.sin(angle));
     }
   }
+  return values;
+}
+
+/** The same on a grid of two or three dimensions: the first wave runs across it, the second one otherwise. */
+const GRID_COUNTS: readonly (readonly number[])[] = [
+  [1, 1, 1],
+  [1, -1, 0],
+];
+
+/** Whole waves along x, y, z of each smooth wave. */
+export const waveCounts = (dims: 1 | 2 | 3): number[][] =>
+  SMOOTH_WAVES.map(({ count }, k) => (dims === 1 ? [count] : [...GRID_COUNTS[k]!].slice(0, dims)));
+
+/**
+ * The two smooth waves on a periodic grid of as many points along every axis.
+ * @param factor what each wave has been multiplied by
+ */
+export function smoothGridField(grid: readonly number[], factor: (theta: readonly number[]) => Complex): Float64Array {
+  const values = new Float64Array(pointsOf(grid));
+  waveCounts(grid.length as 1 | 2 | 3).forEach((counts, k) => {
+    const { amplitude, phase } = SMOOTH_WAVES[k]!;
+    const theta = counts.map((count, axis) => (2 * Math.PI * count) / grid[axis]!);
+    const [re, im] = factor(theta);
+    for (let at = 0; at < values.length; at++) {
+      let rest = at;
+      let angle = phase;
+      grid.forEach((n, axis) => {
+        angle += theta[axis]! * (rest % n);
+        rest = Math.floor(rest / n);
+      });
+      values[at]! += amplitude * (re * Math.cos(angle) - im * Math.sin(angle));
+    }
+  });
   return values;
 }
 

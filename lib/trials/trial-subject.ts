@@ -7,7 +7,8 @@ import type { ScalarScheme } from '@/lib/numerics/canonical-scheme';
 import { CONVENTIONS } from '@/lib/numerics/equation';
 import { isZero, parseRational, toNumber } from '@/lib/numerics/rational';
 import { gridGrowth, sampleScheme } from './characteristic';
-import { chooseParameter, type ParameterChoice } from './parameter-choice';
+import { chooseParameter } from './parameter-choice';
+import { chooseByRegion, chooseSeveral, SURVEY } from './several-parameters';
 import type { BoundEnd, MarchSubject, StencilSubject, Subject } from './subject';
 
 export type SubjectAnswer =
@@ -23,45 +24,18 @@ function keptLevelsOf(scheme: ScalarScheme): number {
 function reachOf(scheme: ScalarScheme): number {
   const newest = Math.max(...scheme.terms.map(({ level }) => toNumber(level)));
   const pivot = scheme.terms.find(({ level }) => toNumber(level) === newest)!;
-  const shift = toNumber(pivot.offset[0]!);
-  return Math.max(...scheme.terms.map(({ offset }) => Math.abs(toNumber(offset[0]!) - shift)));
+  return Math.max(
+    ...scheme.terms.flatMap(({ offset }) =>
+      offset.map((o, axis) => Math.abs(toNumber(o) - toNumber(pivot.offset[axis]!))),
+    ),
+  );
 }
 
 function scalarOf(definition: SchemeDefinition): ScalarScheme | string {
   const { scheme, problems } = canonicalScheme(definition);
   if (!scheme) return problems[0]?.message ?? 'The definition cannot be read.';
-  if (scheme.form !== 'scalar' || scheme.dims !== 1) return 'Trials march one unknown in one dimension.';
+  if (scheme.form !== 'scalar') return 'Trials march one unknown.';
   return scheme;
-}
-
-/** Two or more parameters: the values of a short list that the definition itself finds stable. */
-function chooseSeveral(scheme: ScalarScheme, facts: SchemeFacts): ParameterChoice {
-  const count = scheme.parameters.length;
-  const lists = [
-    [0.3, 0.25, 0.1],
-    [0.2, 0.1, 0.1],
-    [0.1, 0.05, 0.05],
-    [0.05, 0.2, 0.1],
-    [-0.2, 0.15, 0.1],
-    [0.02, 0.01, 0.01],
-  ].map((values) => values.slice(0, count));
-  const working = lists.filter((values) => gridGrowth(sampleScheme(scheme, values), 64).growth <= 1 + 1e-12);
-  const ends = facts.stability.cuts.flatMap(({ fixed, intervals }) => {
-    const held = Object.entries(fixed);
-    const free = scheme.parameters.find((name) => !(name in fixed));
-    const hi = intervals[0]?.[1];
-    if (!free || !hi || held.length !== count - 1 || !(Number(hi) > 0)) return [];
-    const vector = (value: number) =>
-      scheme.parameters.map((name) => (name === free ? value : toNumber(parseRational(fixed[name]!))));
-    const bound = Number(hi);
-    const where = held.map(([name, value]) => `${name} = ${value}`).join(', ');
-    return [
-      { parameter: free, bound, text: `${hi} at ${where}`, inside: 0.99 * bound, outward: 1, vector } as BoundEnd,
-    ];
-  });
-  return working.length > 0
-    ? { working: working.slice(0, 3), stable: true, ends: ends.slice(0, 2), farInside: null }
-    : { working: [lists[2]!], stable: false, ends: [], farInside: null };
 }
 
 /** At fixed parameters; where several scale differently, with dt going as dx^(s/timeOrder). */
@@ -80,10 +54,11 @@ function schemeSubject(definition: SchemeDefinition, facts: SchemeFacts): Subjec
   const fractions = order.specialValues.flatMap(({ value }) =>
     /^-?\d+\/\d+$/.test(value) ? [toNumber(parseRational(value))] : [],
   );
-  const choice =
-    scheme.parameters.length === 1
-      ? chooseParameter(stability, [...special, ...fractions])
-      : chooseSeveral(scheme, facts);
+  const one = scheme.parameters.length === 1;
+  const byRegion = one ? null : chooseByRegion(scheme, facts);
+  const choice = one
+    ? chooseParameter(stability, [...special, ...fractions])
+    : (byRegion ?? chooseSeveral(scheme, facts));
   const subject: MarchSubject = {
     kind: 'march',
     scheme,
@@ -93,7 +68,7 @@ function schemeSubject(definition: SchemeDefinition, facts: SchemeFacts): Subjec
     refine: 'grid',
     spaceSymbol: null,
     ...choice,
-    checksBound: scheme.parameters.length === 1,
+    checksBound: one || byRegion !== null,
     verdict: stability.verdict,
     operations: cost.operations,
     bytes: cost.bytesDouble,
@@ -153,7 +128,9 @@ function timeMethodSubject(time: LinesScheme['time'], facts: TimeMethodFacts): S
     [0.05, 0.02],
     [0, 0.05],
   ];
-  const working = candidates.filter((values) => gridGrowth(sampleScheme(scheme, values), 64).growth <= 1 + 1e-12);
+  const working = candidates.filter(
+    (values) => gridGrowth(sampleScheme(scheme, values), SURVEY[1]).growth <= 1 + 1e-12,
+  );
   const stages = facts.stages ?? 1;
   const subject: MarchSubject = {
     kind: 'march',

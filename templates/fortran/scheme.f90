@@ -134,13 +134,13 @@ contains
 {{#each firstOrder}}
     do k = {{second}}, {{prefix}}_arrays
       {{fill_u}}
-      {{first}} = u(:, k-1)
+      {{first}} = {{older}}
       do m = {{terms}}, 1, -1
         if (mod(m, 2) == 1) then
-          call {{prefix}}_taylor({{leading}}, 1.0_wp/real(m, wp), u(:, k-1), work, u(:, k))
+          call {{prefix}}_taylor({{leading}}, 1.0_wp/real(m, wp), {{older}}, work, {{newer}})
           {{fill_k}}
         else
-          call {{prefix}}_taylor({{leading}}, 1.0_wp/real(m, wp), u(:, k-1), u(:, k), work)
+          call {{prefix}}_taylor({{leading}}, 1.0_wp/real(m, wp), {{older}}, {{newer}}, work)
           {{fill_work}}
         end if
       end do
@@ -149,15 +149,15 @@ contains
 {{#each secondOrder}}
     {{fill_u}}
     do k = 1, {{prefix}}_levels - 1
-      {{first}} = u(:, {{oldest}})
+      {{first}} = {{older}}
       do m = {{terms}}, 1, -1
         if (mod(m, 2) == 1) then
           call {{prefix}}_taylor({{leading}}, {{b}}, {{c}}, &
-            u(:, {{oldest}}), v, work, u(:, {{oldest}}+k))
+            {{older}}, v, work, {{newer}})
           {{fill_k}}
         else
           call {{prefix}}_taylor({{leading}}, {{b}}, {{c}}, &
-            u(:, {{oldest}}), v, u(:, {{oldest}}+k), work)
+            {{older}}, v, {{newer}}, work)
           {{fill_work}}
         end if
       end do

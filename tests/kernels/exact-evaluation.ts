@@ -32,11 +32,24 @@ export interface ExactValues {
   readonly sizes: Float64Array;
 }
 
-/** @param levels kept levels, oldest first */
+/** Index of the neighbour of point `at`; x runs fastest. */
+function periodicNeighbour(grid: readonly number[], at: number, offset: readonly number[]): number {
+  const strides = grid.map((_, axis) => grid.slice(0, axis).reduce((product, n) => product * n, 1));
+  return grid.reduce((index, n, axis) => {
+    const place = Math.floor(at / strides[axis]!) % n;
+    return index + strides[axis]! * ((place + offset[axis]! + 8 * n) % n);
+  }, 0);
+}
+
+/**
+ * @param levels kept levels, oldest first
+ * @param grid   points along x, y, z; one row where it is not given
+ */
 export function exactStep(
   input: KernelInput,
   parameters: readonly number[],
   levels: readonly Float64Array[],
+  grid: readonly number[] = [levels[0]!.length],
 ): ExactValues {
   if (input.definition.kind !== 'scheme') throw new RangeError('exactStep: not a scheme');
   const { scheme } = canonicalScheme(input.definition);
@@ -44,7 +57,7 @@ export function exactStep(
   const numbers = parameters.map(exactly);
   const terms = scheme.terms.map((t) => ({
     level: toNumber(t.level),
-    offset: toNumber(t.offset[0]!),
+    offset: t.offset.map(toNumber),
     coefficient: valueOf(t.coefficient, numbers),
   }));
   const newest = Math.max(...terms.map((t) => t.level));
@@ -58,7 +71,11 @@ export function exactStep(
     for (const term of terms) {
       if (term === pivot) continue;
       const age = newest - 1 - term.level;
-      const at = (i + term.offset - pivot.offset + 2 * n) % n;
+      const at = periodicNeighbour(
+        grid,
+        i,
+        term.offset.map((o, axis) => o - pivot.offset[axis]!),
+      );
       const part = neg(div(mul(term.coefficient, exact[levels.length - 1 - age]![at]!), pivot.coefficient));
       sum = add(sum, part);
       sizes[i]! += Math.abs(toNumber(part));

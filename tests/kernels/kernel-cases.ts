@@ -45,6 +45,34 @@ const table = (equation: string, terms: [number, number, string][]) => ({
   terms: terms.map(([level, offset, coefficient]) => ({ level, offset, coefficient })),
 });
 
+const grid = (equation: string, terms: [number, number[], string][]) => ({
+  kind: 'scheme',
+  form: 'table',
+  equation,
+  terms: terms.map(([level, offset, coefficient]) => ({ level, offset: offset.map(String), coefficient })),
+});
+
+/** u_tt = c² Lap u with these weights of the second difference along every axis, by leapfrog. */
+function waveOn(dims: 2 | 3, weights: readonly [centre: string, ...around: string[]]) {
+  const origin = Array<number>(dims).fill(0);
+  const [centre, ...around] = weights;
+  const neighbours = around.flatMap((weight, k) =>
+    origin.flatMap((_, axis) =>
+      [-1, 1].map((side): [number, number[], string] => [
+        0,
+        origin.map((o, at) => (at === axis ? side * (k + 1) : o)),
+        `-(${weight})*lambda^2`,
+      ]),
+    ),
+  );
+  return grid(`wave-${dims}d`, [
+    [1, origin, '1'],
+    ...neighbours,
+    [0, origin, `-(${dims})*(${centre})*lambda^2 - 2`],
+    [-1, origin, '1'],
+  ]);
+}
+
 const DEFINITIONS = {
   leapfrog2: ['AD 003', 'Leapfrog, central 2', lines('advection', [central2], leapfrog)],
   leapfrog4: ['AD 004', 'Leapfrog, central 4', lines('advection', [central4], leapfrog)],
@@ -111,6 +139,69 @@ const DEFINITIONS = {
     lines('airy', [{ kind: 'stencil', derivative: 3, offsets: ['-2', '-1', '0', '1', '2'], weights: null }], leapfrog),
   ],
   advectionDiffusion: ['AX 001', 'Forward Euler, central 2', lines('advection-diffusion', [central2, second2], euler)],
+  heat2d: [
+    'DI 013',
+    'Forward Euler, five points',
+    grid('diffusion-2d', [
+      [1, [0, 0], '1'],
+      [0, [-1, 0], '-r_x'],
+      [0, [1, 0], '-r_x'],
+      [0, [0, -1], '-r_y'],
+      [0, [0, 1], '-r_y'],
+      [0, [0, 0], '2*r_x + 2*r_y - 1'],
+    ]),
+  ],
+  heat3d: [
+    'DI 014',
+    'Forward Euler, seven points',
+    grid('diffusion-3d', [
+      [1, [0, 0, 0], '1'],
+      [0, [-1, 0, 0], '-r_x'],
+      [0, [1, 0, 0], '-r_x'],
+      [0, [0, -1, 0], '-r_y'],
+      [0, [0, 1, 0], '-r_y'],
+      [0, [0, 0, -1], '-r_z'],
+      [0, [0, 0, 1], '-r_z'],
+      [0, [0, 0, 0], '2*r_x + 2*r_y + 2*r_z - 1'],
+    ]),
+  ],
+  wave2d: ['WA 004', 'Leapfrog, five points', waveOn(2, ['-2', '1'])],
+  wave2d4: ['WA 014', 'Leapfrog, nine points in line', waveOn(2, ['-5/2', '4/3', '-1/12'])],
+  wave3d: ['WA 005', 'Leapfrog, seven points', waveOn(3, ['-2', '1'])],
+  wave3d4: ['WA 015', 'Leapfrog, thirteen points', waveOn(3, ['-5/2', '4/3', '-1/12'])],
+  donorCell: [
+    'AD 031',
+    'Donor cell in the plane',
+    grid('advection-2d', [
+      [1, [0, 0], '1'],
+      [0, [-1, 0], '-lambda_x'],
+      [0, [0, -1], '-lambda_y'],
+      [0, [0, 0], 'lambda_x + lambda_y - 1'],
+    ]),
+  ],
+  cornerTransport: [
+    'AD 032',
+    'Corner transport upwind',
+    grid('advection-2d', [
+      [1, [0, 0], '1'],
+      [0, [-1, -1], '-lambda_x*lambda_y'],
+      [0, [-1, 0], 'lambda_x*lambda_y - lambda_x'],
+      [0, [0, -1], 'lambda_x*lambda_y - lambda_y'],
+      [0, [0, 0], 'lambda_x + lambda_y - lambda_x*lambda_y - 1'],
+    ]),
+  ],
+  leapfrog2d: [
+    'AD 033',
+    'Leapfrog in the plane',
+    grid('advection-2d', [
+      [1, [0, 0], '1'],
+      [0, [1, 0], 'lambda_x'],
+      [0, [-1, 0], '-lambda_x'],
+      [0, [0, 1], 'lambda_y'],
+      [0, [0, -1], '-lambda_y'],
+      [-1, [0, 0], '-1'],
+    ]),
+  ],
   firstCentral4: ['ST 004', 'First derivative, central 4', central4],
   firstStaggered4: [
     'ST 010',

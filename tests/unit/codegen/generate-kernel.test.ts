@@ -62,7 +62,7 @@ describe('a generated kernel', () => {
         .filter((line) => !/^\s*!/.test(line));
       expect(Math.max(...lines.map((line) => line.length)), name).toBeLessThanOrEqual(132);
     }
-  });
+  }, 120_000);
 
   it('points each note of the margin to a line that is there', () => {
     for (const name of KERNEL_CASES)
