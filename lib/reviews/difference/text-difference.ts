@@ -59,6 +59,8 @@ export type LineChange =
 
 /** A changed line that keeps less than this part of its characters is shown as one gone and one added. */
 const LIKE_ENOUGH = 0.35;
+/** So far ahead is a partner looked for; farther off a likeness is chance, and the search would take long. */
+const LOOK_AHEAD = 8;
 
 function asChanged(was: string, now: string): readonly Piece[] | null {
   const pieces = wordDifference(was, now);
@@ -71,7 +73,7 @@ function replaced(was: readonly string[], now: readonly string[], wasAt: number,
   const changes: LineChange[] = [];
   let k = 0;
   for (const [j, line] of now.entries()) {
-    const partner = was.findIndex((old, at) => at >= k && asChanged(old, line) !== null);
+    const partner = was.findIndex((old, at) => at >= k && at < k + LOOK_AHEAD && asChanged(old, line) !== null);
     const pieces = partner < 0 ? null : asChanged(was[partner]!, line);
     if (!pieces) {
       changes.push({ kind: 'added', now: nowAt + j, text: line });
