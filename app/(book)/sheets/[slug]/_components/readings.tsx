@@ -19,7 +19,7 @@ function RuleLines({ rule, sheet }: { rule: readonly string[]; sheet: SheetView 
   const equation = sheet.equation ? EQUATION_LATEX[sheet.equation] : null;
   if (rule.length === 0 && !equation) return null;
   return (
-    <div className="eqn">
+    <div className="eqn" role="group" aria-label="Rule" tabIndex={0}>
       {rule.map((latex) => (
         <div key={latex} className={sizeOf(latex)}>
           <Formula latex={latex} />
