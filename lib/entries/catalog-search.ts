@@ -16,6 +16,9 @@ const plain = (text: string) =>
   text.normalize('NFD').replace(/\p{M}/gu, '').toLowerCase().replace(/[–—-]/g, ' ').trim();
 const joined = (text: string) => plain(text).replace(/\s+/g, '');
 
+/** "ad003" and "ad3" are one number. */
+const withoutZeros = (callNumber: string) => callNumber.replace(/^([a-z]{2})0+(?=\d)/, '$1');
+
 const searchedOf = (line: CatalogLine): Searched => ({
   line,
   callNumber: joined(line.callNumber),
@@ -49,6 +52,8 @@ export function catalogSearch(lines: readonly CatalogLine[]): (asked: string) =>
     const wanted = plain(asked);
     if (wanted === '') return lines;
     const whole = joined(asked);
+    const numbered = searched.filter(({ callNumber }) => withoutZeros(callNumber) === withoutZeros(whole));
+    if (numbered.length > 0) return numbered.map(({ line }) => line);
     // A name that holds the text with its spaces and hyphens closed up is what was meant; the fuzzy matches follow.
     const exact = searched.filter(
       ({ names, callNumber, authors }) =>
