@@ -13,13 +13,7 @@ import { trials } from '../schema/trials';
 import { findLatestTrial } from './latest-trial';
 import { listRemarks } from './remarks';
 import { findReview } from './revisions';
-import {
-  findReplacement,
-  listSignatures,
-  listUses,
-  listVisibleRevisions,
-  revisionLine,
-} from './sheet-parts';
+import { findReplacement, listSignatures, listUses, listVisibleRevisions, revisionLine } from './sheet-parts';
 import { type Viewer, visibleTo } from './visible-to';
 
 /** A refused trial has tried nothing. */

@@ -1,5 +1,12 @@
 /** Sturm chains over Z: how many distinct real roots lie in an interval, decided by signs alone. */
-import { content, derivative, type IntegerPolynomial, leading, pseudoRemainder, signAt } from '@/lib/numerics/integer-polynomial';
+import {
+  content,
+  derivative,
+  type IntegerPolynomial,
+  leading,
+  pseudoRemainder,
+  signAt,
+} from '@/lib/numerics/integer-polynomial';
 import type { Rational } from '@/lib/numerics/rational';
 
 /** The end of an interval: a rational number or an infinity. */
