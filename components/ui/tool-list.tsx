@@ -19,7 +19,6 @@ export function ToolList({ role, waiting }: ToolListProps) {
       {tool.name}
       {waiting?.[tool.href] ? (
         <span className="n">
-          <span className="sr">, </span>
           {waiting[tool.href]}
           <span className="sr"> waiting</span>
         </span>
