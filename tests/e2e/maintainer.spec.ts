@@ -40,7 +40,7 @@ async function sign(page: Page, sentence: string, button: string): Promise<void>
   const decision = page.getByRole('form', { name: 'Decision' });
   await decision.getByRole('radio', { name: /^Vet/ }).check();
   for (const point of Object.values(REVIEW_POINT_TEXT)) await decision.getByRole('checkbox', { name: point }).check();
-  await decision.getByLabel('Note for the book').fill(sentence);
+  await decision.getByRole('textbox', { name: 'Note for the book' }).fill(sentence);
   await decision.getByRole('button', { name: button, exact: true }).click();
   await expect(decision.getByRole('status')).toHaveText('Signed.');
 }
@@ -85,7 +85,7 @@ test('a maintainer returns a revision, its author corrects it, two vet it, and a
 
     const decision = page.getByRole('form', { name: 'Decision' });
     await decision.getByRole('radio', { name: /^Return/ }).check();
-    await decision.getByLabel('What must change').fill('The notes leave the sign of c open.');
+    await decision.getByRole('textbox', { name: 'What must change' }).fill('The notes leave the sign of c open.');
     await decision.getByRole('button', { name: 'Return to its author' }).click();
     await expect(page.getByText('Returned to its author.').first()).toBeVisible();
     await expect(decision.getByRole('button', { name: 'Return to its author' })).toBeDisabled();
