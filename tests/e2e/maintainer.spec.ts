@@ -81,7 +81,7 @@ test('a maintainer returns a revision, its author corrects it, two vet it, and a
     await page.getByRole('button', { name: 'Remark on the notes' }).click();
     await page.getByLabel('Remark on the notes').fill('Say for which sign of c this is the upwind side.');
     await page.getByRole('button', { name: 'Remark', exact: true }).click();
-    await expect(page.getByText('Say for which sign of c this is the upwind side.')).toBeVisible();
+    await expect(page.getByRole('article', { name: 'Remark of Tomas Aalto on notes' })).toBeVisible();
 
     const decision = page.getByRole('form', { name: 'Decision' });
     await decision.getByRole('radio', { name: /^Return/ }).check();
