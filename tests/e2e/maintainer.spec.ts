@@ -136,6 +136,6 @@ test('a maintainer returns a revision, its author corrects it, two vet it, and a
     await page.getByRole('button', { name: 'Copy kernel', exact: true }).click();
     await expect(page.getByRole('button', { name: 'Copied' })).toBeVisible();
     expect(await page.evaluate(() => navigator.clipboard.readText())).toContain(CALL_NUMBER);
-    await expect(page.locator('#remarks')).toContainText('For c > 0; the notes say so now.');
+    await expect(page.locator('#remarks')).toContainText('settled by Ilse Quist');
   });
 });
