@@ -9,7 +9,7 @@ import { remarks } from '@/db/schema/reviews';
 import { generateKernel } from '@/lib/codegen/generate-kernel';
 import { KernelOptions } from '@/lib/codegen/kernel-request';
 import type { Actor } from '@/lib/people/actor';
-import { Refusal } from '@/lib/refusal';
+import type { Refusal } from '@/lib/refusal';
 import { answerRemark } from '@/lib/reviews/answer-remark';
 import { threadsOf } from '@/lib/reviews/remark';
 import { reopenRemark, settleRemark } from '@/lib/reviews/settle-remark';
