@@ -173,6 +173,8 @@ test.describe('a forgotten password', () => {
     const elsewhere = await aVisitor(browser);
     await elsewhere.page.goto('/sign-in');
     await elsewhere.page.getByRole('link', { name: 'Forgotten your password?' }).click();
+    // The page before has a field of the same name.
+    await expect(elsewhere.page.getByRole('heading', { name: 'A new password' })).toBeVisible();
     await elsewhere.page.getByLabel('E-mail address').fill(email);
     await breaksNoRule(elsewhere.page, 'asking for a new password');
     await elsewhere.page.getByRole('button', { name: 'Send me a letter' }).click();
