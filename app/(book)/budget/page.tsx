@@ -109,7 +109,7 @@ export default async function BudgetPage({ searchParams }: PageProps<'/budget'>)
         <p className="small q">
           Kept cases:{' '}
           {cases.map((kept) => (
-            <Link key={kept.id} href={`/budget/cases/${kept.id}` as Route}>
+            <Link key={kept.id} prefetch={false} href={`/budget/cases/${kept.id}` as Route}>
               {kept.name}{' '}
             </Link>
           ))}

@@ -27,7 +27,9 @@ export function Cases({ cases, question, name, origin }: CasesProps) {
         <ul>
           {cases.map((kept) => (
             <li key={kept.id}>
-              <Link href={`/budget/cases/${kept.id}` as Route}>{kept.name}</Link>
+              <Link prefetch={false} href={`/budget/cases/${kept.id}` as Route}>
+                {kept.name}
+              </Link>
               <CopyText className="word" text={`${origin}/budget/cases/${kept.id}`}>
                 Copy link
               </CopyText>
