@@ -9,6 +9,8 @@ export default defineConfig({
   workers: 1,
   // A page may be shown while the worker compiles on the same two cores.
   timeout: 180_000,
+  // A site that compiles kernels on two cores may once be too slow for a page; the list names what needed a second try.
+  retries: 1,
   expect: { timeout: 20_000 },
   use: {
     baseURL: process.env.LEVELBOOK_URL ?? 'http://127.0.0.1:3000',
